@@ -1,0 +1,182 @@
+import type { QuantityInput, WordInput } from "../functions/definition.js";
+import { isPlainNumberKind } from "../units/kind.js";
+import { nearest } from "../units/nearest.js";
+import { baseSlope, one, toBase, type Unit } from "../units/unit.js";
+import type { CallProblem } from "./callProblem.js";
+import { type Cell, CellError } from "./cell.js";
+import { cellAt } from "./column.js";
+import type { InputColumns } from "./inputColumns.js";
+import { isWithin, openRange, rangeProblem } from "./range.js";
+import { fits, readCell, valueText } from "./readCell.js";
+
+/** Rows are read in blocks of this many, so that what one block needs stays in the processor's cache. */
+export const blockRows = 1024;
+
+/** One input of a block of rows, in base units. */
+export interface BlockReader {
+  readonly base: Float64Array;
+  readonly upper: Float64Array;
+  readonly lower: Float64Array;
+  /** How many uncertainties each row states: 0, 1 (both sides alike) or 2. */
+  readonly sides: Uint8Array;
+  /** Whether any row of the block states one. */
+  uncertain: boolean;
+  /** Reads rows from `from` on; where one cannot be read, its base value is NaN and it is reported. */
+  read(from: number, rows: number, report: Report): void;
+}
+
+export interface Report {
+  /** The row, counted within the block, has no answer. */
+  value(row: number, problem: CallProblem | CellError): void;
+  /** The row has an answer whose uncertainty is not known. */
+  sigma(row: number, problem: CallProblem | CellError): void;
+}
+
+export function quantityReader(cells: InputColumns, input: QuantityInput, size: number): BlockReader {
+  const { quantity } = input;
+  const range = openRange(quantity);
+  const [column, ...sigmaColumns] = cells.columns;
+  const [header = { header: undefined, unit: undefined, problem: undefined }, ...sigmaHeaders] = cells.headers;
+  const base = new Float64Array(size);
+  const uncertainSize = column && (sigmaColumns.length > 0 || column.others) ? size : 0;
+  const upper = new Float64Array(uncertainSize);
+  const lower = new Float64Array(uncertainSize);
+  const sides = new Uint8Array(uncertainSize);
+  const plain = isPlainNumberKind(quantity.kind);
+  const stated = header.problem ? undefined : (header.unit ?? (plain ? one : undefined));
+  const fastUnit = stated && !stated.logarithm && fits(stated, quantity.kind) ? stated : undefined;
+
+  function readOther(row: number, cell: Cell, at: number, report: Report): void {
+    if (cell === null && input.fallback === 0) {
+      base[row] = 0;
+      return;
+    }
+    const reading = readCell(input.name, cell, header, quantity.kind);
+    if (reading instanceof CellError || "about" in reading) {
+      base[row] = Number.NaN;
+      report.value(row, reading);
+      return;
+    }
+    const value = toBase(reading.unit, reading.value);
+    base[row] = value;
+    if (!isWithin(range, value)) {
+      base[row] = Number.NaN;
+      report.value(row, rangeProblem(input.name, quantity, value, valueText(reading.value, reading.unit)));
+    }
+    if (reading.upper !== undefined && reading.lower !== undefined) {
+      const slope = baseSlope(reading.unit, value);
+      setSigma(row, reading.upper * slope, reading.lower * slope, reading.upper === reading.lower ? 1 : 2);
+    } else if (sigmaColumns.length > 0) {
+      readSigmas(row, reading.unit, value, at, report);
+    }
+  }
+
+  function setSigma(row: number, above: number, below: number, count: number): void {
+    upper[row] = above;
+    lower[row] = below;
+    sides[row] = count;
+    reader.uncertain = true;
+  }
+
+  function readSigmas(row: number, unit: Unit, value: number, at: number, report: Report): void {
+    const parts: number[] = [];
+    for (let index = 0; index < sigmaColumns.length; index++) {
+      const name = `uncertainty of ${input.name}`;
+      const own = sigmaHeaders[index]!;
+      const sigmaHeader = own.unit || own.problem ? own : { ...own, unit };
+      const reading = readCell(name, cellAt(sigmaColumns[index]!, at), sigmaHeader, quantity.kind);
+      if (reading instanceof CellError || "about" in reading) {
+        report.sigma(row, reading);
+        parts.push(0);
+      } else {
+        parts.push(Math.abs(reading.value) * baseSlope(reading.unit, value));
+      }
+    }
+    setSigma(row, parts[0]!, parts.at(-1)!, sigmaColumns.length);
+  }
+
+  /** The common case, a column of numbers under one unit, in loops that allocate nothing and divide only if they must. */
+  function readNumbers(unit: Unit, numbers: Float64Array, from: number, rows: number, report: Report): void {
+    const { times, over, plus } = unit;
+    const { lower: least, upper: most } = range;
+    let outside = 0;
+    if (over === 1 && plus === 0) {
+      for (let row = 0; row < rows; row++) {
+        const value = numbers[from + row]! * times;
+        base[row] = value;
+        if (!(value > least && value < most)) outside++;
+      }
+    } else {
+      for (let row = 0; row < rows; row++) {
+        const value = (numbers[from + row]! * times) / over + plus;
+        base[row] = value;
+        if (!(value > least && value < most)) outside++;
+      }
+    }
+    for (let row = 0; row < rows && outside > 0; row++) {
+      if (!isWithin(range, base[row]!)) readOther(row, cellAt(column!, from + row), from + row, report);
+    }
+  }
+
+  function read(from: number, rows: number, report: Report): void {
+    reader.uncertain = false;
+    sides.fill(0);
+    if (!column) {
+      base.fill(input.fallback!, 0, rows);
+    } else if (fastUnit && sigmaColumns.length === 0 && !column.others) {
+      readNumbers(fastUnit, column.numbers, from, rows, report);
+    } else {
+      for (let row = 0; row < rows; row++) readOther(row, cellAt(column, from + row), from + row, report);
+    }
+  }
+
+  const reader: BlockReader = { base, upper, lower, sides, uncertain: false, read };
+  return cells.single ? singleReader(reader) : reader;
+}
+
+/** Reads its one cell once and serves it to every row. */
+function singleReader(reader: BlockReader): BlockReader {
+  let valueProblem: CallProblem | CellError | undefined;
+  let sigmaProblem: CallProblem | CellError | undefined;
+  reader.read(0, 1, {
+    value: (_, problem) => {
+      valueProblem ??= problem;
+    },
+    sigma: (_, problem) => {
+      sigmaProblem ??= problem;
+    },
+  });
+  for (const array of [reader.base, reader.upper, reader.lower, reader.sides]) array.fill(array[0]!);
+  return {
+    ...reader,
+    read: (_, rows, report) => {
+      for (let row = 0; row < rows && (valueProblem || sigmaProblem); row++) {
+        if (valueProblem) report.value(row, valueProblem);
+        if (sigmaProblem) report.sigma(row, sigmaProblem);
+      }
+    },
+  };
+}
+
+/** Words become their place in the definition's list; a blank is the first. */
+export function wordReader(cells: InputColumns, input: WordInput, size: number): BlockReader {
+  const [column] = cells.columns;
+  const base = new Float64Array(size);
+  const none = new Float64Array(0);
+  const codes = new Map(input.words.map(({ word }, code) => [word.toLowerCase(), code]));
+  const words = input.words.map(({ word }) => word);
+  const read = (from: number, rows: number, report: Report) => {
+    for (let row = 0; row < rows && column; row++) readWord(row, cellAt(column, from + row), report);
+  };
+  const readWord = (row: number, cell: Cell, report: Report) => {
+    const code = cell === null || cell === "" ? 0 : codes.get(String(cell).trim().toLowerCase());
+    base[row] = code ?? Number.NaN;
+    if (cell instanceof CellError) report.value(row, cell);
+    else if (code === undefined) {
+      const text = typeof cell === "string" ? cell : String(cell);
+      report.value(row, { about: "word", input: input.name, text, words, nearest: nearest(text, words) });
+    }
+  };
+  const reader: BlockReader = { base, upper: none, lower: none, sides: new Uint8Array(0), uncertain: false, read };
+  return cells.single && column ? singleReader(reader) : reader;
+}

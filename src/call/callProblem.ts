@@ -1,0 +1,87 @@
+import type { Bound } from "../functions/quantity.js";
+import type { Kind } from "../units/kind.js";
+import type { UnitProblem } from "../units/problem.js";
+import type { Unit } from "../units/unit.js";
+
+/** A header cell as it stands in the worksheet. */
+export interface HeaderCell {
+  readonly text: string;
+  readonly address: string | undefined;
+  /** A number where a header belongs: the header row was not kept in place when the formula was filled down. */
+  readonly isNumber: boolean;
+}
+
+/** Where a unit was written. */
+export type UnitPlace =
+  | { readonly place: "header"; readonly header: HeaderCell }
+  | { readonly place: "text"; readonly text: string };
+
+/**
+ * Why a call has no answer, as facts. `input` is the name of an input as the definition gives it, or
+ * "uncertainty of ..." for a column beside it. Sentences are made in explain.ts and nowhere else.
+ */
+export type CallProblem =
+  | { readonly about: "too many arguments"; readonly given: number; readonly most: number }
+  | { readonly about: "missing"; readonly input: string }
+  | { readonly about: "blank"; readonly input: string }
+  | {
+      readonly about: "no unit";
+      readonly input: string;
+      readonly value: string;
+      readonly header: HeaderCell | undefined;
+    }
+  | { readonly about: "unit"; readonly input: string; readonly at: UnitPlace; readonly unit: UnitProblem }
+  | {
+      readonly about: "wrong kind";
+      readonly input: string;
+      readonly value: string;
+      readonly unit: Unit;
+      readonly wanted: Kind;
+      readonly at: UnitPlace;
+    }
+  | {
+      readonly about: "disagreement";
+      readonly input: string;
+      readonly text: string;
+      readonly unit: Unit;
+      readonly header: HeaderCell;
+      readonly headerUnit: Unit;
+    }
+  | {
+      readonly about: "not a number";
+      readonly input: string;
+      readonly value: string;
+      readonly hint: string | undefined;
+    }
+  | {
+      readonly about: "bound";
+      readonly input: string;
+      readonly value: string;
+      readonly bound: Bound;
+      readonly side: "lower" | "upper";
+    }
+  | { readonly about: "zero or blank"; readonly input: string; readonly bound: Bound }
+  | { readonly about: "beyond numbers"; readonly input: string; readonly value: string }
+  | {
+      readonly about: "word";
+      readonly input: string;
+      readonly text: string;
+      readonly words: readonly string[];
+      readonly nearest: string | undefined;
+    }
+  | {
+      readonly about: "lengths";
+      readonly input: string;
+      readonly rows: number;
+      readonly other: string;
+      readonly otherRows: number;
+    }
+  | { readonly about: "shape"; readonly input: string; readonly rows: number; readonly columns: number }
+  | { readonly about: "header count"; readonly given: number; readonly inputs: number; readonly columns: number }
+  | { readonly about: "no result"; readonly result: string; readonly values: string }
+  | { readonly about: "result unit missing"; readonly header: string | undefined }
+  | { readonly about: "result unit"; readonly header: string; readonly unit: UnitProblem }
+  | { readonly about: "result kind"; readonly header: string; readonly unit: Unit; readonly wanted: Unit }
+  | { readonly about: "several rows"; readonly rows: number }
+  | { readonly about: "no unit stated"; readonly text: string }
+  | { readonly about: "unknown name"; readonly text: string; readonly nearest: string | undefined };

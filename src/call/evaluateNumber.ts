@@ -1,0 +1,126 @@
+import type { NumberDefinition } from "../functions/definition.js";
+import { baseSlope, type Unit } from "../units/unit.js";
+import { type BlockReader, blockRows, quantityReader, type Report, wordReader } from "./blockReader.js";
+import type { CallProblem } from "./callProblem.js";
+import { CellError } from "./cell.js";
+import { cellProblem } from "./cellProblem.js";
+import type { Block } from "./column.js";
+import type { CallInputs } from "./inputColumns.js";
+import { type OpenRange, openRange } from "./range.js";
+import { ResultColumns } from "./resultColumns.js";
+import { slopeScratch, slopes } from "./slopes.js";
+
+/** Quantities in, one quantity out: reads, computes, propagates and converts, block by block. */
+export function evaluateNumber(definition: NumberDefinition, call: CallInputs, unit: Unit): Block {
+  const { rows } = call;
+  const size = Math.min(rows, blockRows);
+  const readers = call.inputs.map((cells) =>
+    cells.input.takes === "word"
+      ? wordReader(cells, cells.input, size)
+      : quantityReader(cells, cells.input as never, size),
+  );
+  const bases = readers.map((reader) => reader.base);
+  const results = new ResultColumns(rows);
+  const values = new Float64Array(size);
+  const range = openRange(definition.result.quantity);
+  const uncertainty = new BlockUncertainty(definition, readers, bases, size);
+  for (let from = 0; from < rows; from += blockRows) {
+    const count = Math.min(blockRows, rows - from);
+    const report = reportTo(results, definition, from);
+    for (const reader of readers) reader.read(from, count, report);
+    definition.compute(count, values, ...bases);
+    convert(values, count, unit, range, results.numbers, from, (row) => {
+      results.fail(from + row, cellProblem(definition, noResult(definition, call, from + row)));
+    });
+    if (readers.some((reader) => reader.uncertain)) uncertainty.propagate(values, count, unit, results, from);
+  }
+  return results.block();
+}
+
+/** Base units to the result's unit; a value outside the result's own range is no answer. */
+function convert(
+  values: Float64Array,
+  rows: number,
+  unit: Unit,
+  range: OpenRange,
+  out: Float64Array,
+  from: number,
+  fail: (row: number) => void,
+): void {
+  const { times, over, plus, logarithm } = unit;
+  for (let row = 0; row < rows; row++) {
+    const value = values[row]!;
+    const linear = ((value - plus) * over) / times;
+    const result = !logarithm ? linear : logarithm === "log10" ? Math.log10(linear) : Math.log(linear);
+    out[from + row] = result;
+    if (!(value > range.lower && value < range.upper && Math.abs(result) < Number.POSITIVE_INFINITY)) fail(row);
+  }
+}
+
+function reportTo(results: ResultColumns, definition: NumberDefinition, from: number): Report {
+  const error = (problem: CallProblem | CellError) =>
+    problem instanceof CellError ? problem : cellProblem(definition, problem);
+  return {
+    value: (row, problem) => results.fail(from + row, error(problem)),
+    sigma: (row, problem) => results.failSigma(from + row, error(problem)),
+  };
+}
+
+function noResult(definition: NumberDefinition, call: CallInputs, row: number): CallProblem {
+  const values = call.inputs
+    .filter(({ columns }) => columns.length > 0)
+    .map(({ input, columns, headers, single }) => {
+      const at = single ? 0 : row;
+      const cell = columns[0]!.others?.[at] ?? columns[0]!.numbers[at];
+      const unit = typeof cell === "number" ? headers[0]?.unit?.text : undefined;
+      return `${input.name} ${cell}${unit && unit !== "1" ? ` ${unit}` : ""}`;
+    });
+  return { about: "no result", result: definition.result.quantity.name, values: values.join(", ") };
+}
+
+/** First-order propagation with independent inputs, each side apart (JCGM 100, 5.1.2). */
+class BlockUncertainty {
+  private readonly scratch;
+  private readonly slope: Float64Array;
+  private readonly above: Float64Array;
+  private readonly below: Float64Array;
+  private readonly sides: Uint8Array;
+
+  constructor(
+    private readonly definition: NumberDefinition,
+    private readonly readers: readonly BlockReader[],
+    private readonly bases: readonly Float64Array[],
+    size: number,
+  ) {
+    this.scratch = slopeScratch(size);
+    this.slope = new Float64Array(size);
+    this.above = new Float64Array(size);
+    this.below = new Float64Array(size);
+    this.sides = new Uint8Array(size);
+  }
+
+  propagate(values: Float64Array, rows: number, unit: Unit, results: ResultColumns, from: number): void {
+    const { above, below, sides, slope } = this;
+    above.fill(0);
+    below.fill(0);
+    sides.fill(0);
+    this.definition.inputs.forEach((input, index) => {
+      const reader = this.readers[index]!;
+      if (!reader.uncertain || input.takes !== "quantity") return;
+      slopes(this.definition.compute, input.quantity, index, this.bases, values, rows, this.scratch, slope);
+      for (let row = 0; row < rows; row++) {
+        if (reader.sides[row] === 0) continue;
+        const up = slope[row]! * reader.upper[row]!;
+        const down = slope[row]! * reader.lower[row]!;
+        above[row]! += slope[row]! >= 0 ? up * up : down * down;
+        below[row]! += slope[row]! >= 0 ? down * down : up * up;
+        sides[row] = Math.max(sides[row]!, reader.sides[row]!);
+      }
+    });
+    for (let row = 0; row < rows; row++) {
+      if (sides[row] === 0 || Number.isNaN(values[row])) continue;
+      const scale = 1 / Math.abs(baseSlope(unit, values[row]!));
+      results.setSigma(from + row, Math.sqrt(above[row]!) * scale, Math.sqrt(below[row]!) * scale, sides[row]!);
+    }
+  }
+}

@@ -1,0 +1,79 @@
+import type { Definition, Input } from "../functions/definition.js";
+import { assignHeaders } from "./assignHeaders.js";
+import type { CallProblem, HeaderCell } from "./callProblem.js";
+import type { Column } from "./column.js";
+import { type HeaderUnit, headerUnit, noHeader } from "./headerUnit.js";
+
+/** The cells one input was given, with what their headers say; no columns where the input was left out. */
+export interface InputColumns {
+  readonly input: Input;
+  /** Value, then uncertainty, or upper and lower uncertainty. */
+  readonly columns: readonly Column[];
+  readonly headers: readonly HeaderUnit[];
+  /** One cell serves every row. */
+  readonly single: boolean;
+}
+
+/** The inputs of a call, ready to be read row by row. */
+export interface CallInputs {
+  readonly rows: number;
+  readonly inputs: readonly InputColumns[];
+}
+
+/** What was handed over for one input: its columns, of `rows` cells each, or none. */
+export interface GivenCells {
+  readonly rows: number;
+  readonly columns: readonly Column[];
+}
+
+export function callInputs(
+  definition: Definition,
+  given: readonly (GivenCells | undefined)[],
+  headers: readonly HeaderCell[],
+): CallInputs | CallProblem {
+  const { inputs } = definition;
+  for (let index = 0; index < inputs.length; index++) {
+    const input = inputs[index]!;
+    const cells = given[index];
+    if (!cells) {
+      if (isRequired(input)) return { about: "missing", input: input.name };
+    } else if (cells.columns.length > (takesHeader(input) ? 3 : 1) || cells.columns.length === 0) {
+      return { about: "shape", input: input.name, rows: cells.rows, columns: cells.columns.length };
+    }
+  }
+  const lengths = inputs.map((_, index) => given[index]?.rows ?? 1);
+  const longest = lengths.findIndex((rows) => rows !== 1);
+  const rows = longest < 0 ? 1 : lengths[longest]!;
+  const unequal = lengths.findIndex((length) => length !== 1 && length !== rows);
+  if (unequal >= 0) {
+    const [input, other] = [inputs[unequal]!.name, inputs[longest]!.name];
+    return { about: "lengths", input, rows: lengths[unequal]!, other, otherRows: rows };
+  }
+  const headed = inputs.filter(takesHeader);
+  const widths = headed.map((input) => given[inputs.indexOf(input as never)]?.columns.length ?? 0);
+  const assigned = assignHeaders(headers, widths);
+  if ("about" in assigned) return assigned;
+  return {
+    rows,
+    inputs: inputs.map((input, index) => {
+      const cells = given[index];
+      const own = takesHeader(input) ? assigned[headed.indexOf(input)]! : [];
+      const columns = cells?.columns ?? [];
+      const names = columns.map((_, column) => (column === 0 ? input.name : `uncertainty of ${input.name}`));
+      return {
+        input,
+        columns,
+        headers: names.map((name, column) => (own[column] ? headerUnit(name, own[column]) : noHeader)),
+        single: lengths[index] === 1,
+      };
+    }),
+  };
+}
+
+function takesHeader(input: Input): boolean {
+  return input.takes === "quantity" || input.takes === "any quantity";
+}
+
+function isRequired(input: Input): boolean {
+  return input.takes !== "word" && !(input.takes === "quantity" && input.fallback !== undefined);
+}

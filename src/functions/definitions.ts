@@ -1,0 +1,51 @@
+import type { Definition } from "./definition.js";
+import { axis } from "./orbit/axis.js";
+import { period } from "./orbit/period.js";
+import { planetSpeed } from "./orbit/planetSpeed.js";
+import { starAxis } from "./orbit/starAxis.js";
+import { starSpeed } from "./orbit/starSpeed.js";
+import { totalMass } from "./orbit/totalMass.js";
+import { massFunction } from "./reflex/massFunction.js";
+import { minMass } from "./reflex/minMass.js";
+import { planetMass } from "./reflex/planetMass.js";
+import { planetShift } from "./reflex/planetShift.js";
+import { reflex } from "./reflex/reflex.js";
+import { shiftMass } from "./reflex/shiftMass.js";
+import { air } from "./shift/air.js";
+import { lineShift } from "./shift/lineShift.js";
+import { pixelShift } from "./shift/pixelShift.js";
+import { pixelSpeed } from "./shift/pixelSpeed.js";
+import { shift } from "./shift/shift.js";
+import { shiftSpeed } from "./shift/shiftSpeed.js";
+import { vacuum } from "./shift/vacuum.js";
+import { constant } from "./units/constant.js";
+import { into } from "./units/into.js";
+import { tag } from "./units/tag.js";
+import { unitOf } from "./units/unitOf.js";
+
+/** Every cell function, in the order of the reference table. */
+export const definitions: readonly Definition[] = [
+  into,
+  tag,
+  unitOf,
+  constant,
+  axis,
+  period,
+  totalMass,
+  starAxis,
+  planetSpeed,
+  starSpeed,
+  reflex,
+  minMass,
+  planetMass,
+  massFunction,
+  planetShift,
+  shiftMass,
+  shift,
+  shiftSpeed,
+  lineShift,
+  pixelShift,
+  pixelSpeed,
+  vacuum,
+  air,
+];

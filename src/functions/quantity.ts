@@ -1,0 +1,41 @@
+import type { Kind } from "../units/kind.js";
+
+/** One end of the range of a quantity, in the base unit of its kind. */
+export interface Bound {
+  readonly at: number;
+  /** Whether the bound itself is outside the range. */
+  readonly open: boolean;
+  /** The bound as an analyst writes it: "0", "180 deg". */
+  readonly text: string;
+  /** Why the quantity ends there: a clause that follows "because". */
+  readonly reason: string;
+}
+
+/** A quantity of the trade: what it is, between which bounds, and how tables head its columns. */
+export interface Quantity {
+  readonly name: string;
+  readonly meaning: string;
+  readonly kind: Kind;
+  readonly lower: Bound | undefined;
+  readonly upper: Bound | undefined;
+  /** Unit of its columns, in which examples are given. */
+  readonly unit: string;
+  /** A value that works, in that unit. */
+  readonly example: number;
+  /** A change that matters, in the base unit: the step for derivatives where the value itself is 0. */
+  readonly step: number;
+  /** What columns of this quantity are called, besides its name; capitals ignored. */
+  readonly headers: readonly string[];
+}
+
+export function above(at: number, text: string, reason: string): Bound {
+  return { at, open: true, text, reason };
+}
+
+export const below = above;
+
+export function atLeast(at: number, text: string, reason: string): Bound {
+  return { at, open: false, text, reason };
+}
+
+export const atMost = atLeast;

@@ -1,0 +1,10 @@
+import type { Quantity } from "./readQuantity.js";
+
+/** A quantity as text that reads back to the same doubles: `4.2308 \u00b1 0.0002 d`, `0.47 +0.03 -0.02 jupiterMass`. */
+export function quantityText(quantity: Quantity): string {
+  const { value, upper, lower, unit } = quantity;
+  const both = upper === lower;
+  const sigma = upper === undefined ? "" : both ? ` \u00b1 ${upper}` : ` +${upper} -${lower}`;
+  const suffix = !unit || unit.text === "1" ? "" : ` ${unit.text}`;
+  return `${value}${sigma}${suffix}`;
+}

@@ -1,0 +1,40 @@
+import { isProblem, type UnitProblem } from "./problem.js";
+import { readUnit } from "./readUnit.js";
+import type { Unit } from "./unit.js";
+
+/** What a header cell says: the column's name and its unit; neither unit nor problem where it states no unit. */
+export interface HeaderReading {
+  readonly name: string;
+  readonly unit: Unit | undefined;
+  readonly problem: UnitProblem | undefined;
+}
+
+const square = /^(.*)\[((?:[^[\]]|\[[^[\]]*\])*)\]([^[\]]*)$/s;
+const round = /^(.*)\(((?:[^()]|\([^()]*\))*)\)([^()]*)$/s;
+
+/**
+ * The unit of a header: its last square brackets, `Period [d]`; else its last round brackets where they hold a unit;
+ * else the whole cell where it is a unit itself (a units row).
+ */
+export function readHeader(text: string): HeaderReading {
+  const squared = square.exec(text);
+  if (squared && squared[1] !== "") {
+    const unit = readUnit(squared[2]!);
+    const name = nameAround(squared);
+    return isProblem(unit) ? { name, unit: undefined, problem: unit } : { name, unit, problem: undefined };
+  }
+  const rounded = round.exec(text);
+  if (rounded && rounded[1] !== "" && rounded[2]!.trim() !== "") {
+    const unit = readUnit(rounded[2]!);
+    if (!isProblem(unit)) return { name: nameAround(rounded), unit, problem: undefined };
+    if (unit.problem === "ambiguous unit") return { name: nameAround(rounded), unit: undefined, problem: unit };
+  }
+  const inside = squared ? squared[2]! : text;
+  const whole = inside.trim() === "" ? undefined : readUnit(inside);
+  const unit = whole && !isProblem(whole) ? whole : undefined;
+  return { name: unit ? "" : text.trim(), unit, problem: undefined };
+}
+
+function nameAround(match: RegExpExecArray): string {
+  return `${match[1]!.trim()} ${match[3]!.trim()}`.trim();
+}
