@@ -78,21 +78,26 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
     reader.uncertain = true;
   }
 
+  /** Reads what stands beside a value, in its own header's unit or else in that of the value. */
   function readSigmas(row: number, unit: Unit, value: number, at: number, report: Report): void {
-    const parts: number[] = [];
-    for (let index = 0; index < sigmaColumns.length; index++) {
-      const name = `uncertainty of ${input.name}`;
-      const own = sigmaHeaders[index]!;
-      const sigmaHeader = own.unit || own.problem ? own : { ...own, unit };
-      const reading = readCell(name, cellAt(sigmaColumns[index]!, at), sigmaHeader, quantity.kind);
-      if (reading instanceof CellError || "about" in reading) {
-        report.sigma(row, reading);
-        parts.push(0);
-      } else {
-        parts.push(Math.abs(reading.value) * baseSlope(reading.unit, value));
-      }
+    const first = readSigma(0, row, unit, value, at, report);
+    const last = sigmaColumns.length > 1 ? readSigma(1, row, unit, value, at, report) : first;
+    setSigma(row, first, last, sigmaColumns.length);
+  }
+
+  function readSigma(index: number, row: number, unit: Unit, value: number, at: number, report: Report): number {
+    const header = sigmaHeaders[index]!;
+    const cell = cellAt(sigmaColumns[index]!, at);
+    const own = header.unit ?? unit;
+    if (typeof cell === "number" && !header.problem && fits(own, quantity.kind)) {
+      return Math.abs(cell) * baseSlope(own, value);
     }
-    setSigma(row, parts[0]!, parts.at(-1)!, sigmaColumns.length);
+    const reading = readCell(`uncertainty of ${input.name}`, cell, { ...header, unit: own }, quantity.kind);
+    if (reading instanceof CellError || "about" in reading) {
+      report.sigma(row, reading);
+      return 0;
+    }
+    return Math.abs(reading.value) * baseSlope(reading.unit, value);
   }
 
   /** The common case, a column of numbers under one unit, in loops that allocate nothing and divide only if they must. */
@@ -123,8 +128,11 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
     sides.fill(0);
     if (!column) {
       base.fill(input.fallback!, 0, rows);
-    } else if (fastUnit && sigmaColumns.length === 0 && !column.others) {
+    } else if (fastUnit && !column.others) {
       readNumbers(fastUnit, column.numbers, from, rows, report);
+      for (let row = 0; row < rows && sigmaColumns.length > 0; row++) {
+        if (!Number.isNaN(base[row])) readSigmas(row, fastUnit, base[row]!, from + row, report);
+      }
     } else {
       for (let row = 0; row < rows; row++) readOther(row, cellAt(column, from + row), from + row, report);
     }

@@ -1,12 +1,12 @@
 import type { NumberDefinition } from "../functions/definition.js";
-import { baseSlope, type Unit } from "../units/unit.js";
+import { baseSlope, fromBase, type Unit } from "../units/unit.js";
 import { type BlockReader, blockRows, quantityReader, type Report, wordReader } from "./blockReader.js";
 import type { CallProblem } from "./callProblem.js";
 import { CellError } from "./cell.js";
 import { cellProblem } from "./cellProblem.js";
 import type { Block } from "./column.js";
 import type { CallInputs } from "./inputColumns.js";
-import { type OpenRange, openRange } from "./range.js";
+import { isWithin, type OpenRange, openRange } from "./range.js";
 import { ResultColumns } from "./resultColumns.js";
 import { slopeScratch, slopes } from "./slopes.js";
 
@@ -48,12 +48,17 @@ function convert(
   fail: (row: number) => void,
 ): void {
   const { times, over, plus, logarithm } = unit;
+  if (logarithm) for (let row = 0; row < rows; row++) out[from + row] = fromBase(unit, values[row]!);
+  else if (times === 1 && over === 1 && plus === 0) for (let row = 0; row < rows; row++) out[from + row] = values[row]!;
+  else for (let row = 0; row < rows; row++) out[from + row] = ((values[row]! - plus) * over) / times;
+  const { lower, upper } = range;
+  let outside = 0;
   for (let row = 0; row < rows; row++) {
     const value = values[row]!;
-    const linear = ((value - plus) * over) / times;
-    const result = !logarithm ? linear : logarithm === "log10" ? Math.log10(linear) : Math.log(linear);
-    out[from + row] = result;
-    if (!(value > range.lower && value < range.upper && Math.abs(result) < Number.POSITIVE_INFINITY)) fail(row);
+    if (!(value > lower && value < upper && Math.abs(out[from + row]!) < Number.POSITIVE_INFINITY)) outside++;
+  }
+  for (let row = 0; row < rows && outside > 0; row++) {
+    if (!isWithin(range, values[row]!) || !Number.isFinite(out[from + row])) fail(row);
   }
 }
 

@@ -1,5 +1,5 @@
 import type { UnitProblem } from "../units/problem.js";
-import type { Quantity as QuantityReading } from "../units/readQuantity.js";
+import type { QuantityReading } from "../units/quantityReading.js";
 import type { Quantity } from "./quantity.js";
 
 /** Batch form of a kernel: fills the first `rows` entries of `out` from columns of base-unit numbers. */

@@ -1,5 +1,5 @@
+import type { QuantityReading } from "./quantityReading.js";
 import { julianDateOfEpoch } from "./readInstantUnit.js";
-import type { Quantity } from "./readQuantity.js";
 import type { Unit } from "./unit.js";
 
 /** ISO 8601 texts are UTC unless they state an offset; read as days from J2000.0 UTC. */
@@ -16,7 +16,7 @@ export const isoInstant: Unit = {
 const form = /^(\d{4})-(\d\d)-(\d\d)(?:[T ](\d\d):(\d\d)(?::(\d\d(?:\.\d+)?))?\s*(?:Z|UTC|([+-])(\d\d):?(\d\d))?)?$/;
 const unixEpochJulianDate = 2440587.5;
 
-export function readInstant(text: string): Quantity | undefined {
+export function readInstant(text: string): QuantityReading | undefined {
   const match = form.exec(text);
   if (!match) return undefined;
   const [year, month, day, hour, minute] = match.slice(1, 6).map((field) => Number(field ?? 0)) as [

@@ -1,15 +1,7 @@
 import { isProblem, type QuantityProblem } from "./problem.js";
+import type { QuantityReading } from "./quantityReading.js";
 import { readInstant } from "./readInstant.js";
 import { readUnit } from "./readUnit.js";
-import type { Unit } from "./unit.js";
-
-/** A number as text states it, with its uncertainties and its unit where it states them; numbers in that unit. */
-export interface Quantity {
-  readonly value: number;
-  readonly upper: number | undefined;
-  readonly lower: number | undefined;
-  readonly unit: Unit | undefined;
-}
 
 const digits = "(?:\\d+\\.?\\d*|\\.\\d+)";
 const number = `[+-]?${digits}(?:[eE][+-]?\\d+|\\s?[x\u00d7]\\s?10(?:\\^|\\*\\*)[+-]?\\d+)?`;
@@ -27,7 +19,7 @@ const form = new RegExp(
  * Reads a quantity text: `4.23 d`, `0.47 \u00b1 0.02 jupiterMass`, `4.2308(2) d` (the digits in brackets are the
  * uncertainty of the last digits), `0.47 +- 0.02`, `0.47 +0.03 -0.02 jupiterMass`, an ISO 8601 instant.
  */
-export function readQuantity(text: string): Quantity | QuantityProblem {
+export function readQuantity(text: string): QuantityReading | QuantityProblem {
   const instant = readInstant(text.trim());
   if (instant) return instant;
   const match = form.exec(text.replace(/[\u2212\u2013]/g, "-").trim());

@@ -1,0 +1,136 @@
+import { airWavelength, airWavelengths } from "../../src/kernel/airWavelength.js";
+import { lineShift, lineShifts } from "../../src/kernel/lineShift.js";
+import { massFunction, massFunctions } from "../../src/kernel/massFunction.js";
+import { orbitalPeriod, orbitalPeriods } from "../../src/kernel/orbitalPeriod.js";
+import { pixelShift, pixelShifts } from "../../src/kernel/pixelShift.js";
+import { pixelSpeed, pixelSpeeds } from "../../src/kernel/pixelSpeed.js";
+import { planetMass, planetMasses } from "../../src/kernel/planetMass.js";
+import { planetShift, planetShifts } from "../../src/kernel/planetShift.js";
+import { planetSpeed, planetSpeeds } from "../../src/kernel/planetSpeed.js";
+import { reflexAmplitude, reflexAmplitudes } from "../../src/kernel/reflexAmplitude.js";
+import { semiMajorAxes, semiMajorAxis } from "../../src/kernel/semiMajorAxis.js";
+import { shiftMass, shiftMasses } from "../../src/kernel/shiftMass.js";
+import { shiftOfSpeed, shiftsOfSpeeds } from "../../src/kernel/shiftOfSpeed.js";
+import { speedOfShift, speedsOfShifts } from "../../src/kernel/speedOfShift.js";
+import { starAxes, starAxis } from "../../src/kernel/starAxis.js";
+import { starSpeed, starSpeeds } from "../../src/kernel/starSpeed.js";
+import { totalMass, totalMasses } from "../../src/kernel/totalMass.js";
+import { vacuumWavelength, vacuumWavelengths } from "../../src/kernel/vacuumWavelength.js";
+
+type Scalar = (...inputs: number[]) => number;
+type Batch = (rows: number, out: Float64Array, ...inputs: Float64Array[]) => void;
+
+/** One argument: values of its domain, a usual one first, and values outside it, in the order of the kernel's header. */
+export interface Domain {
+  readonly name: string;
+  readonly inside: readonly number[];
+  readonly outside: readonly number[];
+}
+
+export interface Kernel {
+  readonly name: string;
+  readonly scalar: Scalar;
+  readonly batch: Batch;
+  readonly inputs: readonly Domain[];
+}
+
+const c = 299792458;
+/** The double next below c: doubles from 2^28 to 2^29 are 2^-24 apart. */
+const belowLight = c - 2 ** -24;
+
+// Magnitudes end at 1e-40 and 1e40, and 9.9e-41 and 1.1e40 lie beyond them.
+const positive = (name: string, ...usual: number[]): Domain => ({
+  name,
+  inside: usual,
+  outside: [0, -usual[0], 9.9e-41, 1.1e40, Number.MIN_VALUE, Number.MAX_VALUE],
+});
+const period = positive("period", 3e8, 1, 3.2e16);
+const starMass = positive("starMass", 1.3e20, 1.3e6, 1.3e26);
+const axis = positive("axis", 1.5e11, 1e3, 1e18);
+const companion: Domain = {
+  name: "planetMass",
+  inside: [1.3e17, 0, -0, 1.3e6],
+  outside: [-1.3e17, -Number.MIN_VALUE, 9.9e-41, 1.1e40, Number.MIN_VALUE, Number.MAX_VALUE],
+};
+const eccentricity: Domain = {
+  name: "eccentricity",
+  inside: [0.3, 0, -0, 1e-300, 0.9999, 1 - 2 ** -40],
+  outside: [1, -0.1, -Number.MIN_VALUE, 1.5],
+};
+const inclination: Domain = {
+  name: "inclination",
+  inside: [1.2, Math.PI / 2, 1e-6, Math.PI - 2 ** -51],
+  outside: [0, Math.PI, -1.2, 4, 9.9e-41],
+};
+const amplitude: Domain = {
+  name: "amplitude",
+  inside: [12.5, 0, -0, 1e-6, 1e5],
+  outside: [-12.5, c, 9.9e-41, 1e9],
+};
+const amplitudeShift: Domain = {
+  name: "shift",
+  inside: [4e-8, 0, -0, 1e-14, 1e-3],
+  outside: [-4e-8, -1, -2, 9.9e-41, 1.1e40],
+};
+const speed: Domain = {
+  name: "speed",
+  inside: [1e4, 0, -0, -1e4, 1e-6, 29979245.8, -29979245.8],
+  outside: [c, -c, 9.9e-41, -9.9e-41, 1e9, -1e9],
+};
+const shift: Domain = {
+  name: "shift",
+  inside: [1e-4, 0, -0, -1e-4, 1e-14, 0.1, -0.1],
+  outside: [-1, -2, 9.9e-41, -9.9e-41, 1.1e40],
+};
+const model: Domain = { name: "model", inside: [0, 1], outside: [-1, 0.5, 2] };
+const formula: Domain = { name: "formula", inside: [0, 1], outside: [-1, 0.5, 2] };
+const wavelength = positive("wavelength", 5e-7, 1e-10, 1e3);
+const airRange: Domain = {
+  name: "wavelength",
+  // Each limit also as it comes out of another unit, a rounding to either side.
+  inside: [5e-7, 200e-9, 200 * 1e-9, 200e-9 * (1 - 2 ** -52), 2500e-9, 2500 * 1e-9, 2500e-9 * (1 + 2 ** -52)],
+  outside: [0, -5e-7, 199.999e-9, 2500.001e-9],
+};
+const resolvingPower = positive("resolvingPower", 1e5, 1, 1e7);
+const pixelsPerElement = positive("pixelsPerElement", 3.2, 0.1, 100);
+const pixels: Domain = { name: "pixels", inside: [1.5, 0, -0, -1.5, 1e-6], outside: [9.9e-41, 1.1e40, -1.1e40] };
+
+const kernel = (scalar: unknown, batch: unknown, ...inputs: Domain[]): Kernel => ({
+  name: (scalar as Scalar).name,
+  scalar: scalar as Scalar,
+  batch: batch as Batch,
+  inputs,
+});
+
+export const kernels: readonly Kernel[] = [
+  kernel(semiMajorAxis, semiMajorAxes, period, starMass, companion),
+  kernel(orbitalPeriod, orbitalPeriods, axis, starMass, companion),
+  kernel(totalMass, totalMasses, axis, period),
+  kernel(starAxis, starAxes, period, starMass, companion),
+  kernel(
+    planetSpeed,
+    planetSpeeds,
+    positive("period", 3e8, 1e3, 3.2e16),
+    positive("starMass", 1.3e20, 1.3e6),
+    companion,
+  ),
+  kernel(starSpeed, starSpeeds, period, starMass, companion),
+  kernel(reflexAmplitude, reflexAmplitudes, period, starMass, companion, eccentricity, inclination),
+  kernel(planetMass, planetMasses, amplitude, period, starMass, eccentricity, inclination),
+  kernel(massFunction, massFunctions, amplitude, period, eccentricity),
+  kernel(planetShift, planetShifts, period, starMass, companion, eccentricity, inclination),
+  kernel(shiftMass, shiftMasses, amplitudeShift, period, starMass, eccentricity, inclination),
+  kernel(shiftOfSpeed, shiftsOfSpeeds, speed, model),
+  kernel(speedOfShift, speedsOfShifts, shift, model),
+  kernel(lineShift, lineShifts, wavelength, speed, model),
+  kernel(
+    pixelShift,
+    pixelShifts,
+    { ...speed, inside: [...speed.inside, belowLight, -belowLight] },
+    resolvingPower,
+    pixelsPerElement,
+  ),
+  kernel(pixelSpeed, pixelSpeeds, pixels, resolvingPower, pixelsPerElement),
+  kernel(vacuumWavelength, vacuumWavelengths, airRange, formula),
+  kernel(airWavelength, airWavelengths, airRange, formula),
+];
