@@ -37,6 +37,6 @@ module.exports = {
     doNotFollow: { path: "node_modules" },
     tsConfig: { fileName: "tsconfig.json" },
     tsPreCompilationDeps: true,
-    enhancedResolveOptions: { extensions: [".ts", ".js"], conditionNames: ["import", "default", "types"] },
+    enhancedResolveOptions: { exportsFields: ["exports"], extensions: [".ts", ".js"], conditionNames: ["import", "default", "types"] },
   },
 };
