@@ -31,4 +31,6 @@ export interface CellFunction {
    * gave fewer (no uncertainty in that row) the rest of its row is blank.
    */
   eachRow(rows: number, parameters: readonly RowArgument[]): Block;
+  /** The unit, in VOUnits spelling, of the numbers that `once` gives for these arguments; undefined for texts. */
+  unitOf?(parameters: readonly Argument[]): string | undefined;
 }

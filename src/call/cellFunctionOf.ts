@@ -1,4 +1,5 @@
-import type { Definition } from "../functions/definition.js";
+import { isOptional, takesHeaders, takesResult } from "../functions/argumentNames.js";
+import type { Definition, Input } from "../functions/definition.js";
 import type { Unit } from "../units/unit.js";
 import type { CallProblem } from "./callProblem.js";
 import type { CellError } from "./cell.js";
@@ -17,15 +18,13 @@ export const namespace = "BARY";
 /** The one door from cells to a definition and back, for every host. */
 export function cellFunctionOf(definition: Definition): CellFunction {
   const inputs = definition.inputs.length;
-  const extra = definition.form === "lookup" ? 0 : 1;
+  const extra = takesHeaders(definition) ? 1 : 0;
   const most = inputs + extra + (takesResult(definition) ? 1 : 0);
-  const least = definition.inputs.filter(
-    (input) => input.takes !== "word" && !("fallback" in input && input.fallback !== undefined),
-  ).length;
+  const least = (definition.inputs as readonly Input[]).filter((input) => !isOptional(input)).length;
 
   function once(parameters: readonly Argument[]): Block {
     const given = parameters.slice(0, inputs).map((parameter) => parameter?.block);
-    return answer(given, parameters);
+    return answer(given, parameters, false);
   }
 
   function eachRow(rows: number, parameters: readonly RowArgument[]): Block {
@@ -41,10 +40,14 @@ export function cellFunctionOf(definition: Definition): CellFunction {
         "fixed" in parameter ? parameter.fixed?.block : { rows, columns: parameter.perRow },
       );
     const all = parameters.map((parameter) => ("fixed" in parameter ? parameter.fixed : undefined));
-    return widened(answer(given, all), rows);
+    return widened(answer(given, all, true), rows);
   }
 
-  function answer(given: readonly (GivenCells | undefined)[], parameters: readonly Argument[]): Block {
+  function answer(
+    given: readonly (GivenCells | undefined)[],
+    parameters: readonly Argument[],
+    filledDown: boolean,
+  ): Block {
     const problem = parameters.slice(most).some(Boolean) && {
       about: "too many arguments" as const,
       given: parameters.length,
@@ -52,7 +55,7 @@ export function cellFunctionOf(definition: Definition): CellFunction {
     };
     if (problem) return single(cellProblem(definition, problem));
     const headers = definition.form === "lookup" ? [] : headerCells(parameters[inputs]);
-    const call = callInputs(definition, given, headers);
+    const call = callInputs(definition, given, headers, filledDown);
     if ("about" in call) return single(cellProblem(definition, call));
     const evaluated = evaluate(definition, call, parameters[inputs + extra]);
     return "about" in evaluated ? single(cellProblem(definition, evaluated)) : evaluated;
@@ -75,15 +78,12 @@ export function cellFunctionOf(definition: Definition): CellFunction {
     return { rows, columns };
   }
 
-  return { name: `${namespace}.${definition.name}`, leastArguments: least, mostArguments: most, once, eachRow };
-}
+  function unitOf(parameters: readonly Argument[]): string | undefined {
+    const unit = numberUnit(definition, parameters, inputs + extra);
+    return unit && !("about" in unit) ? unit.text : undefined;
+  }
 
-function takesResult(definition: Definition): boolean {
-  return (
-    definition.form === "number" ||
-    definition.form === "conversion" ||
-    (definition.form === "lookup" && definition.takesResult)
-  );
+  return { name: `${namespace}.${definition.name}`, leastArguments: least, mostArguments: most, once, eachRow, unitOf };
 }
 
 function evaluate(definition: Definition, call: CallInputs, result: Argument): Block | CallProblem {
@@ -95,13 +95,27 @@ function evaluate(definition: Definition, call: CallInputs, result: Argument): B
     case "conversion": {
       const unit = askedUnit(result, undefined);
       if (!unit) return { about: "result unit missing", header: undefined };
-      return "about" in unit ? unit : evaluateConversion(definition, call, unit);
+      const [header] = headerCells(result);
+      return "about" in unit ? unit : evaluateConversion(definition, call, unit, header?.text ?? unit.text);
     }
     case "text":
       return evaluateText(definition, call);
     case "lookup":
       return evaluateLookup(definition, call, (own: Unit) => resultUnit(result, own));
   }
+}
+
+/** The unit of the numbers a call gives; undefined where it gives texts. */
+function numberUnit(
+  definition: Definition,
+  parameters: readonly Argument[],
+  at: number,
+): Unit | CallProblem | undefined {
+  if (definition.form === "number") return resultUnit(parameters[at], knownUnit(definition.result.unit));
+  if (definition.form === "conversion") return askedUnit(parameters[at], undefined);
+  if (definition.form === "text" || !parameters[0]) return undefined;
+  const answer = definition.answer(String(cellAt(parameters[0].block.columns[0]!, 0)));
+  return "value" in answer ? resultUnit(parameters[at], knownUnit(answer.unit)) : undefined;
 }
 
 function single(error: CellError): Block {

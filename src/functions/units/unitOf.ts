@@ -1,6 +1,7 @@
 import { isProblem } from "../../units/problem.js";
 import { readHeader } from "../../units/readHeader.js";
 import { readQuantity } from "../../units/readQuantity.js";
+import { readUnit } from "../../units/readUnit.js";
 import type { LookupAnswer, LookupDefinition } from "../definition.js";
 
 export const unitOf: LookupDefinition = {
@@ -25,9 +26,12 @@ function unitIn(text: string): LookupAnswer {
   const header = readHeader(text);
   if (header.problem) return { problem: "unit", unit: header.problem };
   if (header.unit) return { text: header.unit.text };
+  const bare = readUnit(text);
+  if (isProblem(bare) && bare.problem === "ambiguous unit") return { problem: "unit", unit: bare };
   const quantity = readQuantity(text);
   if (!isProblem(quantity)) return quantity.unit ? { text: quantity.unit.text } : { problem: "no unit stated", text };
-  return quantity.problem === "not a number"
-    ? { problem: "no unit stated", text }
-    : { problem: "unit", unit: quantity };
+  if (quantity.problem !== "not a number") return { problem: "unit", unit: quantity };
+  const slip =
+    isProblem(bare) && (bare.problem === "unit grammar" || (bare.problem === "unknown unit" && bare.nearest));
+  return slip ? { problem: "unit", unit: bare } : { problem: "no unit stated", text };
 }

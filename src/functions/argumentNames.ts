@@ -1,0 +1,23 @@
+import type { Definition, Input } from "./definition.js";
+
+export function isOptional(input: Input): boolean {
+  return input.takes === "word" || (input.takes === "quantity" && input.fallback !== undefined);
+}
+
+export function takesHeaders(definition: Definition): boolean {
+  return definition.form !== "lookup";
+}
+
+export function takesResult(definition: Definition): boolean {
+  return definition.form === "lookup" ? definition.takesResult : definition.form !== "text";
+}
+
+/** The arguments of a call in their order; what may be left out stands in square brackets. */
+export function argumentNames(definition: Definition): readonly string[] {
+  const inputs = (definition.inputs as readonly Input[]).map((input) =>
+    isOptional(input) ? `[${input.name}]` : input.name,
+  );
+  const headers = takesHeaders(definition) ? ["[headers]"] : [];
+  const result = takesResult(definition) ? [definition.form === "conversion" ? "result" : "[result]"] : [];
+  return [...inputs, ...headers, ...result];
+}

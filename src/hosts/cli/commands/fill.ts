@@ -1,0 +1,98 @@
+import { appendColumns } from "../../../files/delimited/appendColumns.js";
+import { sentenceOfFinding } from "../../../files/delimited/sentenceOfFinding.js";
+import { checkFormula } from "../../../sheet/formula/readFormula.js";
+import type { Command } from "../command.js";
+import { type CommandLine, optionValue } from "../commandLine.js";
+import { exitCode } from "../exitCode.js";
+import { fillSummary } from "../fillSummary.js";
+import { type ColumnRequest, fillTable } from "../fillTable.js";
+import { formulaComplaint } from "../formulaComplaint.js";
+import { previewTable } from "../previewTable.js";
+import { progressOn } from "../progress.js";
+import { readTable, tableLayout } from "../readTable.js";
+import { UsageProblem } from "../usageProblem.js";
+import { functions } from "../worksheet.js";
+import { isSameFile, openWholeFile } from "../writeFile.js";
+
+const help = `barycell fill IN.csv --set HEADER FORMULA [--set HEADER FORMULA ...] [--out OUT.csv]
+
+Adds a column for each --set to the right of a table. The formula is that of the first data row (row 2; row 3 when a
+row of units stands under the header) and is filled down; $ keeps a row or column in place. A result with
+uncertainties takes the columns beside it too. The table's own text is not changed by a character.
+IN.csv may be - for standard input; the delimiter (comma, semicolon, tab, bar), quotes, comment lines (#) and a row
+of units are recognised.
+
+  --set HEADER FORMULA   a column to add, for example --set "K [m/s]" "=BARY.REFLEX(B2,C2,D2,,,B$1:D$1,E$1)"
+  --out OUT.csv          write there instead of to standard output
+  --force                let OUT.csv be the input itself
+  --show ROWS            print the first rows as an aligned table instead of the file
+  --strict               exit 1 if any cell has an error
+  --delimiter NAME       comma, semicolon, tab or bar
+  --units-row yes|no     whether a row of units stands under the header
+
+On standard error: progress of long files, then rows, columns added, cells that need attention, and each distinct
+problem once with its first cell and its count.
+`;
+
+export const fill: Command = {
+  name: "fill",
+  summary: "add derived columns to a table",
+  help,
+  options: { "--set": 2, "--out": 1, "--force": 0, "--show": 1, "--strict": 0, "--delimiter": 1, "--units-row": 1 },
+  async run(line, terminal) {
+    const { path, out, show, requests } = readRequest(line);
+    const layout = tableLayout(optionValue(line, "--delimiter"), optionValue(line, "--units-row"));
+    if (out !== undefined && !line.options.has("--force") && (await isSameFile(path, out))) {
+      throw new UsageProblem(
+        `--out "${out}" is the input itself; name another file, or add --force to replace the input.`,
+      );
+    }
+    const file = out === undefined ? undefined : await openWholeFile(out);
+    try {
+      const progress = progressOn(terminal);
+      const table = await readTable(path, layout, terminal, progress);
+      const filled = fillTable(table, requests, progress);
+      progress.end();
+      const pieces = show === undefined ? appendColumns(table, filled.added) : previewTable(table, filled.added, show);
+      if (file) await file.write(pieces);
+      else for (const piece of pieces) await terminal.out(piece);
+      for (const finding of table.findings) terminal.note(`${sentenceOfFinding(finding)}\n`);
+      terminal.note(fillSummary(table, filled));
+      const failed = filled.problems.length > 0 && line.options.has("--strict");
+      return failed ? exitCode.cellError : exitCode.done;
+    } catch (error) {
+      await file?.discard();
+      throw error;
+    }
+  },
+};
+
+interface FillRequest {
+  readonly path: string;
+  readonly out: string | undefined;
+  readonly show: number | undefined;
+  readonly requests: readonly ColumnRequest[];
+}
+
+function readRequest(line: CommandLine): FillRequest {
+  const [path, ...more] = line.operands;
+  if (path === undefined || more.length > 0)
+    throw new UsageProblem("give one table, for example targets.csv, or - for standard input.");
+  const requests = (line.options.get("--set") ?? []).map(([header, formula]) => readColumnRequest(header!, formula!));
+  if (requests.length === 0) throw new UsageProblem('say which column to add: --set "K [m/s]" "=BARY.REFLEX(...)".');
+  const out = optionValue(line, "--out");
+  const shown = optionValue(line, "--show");
+  const show = shown === undefined ? undefined : Number(shown);
+  if (show !== undefined && !(Number.isInteger(show) && show > 0))
+    throw new UsageProblem(`--show is "${shown}"; it is a number of rows, for example 20.`);
+  return { path, out: out === "-" ? undefined : out, show, requests };
+}
+
+/** A formula that cannot be read stops everything before a file is touched. */
+function readColumnRequest(header: string, text: string): ColumnRequest {
+  const formula = text.startsWith("=") ? text : `=${text}`;
+  const problem = checkFormula(formula, functions);
+  if (problem)
+    throw new UsageProblem(`the formula of "${header}" cannot be read:\n${formulaComplaint(formula, problem)}`);
+  return { header, formula };
+}

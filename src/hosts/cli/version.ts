@@ -1,0 +1,3 @@
+import packageData from "../../../package.json" with { type: "json" };
+
+export const version: string = packageData.version;

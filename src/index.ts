@@ -1,0 +1,16 @@
+export { type Cell, CellError, type ErrorCode } from "./call/cell.js";
+export type { Argument, ArgumentCells, CellFunction, RowArgument } from "./call/cellFunction.js";
+export { cellFunctionOf } from "./call/cellFunctionOf.js";
+export { cellFunctionNames, findCellFunction } from "./call/cellFunctions.js";
+export { type Block, blockOf, type Column, cellAt, cellsOf, columnOf } from "./call/column.js";
+export type { Definition } from "./functions/definition.js";
+export { definitions } from "./functions/definitions.js";
+export type { Quantity } from "./functions/quantity.js";
+export { type Constant, constants } from "./kernel/constants.js";
+export type { QuantityProblem, UnitProblem } from "./units/problem.js";
+export { isProblem } from "./units/problem.js";
+export type { QuantityReading } from "./units/quantityReading.js";
+export { type HeaderReading, readHeader } from "./units/readHeader.js";
+export { readQuantity } from "./units/readQuantity.js";
+export { readUnit } from "./units/readUnit.js";
+export { convertible, fromBase, toBase, type Unit } from "./units/unit.js";
