@@ -1,7 +1,10 @@
-import type { Column, OtherCell } from "../../call/column.js";
+import { columnOf } from "../../call/column.js";
 import type { DelimitedTable } from "../../files/delimited/delimitedTable.js";
 import type { Book } from "../../sheet/book/book.js";
 import { bookOf } from "../../sheet/book/bookOf.js";
+import { change } from "../../sheet/change.js";
+import { setColumn } from "../../sheet/edit/setColumn.js";
+import { functions } from "./worksheet.js";
 
 /** The rows of a table's worksheet that stand above its data: the header, and the row of units where there is one. */
 export function headerRows(table: DelimitedTable): number {
@@ -10,22 +13,11 @@ export function headerRows(table: DelimitedTable): number {
 
 /** A table as a worksheet: header in row 1, units in row 2 where the file has such a row, then the data. */
 export function tableBook(table: DelimitedTable): Book {
-  const columns = table.columns.map((column, index) => {
-    const unit = table.unitsRow?.[index];
-    return underHeader(unit === undefined ? [table.header[index]!] : [table.header[index]!, unit], column);
+  const headers = table.header.map((header, index) => {
+    const texts = table.unitsRow ? [header, table.unitsRow[index]!] : [header];
+    return columnOf(texts.map((text) => (text === "" ? null : text)));
   });
-  return bookOf([{ name: "Table", columns }]);
-}
-
-function underHeader(texts: readonly string[], data: Column): Column {
-  const length = texts.length + data.length;
-  const numbers = new Float64Array(length);
-  numbers.fill(Number.NaN, 0, texts.length);
-  numbers.set(data.numbers, texts.length);
-  const others = new Array<OtherCell | undefined>(length);
-  texts.forEach((text, row) => {
-    others[row] = text === "" ? null : text;
-  });
-  for (let row = 0; row < data.length; row++) others[row + texts.length] = data.others?.[row];
-  return { length, numbers, others };
+  const row = headerRows(table);
+  const data = table.columns.map((column, index) => setColumn({ sheet: 0, row, column: index }, column));
+  return change(bookOf([{ name: "Table", columns: headers }]), table.rows === 0 ? [] : data, functions);
 }

@@ -1,0 +1,15 @@
+import { benchFill } from "./fill.js";
+import { benchReflex } from "./reflex.js";
+
+/** `npm run bench [part]`: timings that compare two things in one run; they never decide a test. */
+const parts: Readonly<Record<string, () => void | Promise<void>>> = {
+  reflex: benchReflex,
+  fill: benchFill,
+};
+
+const asked = process.argv.slice(2);
+for (const [name, bench] of Object.entries(parts)) {
+  if (asked.length > 0 && !asked.includes(name)) continue;
+  process.stdout.write(`\n${name}\n`);
+  await bench();
+}

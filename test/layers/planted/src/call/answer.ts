@@ -1,0 +1,3 @@
+import { join } from "node:path";
+
+export const answer = join("a", "b");

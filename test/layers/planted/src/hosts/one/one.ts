@@ -1,0 +1,3 @@
+import { two } from "../two/two.js";
+
+export const one = two;

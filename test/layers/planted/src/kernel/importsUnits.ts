@@ -1,0 +1,3 @@
+import { unit } from "../units/unit.js";
+
+export const kernel = unit;

@@ -1,0 +1,3 @@
+import { second } from "./second.js";
+
+export const first = (): number => second();

@@ -1,0 +1,3 @@
+import { first } from "./first.js";
+
+export const second = (): number => first();

@@ -1,0 +1,3 @@
+import { answer } from "../call/answer.js";
+
+export const upward = answer;
