@@ -1,6 +1,8 @@
 import {
   astronomicalUnit,
+  day,
   jovianMassParameter,
+  julianYear,
   solarMassParameter,
   speedOfLight,
   terrestrialMassParameter,
@@ -20,6 +22,7 @@ export const period: Quantity = {
   unit: "d",
   example: 4.23,
   step: 86400,
+  plausible: { least: 0.05 * day, most: 1e4 * julianYear },
   headers: ["P", "Per", "orbital period", "Porb", "P_orb"],
 };
 
@@ -32,6 +35,7 @@ export const starMass: Quantity = {
   unit: "solMass",
   example: 1.1,
   step: solarMassParameter,
+  plausible: { least: 0.05 * solarMassParameter, most: 60 * solarMassParameter },
   headers: ["Mstar", "M_star", "M*", "M_*", "Ms", "stellar mass", "mass of star", "host mass"],
 };
 
@@ -44,6 +48,7 @@ export const planetMass: Quantity = {
   unit: "jupiterMass",
   example: 0.47,
   step: jovianMassParameter,
+  plausible: { least: 0.005 * terrestrialMassParameter, most: 90 * jovianMassParameter },
   headers: ["Mp", "M_p", "Mplanet", "m", "mass", "companion mass", "mass of planet"],
 };
 
@@ -69,6 +74,7 @@ export const totalMass: Quantity = {
   unit: "solMass",
   example: 1.1,
   step: solarMassParameter,
+  plausible: { least: 0.05 * solarMassParameter, most: 60 * solarMassParameter },
   headers: ["Mtot", "M_tot", "system mass"],
 };
 
@@ -81,6 +87,7 @@ export const massFunction: Quantity = {
   unit: "solMass",
   example: 7.6e-11,
   step: terrestrialMassParameter,
+  plausible: undefined,
   headers: ["f(m)", "fm", "f(M)"],
 };
 
@@ -93,6 +100,7 @@ export const axis: Quantity = {
   unit: "AU",
   example: 0.052,
   step: astronomicalUnit,
+  plausible: { least: 0.003 * astronomicalUnit, most: 1e4 * astronomicalUnit },
   headers: ["a", "sma", "semi-major axis", "semimajor axis", "orbital radius"],
 };
 
@@ -101,6 +109,7 @@ export const starAxis: Quantity = {
   name: "star axis",
   meaning: "semi-major axis of the star's own orbit about the barycentre",
   example: 2.2e-5,
+  plausible: undefined,
   headers: ["a_star", "a_1"],
 };
 
@@ -113,6 +122,7 @@ export const orbitalSpeed: Quantity = {
   unit: "km/s",
   example: 30,
   step: 1,
+  plausible: undefined,
   headers: ["v_orb", "orbital velocity"],
 };
 
@@ -125,6 +135,7 @@ export const semiAmplitude: Quantity = {
   unit: "m/s",
   example: 55.9,
   step: 1,
+  plausible: { least: 0.005, most: 1e5 },
   headers: ["RV semi-amplitude", "semi-amplitude", "semiamplitude", "RV amplitude", "K_star", "K1"],
 };
 
@@ -137,6 +148,7 @@ export const eccentricity: Quantity = {
   unit: "1",
   example: 0.05,
   step: 1,
+  plausible: undefined,
   headers: ["e", "ecc", "eccen"],
 };
 
@@ -149,6 +161,7 @@ export const inclination: Quantity = {
   unit: "deg",
   example: 86.7,
   step: 1,
+  plausible: { least: (5 * Math.PI) / 180, most: (175 * Math.PI) / 180 },
   headers: ["i", "inc", "incl", "orbital inclination"],
 };
 
@@ -161,6 +174,7 @@ export const speed: Quantity = {
   unit: "m/s",
   example: 12.5,
   step: 1,
+  plausible: undefined,
   headers: ["v", "RV", "radial velocity", "velocity"],
 };
 
@@ -173,6 +187,7 @@ export const shift: Quantity = {
   unit: "1",
   example: 4.2e-8,
   step: 1e-8,
+  plausible: undefined,
   headers: ["z", "Doppler shift", "dlambda/lambda"],
 };
 
@@ -184,6 +199,7 @@ export const shiftAmplitude: Quantity = {
 };
 
 const anyWavelength = {
+  plausible: { least: 50e-9, most: 1e-3 },
   kind: "length",
   unit: "nm",
   example: 550,
@@ -224,6 +240,7 @@ export const wavelengthInVacuum: Quantity = {
 
 export const wavelengthShift: Quantity = {
   ...anyWavelength,
+  plausible: undefined,
   name: "line shift",
   meaning: "how far a line moves in wavelength",
   lower: undefined,
@@ -242,6 +259,7 @@ export const resolvingPower: Quantity = {
   unit: "1",
   example: 115000,
   step: 1e5,
+  plausible: { least: 100, most: 1e6 },
   headers: ["R", "resolution", "resolving power"],
 };
 
@@ -254,6 +272,7 @@ export const pixelsPerElement: Quantity = {
   unit: "pixel",
   example: 3.2,
   step: 1,
+  plausible: { least: 1, most: 20 },
   headers: ["sampling", "pixels per element"],
 };
 
@@ -266,5 +285,6 @@ export const pixelShift: Quantity = {
   unit: "pixel",
   example: 0.015,
   step: 1e-3,
+  plausible: undefined,
   headers: ["shift in pixels", "dx"],
 };

@@ -24,6 +24,8 @@ export interface Quantity {
   readonly example: number;
   /** A change that matters, in the base unit: the step for derivatives where the value itself is 0. */
   readonly step: number;
+  /** Where the median of a column of this quantity lies in practice, in the base unit; outside, its unit is doubted. */
+  readonly plausible: { readonly least: number; readonly most: number } | undefined;
   /** What columns of this quantity are called, besides its name; capitals ignored. */
   readonly headers: readonly string[];
 }
