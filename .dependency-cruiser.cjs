@@ -1,5 +1,5 @@
 // Imports only point down this list; the reason for each layer stands in DEVELOPERS.md.
-const layers = ["hosts", "files", "sheet", "catalog", "call", "functions", "units", "kernel"];
+const layers = ["hosts", "files", "sheet", "table", "catalog", "call", "functions", "units", "kernel"];
 
 const upward = layers.slice(1).map((layer, index) => ({
   name: `${layer}-imports-only-downwards`,
@@ -37,6 +37,10 @@ module.exports = {
     doNotFollow: { path: "node_modules" },
     tsConfig: { fileName: "tsconfig.json" },
     tsPreCompilationDeps: true,
-    enhancedResolveOptions: { exportsFields: ["exports"], extensions: [".ts", ".js"], conditionNames: ["import", "default", "types"] },
+    enhancedResolveOptions: {
+      exportsFields: ["exports"],
+      extensions: [".ts", ".js"],
+      conditionNames: ["import", "default", "types"],
+    },
   },
 };

@@ -3,7 +3,7 @@ import { expect, it } from "vitest";
 import { referenceTable } from "../src/catalog/referenceTable.js";
 
 const path = new URL("../README.md", import.meta.url);
-const section = /(<!-- functions -->\n)[^]*?(<!-- end -->)/;
+const section = /(<!-- functions -->\n)[\s\S]*?(<!-- end -->)/;
 
 /** The section is written, never by hand, by UPDATE_README=1 npx vitest run test/readme.test.ts. */
 it("the README's reference table is that of the definitions", () => {

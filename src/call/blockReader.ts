@@ -6,7 +6,7 @@ import type { CallProblem } from "./callProblem.js";
 import { type Cell, CellError } from "./cell.js";
 import { cellAt } from "./column.js";
 import type { InputColumns } from "./inputColumns.js";
-import { isWithin, openRange, rangeProblem } from "./range.js";
+import { isWithin, type OpenRange, openRange, rangeProblem } from "./range.js";
 import { fits, readCell, valueText } from "./readCell.js";
 
 /** Rows are read in blocks of this many, so that what one block needs stays in the processor's cache. */
@@ -100,25 +100,10 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
     return Math.abs(reading.value) * baseSlope(reading.unit, value);
   }
 
-  /** The common case, a column of numbers under one unit, in loops that allocate nothing and divide only if they must. */
+  /** The common case, a column of numbers under one unit. */
   function readNumbers(unit: Unit, numbers: Float64Array, from: number, rows: number, report: Report): void {
-    const { times, over, plus } = unit;
-    const { lower: least, upper: most } = range;
-    let outside = 0;
-    if (over === 1 && plus === 0) {
-      for (let row = 0; row < rows; row++) {
-        const value = numbers[from + row]! * times;
-        base[row] = value;
-        if (!(value > least && value < most)) outside++;
-      }
-    } else {
-      for (let row = 0; row < rows; row++) {
-        const value = (numbers[from + row]! * times) / over + plus;
-        base[row] = value;
-        if (!(value > least && value < most)) outside++;
-      }
-    }
-    for (let row = 0; row < rows && outside > 0; row++) {
+    if (readLinear(unit, numbers.subarray(from, from + rows), range, base) === 0) return;
+    for (let row = 0; row < rows; row++) {
       if (!isWithin(range, base[row]!)) readOther(row, cellAt(column!, from + row), from + row, report);
     }
   }
@@ -140,6 +125,31 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
 
   const reader: BlockReader = { base, upper, lower, sides, uncertain: false, read };
   return cells.single ? singleReader(reader) : reader;
+}
+
+/**
+ * Numbers into base units, in loops that allocate nothing and divide only if they must; the count of those outside
+ * the range comes back.
+ */
+function readLinear(unit: Unit, numbers: Float64Array, range: OpenRange, base: Float64Array): number {
+  const { times, over, plus } = unit;
+  const { lower, upper } = range;
+  const rows = numbers.length;
+  let outside = 0;
+  if (over === 1 && plus === 0) {
+    for (let row = 0; row < rows; row++) {
+      const value = numbers[row]! * times;
+      base[row] = value;
+      if (!(value > lower && value < upper)) outside++;
+    }
+  } else {
+    for (let row = 0; row < rows; row++) {
+      const value = (numbers[row]! * times) / over + plus;
+      base[row] = value;
+      if (!(value > lower && value < upper)) outside++;
+    }
+  }
+  return outside;
 }
 
 /** Reads its one cell once and serves it to every row. */

@@ -61,7 +61,14 @@ export type CallProblem =
       readonly side: "lower" | "upper";
     }
   | { readonly about: "zero or blank"; readonly input: string; readonly bound: Bound }
-  | { readonly about: "beyond numbers"; readonly input: string; readonly value: string }
+  | {
+      readonly about: "beyond numbers";
+      readonly input: string;
+      readonly value: string;
+      /** The unit in which no number can hold the result, where it is not the value itself. */
+      readonly asked?: Unit;
+    }
+  | { readonly about: "uncertainty beyond numbers"; readonly result: string }
   | {
       readonly about: "word";
       readonly input: string;
@@ -79,7 +86,7 @@ export type CallProblem =
   | { readonly about: "shape"; readonly input: string; readonly rows: number; readonly columns: number }
   | { readonly about: "header count"; readonly given: number; readonly inputs: number; readonly columns: number }
   | { readonly about: "no result"; readonly result: string; readonly values: string }
-  | { readonly about: "result unit missing"; readonly header: string | undefined }
+  | { readonly about: "result unit missing"; readonly header: HeaderCell | undefined }
   | { readonly about: "result unit"; readonly header: string; readonly unit: UnitProblem }
   | { readonly about: "result kind"; readonly header: string; readonly unit: Unit; readonly wanted: Unit }
   | { readonly about: "several rows"; readonly rows: number }

@@ -11,26 +11,33 @@ import { ResultColumns } from "./resultColumns.js";
 import { knownUnit } from "./resultUnit.js";
 
 /** A quantity of any kind into the unit asked for, with its uncertainties; exact slopes, no differences. */
-export function evaluateConversion(definition: ConversionDefinition, call: CallInputs, unit: Unit): Block {
+export function evaluateConversion(
+  definition: ConversionDefinition,
+  call: CallInputs,
+  unit: Unit,
+  header: string,
+): Block {
   return eachQuantity(definition, call, (reading, row, results) => {
     if (!convertible(reading.unit, unit)) {
-      return results.fail(
-        row,
-        cellProblem(definition, { about: "result kind", header: unit.text, unit, wanted: reading.unit }),
-      );
+      return results.fail(row, cellProblem(definition, { about: "result kind", header, unit, wanted: reading.unit }));
     }
     const same = reading.unit.text === unit.text;
     const base = toBase(reading.unit, reading.value);
     const value = same ? reading.value : fromBase(unit, base);
     if (!Number.isFinite(value)) {
       const text = valueText(reading.value, reading.unit);
-      return results.fail(row, cellProblem(definition, { about: "beyond numbers", input: "value", value: text }));
+      const problem = { about: "beyond numbers", input: "value", value: text, asked: unit } as const;
+      return results.fail(row, cellProblem(definition, problem));
     }
     results.numbers[row] = value;
     if (reading.upper === undefined || reading.lower === undefined) return;
     const sides = reading.upper === reading.lower ? 1 : 2;
     const slope = same ? 1 : baseSlope(reading.unit, base) / baseSlope(unit, base);
-    results.setSigma(row, reading.upper * slope, reading.lower * slope, sides);
+    const [upper, lower] = [reading.upper * slope, reading.lower * slope];
+    if (!Number.isFinite(upper) || !Number.isFinite(lower)) {
+      results.failSigma(row, cellProblem(definition, { about: "uncertainty beyond numbers", result: "value" }), sides);
+    }
+    results.setSigma(row, upper, lower, sides);
   });
 }
 
@@ -45,7 +52,7 @@ function eachQuantity(
   call: CallInputs,
   answer: (reading: CellReading, row: number, results: ResultColumns) => void,
 ): Block {
-  const results = new ResultColumns(call.rows);
+  const results = new ResultColumns(call.rows, call.filledDown);
   const { columns, headers, input } = call.inputs[0]!;
   const error = (problem: CallProblem | CellError) =>
     problem instanceof CellError ? problem : cellProblem(definition, problem);
@@ -64,7 +71,13 @@ function eachQuantity(
             return readCell(`uncertainty of ${input.name}`, cellAt(column, row), header, reading.unit.kind);
           });
     const bad = sigmas.find((sigma) => sigma instanceof CellError || "about" in sigma);
-    if (bad) results.failSigma(row, error(bad as CallProblem | CellError));
+    if (bad && definition.form === "conversion")
+      results.failSigma(row, error(bad as CallProblem | CellError), columns.length - 1);
+    else if (bad && !("about" in bad && bad.about === "blank")) {
+      // A text has no cell beside it to tell of an uncertainty that does not read; one that is not known is left out.
+      results.fail(row, error(bad as CallProblem | CellError));
+      continue;
+    }
     const slope = baseSlope(reading.unit, toBase(reading.unit, reading.value));
     const [upper, lower = upper] = (bad ? [] : (sigmas as CellReading[])).map((sigma) =>
       sigma.unit.text === reading.unit.text
@@ -82,7 +95,7 @@ export function evaluateLookup(
   call: CallInputs,
   unitOfResult: (own: Unit) => Unit | CallProblem,
 ): Block {
-  const results = new ResultColumns(call.rows);
+  const results = new ResultColumns(call.rows, call.filledDown);
   const { columns, input } = call.inputs[0]!;
   const fail = (row: number, problem: CallProblem) => results.fail(row, cellProblem(definition, problem));
   for (let row = 0; row < call.rows; row++) {
@@ -96,7 +109,14 @@ export function evaluateLookup(
         const own = knownUnit(answer.unit);
         const unit = unitOfResult(own);
         if ("about" in unit) fail(row, unit);
-        else results.numbers[row] = unit.text === own.text ? answer.value : fromBase(unit, toBase(own, answer.value));
+        else {
+          const value = unit.text === own.text ? answer.value : fromBase(unit, toBase(own, answer.value));
+          results.numbers[row] = value;
+          if (!Number.isFinite(value)) {
+            const text = valueText(answer.value, own);
+            fail(row, { about: "beyond numbers", input: String(cell), value: text, asked: unit });
+          }
+        }
       } else if (answer.problem === "unit") {
         fail(row, { about: "unit", input: input.name, at: { place: "text", text: String(cell) }, unit: answer.unit });
       } else

@@ -4,9 +4,11 @@ import { type BlockReader, blockRows, quantityReader, type Report, wordReader } 
 import type { CallProblem } from "./callProblem.js";
 import { CellError } from "./cell.js";
 import { cellProblem } from "./cellProblem.js";
-import type { Block } from "./column.js";
+import { type Block, cellAt } from "./column.js";
+import { shorten } from "./explain.js";
 import type { CallInputs } from "./inputColumns.js";
 import { isWithin, type OpenRange, openRange } from "./range.js";
+import { valueText } from "./readCell.js";
 import { ResultColumns } from "./resultColumns.js";
 import { slopeScratch, slopes } from "./slopes.js";
 
@@ -20,7 +22,7 @@ export function evaluateNumber(definition: NumberDefinition, call: CallInputs, u
       : quantityReader(cells, cells.input as never, size),
   );
   const bases = readers.map((reader) => reader.base);
-  const results = new ResultColumns(rows);
+  const results = new ResultColumns(rows, call.filledDown);
   const values = new Float64Array(size);
   const range = openRange(definition.result.quantity);
   const uncertainty = new BlockUncertainty(definition, readers, bases, size);
@@ -67,20 +69,25 @@ function reportTo(results: ResultColumns, definition: NumberDefinition, from: nu
     problem instanceof CellError ? problem : cellProblem(definition, problem);
   return {
     value: (row, problem) => results.fail(from + row, error(problem)),
-    sigma: (row, problem) => results.failSigma(from + row, error(problem)),
+    sigma: (row, problem) => results.failSigma(from + row, error(problem), 1),
   };
 }
 
 function noResult(definition: NumberDefinition, call: CallInputs, row: number): CallProblem {
-  const values = call.inputs
-    .filter(({ columns }) => columns.length > 0)
-    .map(({ input, columns, headers, single }) => {
-      const at = single ? 0 : row;
-      const cell = columns[0]!.others?.[at] ?? columns[0]!.numbers[at];
-      const unit = typeof cell === "number" ? headers[0]?.unit?.text : undefined;
-      return `${input.name} ${cell}${unit && unit !== "1" ? ` ${unit}` : ""}`;
+  const values = () =>
+    call.inputs.flatMap(({ input, columns, headers, single }) => {
+      const cell = columns.length > 0 ? cellAt(columns[0]!, single ? 0 : row) : null;
+      if (cell === null || cell === "") return [];
+      const unit = headers[0]?.unit;
+      return `${input.name} ${typeof cell === "number" && unit ? valueText(cell, unit) : shorten(String(cell))}`;
     });
-  return { about: "no result", result: definition.result.quantity.name, values: values.join(", ") };
+  return {
+    about: "no result",
+    result: definition.result.quantity.name,
+    get values() {
+      return values().join(", ");
+    },
+  };
 }
 
 /** First-order propagation with independent inputs, each side apart (JCGM 100, 5.1.2). */
@@ -125,7 +132,13 @@ class BlockUncertainty {
     for (let row = 0; row < rows; row++) {
       if (sides[row] === 0 || Number.isNaN(values[row])) continue;
       const scale = 1 / Math.abs(baseSlope(unit, values[row]!));
-      results.setSigma(from + row, Math.sqrt(above[row]!) * scale, Math.sqrt(below[row]!) * scale, sides[row]!);
+      const upper = Math.sqrt(above[row]!) * scale;
+      const lower = Math.sqrt(below[row]!) * scale;
+      if (!Number.isFinite(upper) || !Number.isFinite(lower)) {
+        const result = this.definition.result.quantity.name;
+        results.failSigma(from + row, cellProblem(this.definition, { about: "uncertainty beyond numbers", result }), 1);
+      }
+      results.setSigma(from + row, upper, lower, sides[row]!);
     }
   }
 }

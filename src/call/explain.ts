@@ -1,3 +1,4 @@
+import { argumentNames } from "../functions/argumentNames.js";
 import type { Definition, Input } from "../functions/definition.js";
 import type { Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
@@ -21,19 +22,19 @@ export function explain(definition: Definition, problem: CallProblem): string {
 function sentenceOf(definition: Definition, problem: CallProblem): string {
   switch (problem.about) {
     case "too many arguments":
-      return `${problem.given} arguments were given and it takes ${problem.most}: ${argumentList(definition)}.`;
+      return `${problem.given} arguments were given, and it takes at most ${problem.most}: ${argumentList(definition)}.`;
     case "missing":
-      return `${problem.input} is missing; it needs ${argumentList(definition)}.`;
+      return `${problem.input} is missing; the arguments are ${argumentList(definition)}.`;
     case "blank":
       return `${problem.input} is blank; ${remedy(definition, problem.input)}.`;
     case "no unit":
       return `${problem.input} is ${problem.value} with no unit; ${headerRemedy(definition, problem)}.`;
     case "unit":
-      return `${problem.input} has ${placeOf(problem.at)}; ${unitSentence(problem.unit)}.`;
+      return `${problem.input} ${placeOf(problem.at)}; ${unitSentence(problem.unit, quantityOf(definition, problem.input)?.unit)}.`;
     case "wrong kind":
-      return `${problem.input} is ${problem.value}${fromHeader(problem.at)}, ${unitPhrase(problem.unit)}; ${kindPhrase(problem.wanted)} is needed, for example ${exampleOf(definition, problem.input)}.`;
+      return `${problem.input} is ${problem.value}${fromHeader(problem.at)}, ${unitPhrase(problem.unit)}; ${kindPhrase(problem.wanted)} is needed, for example ${kindRemedy(definition, problem)}.`;
     case "disagreement":
-      return `${problem.input} is ${quote(problem.text)}, ${kindPhrase(problem.unit.kind)}, but its header ${headerText(problem.header)} says ${problem.headerUnit.text}, ${kindPhrase(problem.headerUnit.kind)}; make the two agree.`;
+      return `${problem.input} is ${quote(problem.text)}, ${kindPhrase(problem.unit.kind)}, but its header ${headerText(problem.header)} says ${problem.headerUnit.text}, ${kindPhrase(problem.headerUnit.kind)}; make the two agree, for example with the header ${headerWith(problem.header.text, problem.unit.text)}.`;
     case "not a number":
       return `${problem.input} is ${problem.value}, not a number; ${problem.hint ? `write ${problem.hint}` : remedy(definition, problem.input)}.`;
     case "bound":
@@ -41,23 +42,27 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
     case "zero or blank":
       return `${problem.input} is 0 or blank; it must be above 0, because ${problem.bound.reason}; for example ${exampleOf(definition, problem.input)}.`;
     case "beyond numbers":
-      return `${problem.input} is ${problem.value}, beyond what a number can hold; for example ${exampleOf(definition, problem.input)} works.`;
+      return problem.asked
+        ? `${problem.input} is ${problem.value}, which no number can hold in ${problem.asked.text}; ask for another unit.`
+        : `${problem.input} is ${problem.value}, beyond what a number can hold; for example ${exampleOf(definition, problem.input)} works.`;
+    case "uncertainty beyond numbers":
+      return `the uncertainty of ${problem.result} is beyond what a number can hold; look for a slip in the uncertainties of its inputs.`;
     case "word":
-      return `${problem.input} is ${quote(problem.text)}; it must be one of ${problem.words.join(", ")}${problem.nearest ? `; did you mean ${problem.nearest}?` : "."}`;
+      return `${problem.input} is ${quote(problem.text)}; it must be ${anyOf(problem.words.map((word) => `"${word}"`))}${problem.nearest ? `; did you mean "${problem.nearest}"?` : "."}`;
     case "lengths":
       return `${problem.input} has ${rowCount(problem.rows)} and ${problem.other} has ${problem.otherRows}; columns of one call need the same number of rows, or one row each.`;
     case "shape":
-      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column, two with its uncertainty, or three with upper and lower uncertainty.`;
+      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${mayHaveUncertainty(definition, problem.input) ? ", two with its uncertainty, or three with upper and lower uncertainty" : ""}.`;
     case "header count":
-      return `${problem.given} header cells were given for ${problem.inputs} inputs${problem.columns === problem.inputs ? "" : ` in ${problem.columns} columns`}; give one for each input${problem.columns === problem.inputs ? "" : " or one for each column"}, in their order.`;
+      return headerCountSentence(problem);
     case "no result":
       return `no ${problem.result} follows from ${problem.values}; ${unanswered(definition)}.`;
     case "result unit missing":
       return problem.header === undefined
         ? `the unit of the result is missing; give it last, for example ${definition.name}("1 jupiterMass", , "earthMass").`
-        : `the result header ${quote(problem.header)} states no unit; write it in square brackets, for example ${quote(`${problem.header || "Result"} [${defaultUnit(definition)}]`)}.`;
+        : resultHeaderSentence(definition, problem.header);
     case "result unit":
-      return `the result header is ${quote(problem.header)}; ${unitSentence(problem.unit)}.`;
+      return `the result header is ${quote(problem.header)}; ${unitSentence(problem.unit, defaultUnit(definition))}.`;
     case "result kind":
       return resultKindSentence(problem);
     case "several rows":
@@ -69,36 +74,75 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
   }
 }
 
-function unitSentence(problem: UnitProblem): string {
+/** `wanted` is a unit that would do, where one is known. */
+function unitSentence(problem: UnitProblem, wanted?: string): string {
   switch (problem.problem) {
     case "unknown unit": {
       const near = problem.nearest;
       const meant =
         near && (near.spelling === near.symbol ? `"${near.symbol}"` : `"${near.spelling}" (${near.symbol})`);
-      return `${quote(problem.text)} is not a known unit${meant ? `; did you mean ${meant}?` : '; for example "d", "m/s" or "solMass" is'}`;
+      return `${quote(problem.text)} is not a known unit${meant ? `; did you mean ${meant}?` : `; for example ${knownUnits(wanted)} is`}`;
     }
     case "ambiguous unit": {
       const choices = problem.choices.map((choice) => `"${choice.symbol}" (${choice.meaning})`);
-      return `${quote(problem.text)} has more than one meaning; write ${choices.join(" or ")}`;
+      return `${quote(problem.text)} has more than one meaning; write ${anyOf(choices)}`;
     }
     case "unit grammar":
       return `${quote(problem.text)} reads in more than one way; write ${quote(problem.write)}`;
   }
 }
 
+function knownUnits(wanted: string | undefined): string {
+  return wanted === undefined || wanted === "1" ? '"d", "m/s" or "solMass"' : `"${wanted}"`;
+}
+
 function unanswered(definition: Definition): string {
   const reason = definition.form === "number" ? definition.unanswered : undefined;
-  return reason ?? "together these values are outside the physics, look at the largest first";
+  return reason ?? "together these values are outside the physics, look for one that is far too large or too small";
 }
 
 function resultKindSentence(problem: Extract<CallProblem, { about: "result kind" }>): string {
   const { header, unit, wanted } = problem;
-  const name = readHeader(header).name || header;
-  const write =
-    unit.text === header
-      ? `"${shorten(name)} [${wanted.text}]" or "${wanted.text}"`
-      : `"${shorten(name)} [${wanted.text}]"`;
-  return `the result is ${unitPhrase(wanted)}, but its header ${quote(header)} asks for ${unit.text}, ${unitPhrase(unit)}; write for example ${write}.`;
+  return `the result is ${unitPhrase(wanted)}, but its header ${quote(header)} asks for ${unit.text}, ${unitPhrase(unit)}; write for example ${headerWith(header, wanted.text)}.`;
+}
+
+function headerCountSentence(problem: Extract<CallProblem, { about: "header count" }>): string {
+  const { given, inputs, columns } = problem;
+  const came = given === 1 ? "1 header cell was" : `${given} header cells were`;
+  const wanted = inputs === 1 ? "1 input" : `${inputs} inputs`;
+  return columns === inputs
+    ? `${came} given for ${wanted}; give one for each input, in their order.`
+    : `${came} given for ${wanted} in ${columns} columns; give one for each input or one for each column, in their order.`;
+}
+
+function resultHeaderSentence(definition: Definition, header: HeaderCell): string {
+  const unit = defaultUnit(definition);
+  if (header.isNumber) {
+    const place = header.address ? ` ${header.address}` : "";
+    return `the result header${place} is the number ${header.text}; keep the header row in place with $ (G$1), or type the unit there, for example "${unit ?? "km/s"}".`;
+  }
+  const text = header.text.trim();
+  const came = text === "" ? "the result header is blank" : `the result header ${quote(text)} states no unit`;
+  return unit === undefined
+    ? `${came}; write a unit, for example "km/s", or a header with its unit in square brackets, for example "Period [d]".`
+    : `${came}; write the unit in square brackets, for example "${text === "" ? "Result" : shorten(text)} [${unit}]".`;
+}
+
+/** A header rewritten with another unit. One that is a unit as a whole may be a column's short name: "K" is kelvin, too. */
+function headerWith(header: string, unit: string): string {
+  const name = readHeader(header).name || (header.trim().length <= 2 ? header.trim() : "");
+  return name === "" ? `"${unit}"` : `"${shorten(name)} [${unit}]"`;
+}
+
+function kindRemedy(definition: Definition, problem: Extract<CallProblem, { about: "wrong kind" }>): string {
+  const unit = quantityOf(definition, problem.input)?.unit;
+  return problem.at.place === "header" && unit
+    ? `with the header ${headerWith(problem.at.header.text, unit)}`
+    : exampleOf(definition, problem.input);
+}
+
+function anyOf(choices: readonly string[]): string {
+  return choices.length === 1 ? choices[0]! : `${choices.slice(0, -1).join(", ")} or ${choices.at(-1)}`;
 }
 
 function headerRemedy(definition: Definition, problem: Extract<CallProblem, { about: "no unit" }>): string {
@@ -115,7 +159,7 @@ function headerRemedy(definition: Definition, problem: Extract<CallProblem, { ab
 }
 
 function placeOf(at: UnitPlace): string {
-  return at.place === "header" ? `the header ${headerText(at.header)}` : `the value ${quote(at.text)}`;
+  return at.place === "header" ? `has the header ${headerText(at.header)}` : `is ${quote(at.text)}`;
 }
 
 function fromHeader(at: UnitPlace): string {
@@ -144,12 +188,12 @@ function remedy(definition: Definition, input: string): string {
 
 function kindOfInput(definition: Definition, input: string): string {
   const quantity = quantityOf(definition, input);
-  return quantity ? kindPhrase(quantity.kind) : "a quantity";
+  return quantity ? kindPhrase(quantity.kind) : takesQuantity(definition) ? "a quantity" : "a text";
 }
 
 function exampleOf(definition: Definition, input: string): string {
   const quantity = quantityOf(definition, input);
-  if (!quantity) return definition.examples[0].cells[0]!;
+  if (!quantity) return quote(definition.examples[0].cells[0]!);
   return quantity.unit === "1" ? `${quantity.example}` : `${quantity.example} ${quantity.unit}`;
 }
 
@@ -159,24 +203,21 @@ function quantityOf(definition: Definition, input: string): Quantity | undefined
   return found?.takes === "quantity" ? found.quantity : undefined;
 }
 
-function defaultUnit(definition: Definition): string {
-  return definition.form === "number" ? definition.result.unit : "km/s";
+function defaultUnit(definition: Definition): string | undefined {
+  return definition.form === "number" ? definition.result.unit : undefined;
 }
 
 function argumentList(definition: Definition): string {
-  const inputs = definition.inputs.map((input) => (isOptional(input) ? `[${input.name}]` : input.name));
-  const headers = definition.form === "lookup" ? [] : ["[headers]"];
-  const result =
-    definition.form === "number" || (definition.form === "lookup" && definition.takesResult)
-      ? ["[result]"]
-      : definition.form === "conversion"
-        ? ["result"]
-        : [];
-  return [...inputs, ...headers, ...result].join(", ");
+  return argumentNames(definition).join(", ");
 }
 
-function isOptional(input: Input): boolean {
-  return input.takes === "word" || (input.takes === "quantity" && input.fallback !== undefined);
+function mayHaveUncertainty(definition: Definition, input: string): boolean {
+  return quantityOf(definition, input) !== undefined || takesQuantity(definition);
+}
+
+/** Whether its one input is a quantity of any kind, not a text. */
+function takesQuantity(definition: Definition): boolean {
+  return definition.form === "conversion" || definition.form === "text";
 }
 
 function rowCount(rows: number): string {
@@ -187,7 +228,7 @@ export function quote(text: string): string {
   return `"${shorten(text)}"`;
 }
 
-function shorten(text: string): string {
+export function shorten(text: string): string {
   const line = text.replace(/\s+/g, " ");
   return line.length <= 40 ? line : `${line.slice(0, 39)}\u2026`;
 }

@@ -1,8 +1,9 @@
 import type { Definition, Input } from "../functions/definition.js";
-import { assignHeaders } from "./assignHeaders.js";
+import { assignHeaders, type HeaderAssignment } from "./assignHeaders.js";
 import type { CallProblem, HeaderCell } from "./callProblem.js";
 import type { Column } from "./column.js";
 import { type HeaderUnit, headerUnit, noHeader } from "./headerUnit.js";
+import { fits } from "./readCell.js";
 
 /** The cells one input was given, with what their headers say; no columns where the input was left out. */
 export interface InputColumns {
@@ -17,6 +18,8 @@ export interface InputColumns {
 /** The inputs of a call, ready to be read row by row. */
 export interface CallInputs {
   readonly rows: number;
+  /** One call filled down over the rows, not one call with columns. */
+  readonly filledDown: boolean;
   readonly inputs: readonly InputColumns[];
 }
 
@@ -30,6 +33,7 @@ export function callInputs(
   definition: Definition,
   given: readonly (GivenCells | undefined)[],
   headers: readonly HeaderCell[],
+  filledDown: boolean,
 ): CallInputs | CallProblem {
   const { inputs } = definition;
   for (let index = 0; index < inputs.length; index++) {
@@ -51,10 +55,12 @@ export function callInputs(
   }
   const headed = inputs.filter(takesHeader);
   const widths = headed.map((input) => given[inputs.indexOf(input as never)]?.columns.length ?? 0);
-  const assigned = assignHeaders(headers, widths);
-  if ("about" in assigned) return assigned;
+  const ways = assignHeaders(headers, widths);
+  if ("about" in ways) return ways;
+  const assigned = ways.find((way) => agrees(way, headed, widths)) ?? ways[0]!;
   return {
     rows,
+    filledDown,
     inputs: inputs.map((input, index) => {
       const cells = given[index];
       const own = takesHeader(input) ? assigned[headed.indexOf(input)]! : [];
@@ -68,6 +74,16 @@ export function callInputs(
       };
     }),
   };
+}
+
+/** Whether every unit that is stated is of the kind of its input; headers of omitted inputs do not count. */
+function agrees(way: HeaderAssignment, inputs: readonly Input[], widths: readonly number[]): boolean {
+  return inputs.every((input, index) =>
+    way[index]!.slice(0, widths[index]).every((header) => {
+      const unit = header && headerUnit(input.name, header).unit;
+      return !unit || fits(unit, input.takes === "quantity" ? input.quantity.kind : undefined);
+    }),
+  );
 }
 
 function takesHeader(input: Input): boolean {

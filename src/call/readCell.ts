@@ -33,7 +33,8 @@ export function readCell(
   const quantity = readQuantity(cell);
   if (isProblem(quantity)) {
     if (quantity.problem === "not a number") {
-      return { about: "not a number", input, value: quote(cell), hint: quantity.hint };
+      const value = cell.trim() === "" ? "an empty text" : quote(cell);
+      return { about: "not a number", input, value, hint: quantity.hint };
     }
     return { about: "unit", input, at: { place: "text", text: cell }, unit: quantity };
   }

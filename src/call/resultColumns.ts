@@ -9,10 +9,15 @@ import type { Block, Column, OtherCell } from "./column.js";
 export class ResultColumns {
   readonly numbers: Float64Array;
   private others: (OtherCell | undefined)[] | undefined;
-  private sigmas: { upper: Float64Array; lower: Float64Array; cells: (OtherCell | undefined)[] } | undefined;
-  private asymmetric = false;
+  private sigmas:
+    | { upper: Float64Array; lower: Float64Array; cells: (OtherCell | undefined)[]; sides: Uint8Array }
+    | undefined;
 
-  constructor(private readonly rows: number) {
+  /** `filledDown`: each row is a call of its own, so its width does not depend on the other rows. */
+  constructor(
+    private readonly rows: number,
+    private readonly filledDown: boolean,
+  ) {
     this.numbers = new Float64Array(rows);
   }
 
@@ -23,14 +28,15 @@ export class ResultColumns {
     this.numbers[row] = Number.NaN;
   }
 
-  failSigma(row: number, error: CellError): void {
-    const { cells } = this.sigmaColumns();
+  failSigma(row: number, error: CellError, count: number): void {
+    const { cells, sides } = this.sigmaColumns();
     if (cells[row] === null || cells[row] === undefined) cells[row] = error;
+    sides[row] = Math.max(sides[row]!, count);
   }
 
-  setSigma(row: number, upper: number, lower: number, sides: number): void {
-    if (sides > 1) this.asymmetric = true;
+  setSigma(row: number, upper: number, lower: number, count: number): void {
     const sigmas = this.sigmaColumns();
+    sigmas.sides[row] = Math.max(sigmas.sides[row]!, count);
     if (sigmas.cells[row] !== null) return;
     sigmas.upper[row] = upper;
     sigmas.lower[row] = lower;
@@ -43,15 +49,18 @@ export class ResultColumns {
     if (others) for (let row = 0; row < rows; row++) if (others[row] !== undefined) numbers[row] = Number.NaN;
     if (!sigmas) return { rows, columns: [value] };
     // A row without a value has no uncertainty either: its error stands once, in the value's cell.
-    const cells = sigmas.cells.map((cell, row) => (others?.[row] === undefined ? cell : null));
-    const side = (source: Float64Array): Column => {
+    const failed = (row: number) => others?.[row] !== undefined;
+    const cellsOf = (least: number) =>
+      sigmas.cells.map((cell, row) => (failed(row) || (this.filledDown && sigmas.sides[row]! < least) ? null : cell));
+    const side = (source: Float64Array, cells: readonly (OtherCell | undefined)[]): Column => {
       cells.forEach((cell, row) => {
         if (cell !== undefined) source[row] = Number.NaN;
       });
       return { length: rows, numbers: source, others: cells.some((cell) => cell !== undefined) ? cells : undefined };
     };
-    const columns = this.asymmetric ? [value, side(sigmas.upper), side(sigmas.lower)] : [value, side(sigmas.upper)];
-    return { rows, columns };
+    const first = side(sigmas.upper, cellsOf(1));
+    const asymmetric = sigmas.sides.some((count, row) => count > 1 && !failed(row));
+    return { rows, columns: asymmetric ? [value, first, side(sigmas.lower, cellsOf(2))] : [value, first] };
   }
 
   private sigmaColumns() {
@@ -59,6 +68,7 @@ export class ResultColumns {
       upper: new Float64Array(this.rows),
       lower: new Float64Array(this.rows),
       cells: new Array<OtherCell | undefined>(this.rows).fill(null),
+      sides: new Uint8Array(this.rows),
     };
     return this.sigmas;
   }

@@ -24,7 +24,7 @@ export function askedUnit(argument: Argument, kind: Kind | undefined): Unit | Ca
   if (reading.problem) return { about: "result unit", header: text, unit: reading.problem };
   if (reading.unit) return reading.unit;
   if (kind !== undefined && isPlainNumberKind(kind)) return undefined;
-  return bareUnitProblem(text.trim(), kind) ?? { about: "result unit missing", header: text };
+  return bareUnitProblem(text.trim(), kind) ?? { about: "result unit missing", header };
 }
 
 /** A single word may be a column's name or a unit with a slip in it: it is a unit if one of the right kind is near. */

@@ -62,7 +62,7 @@ export const minimumMass: Quantity = {
   ...planetMass,
   name: "minimum mass",
   meaning: "mass of the planet if its orbit is seen edge-on (sin i = 1)",
-  headers: ["m sin i", "msini", "M sin i", "Mp sin i", "minimum mass"],
+  headers: ["m sin i", "msini", "Mp sin i", "minimum mass"],
 };
 
 export const totalMass: Quantity = {
@@ -237,6 +237,15 @@ export const wavelengthInVacuum: Quantity = {
   upper: longest,
   headers: ["lambda_vac", "vacuum wavelength"],
 };
+
+/** As results: a limit of one medium is not that of the other. */
+export const airWavelength: Quantity = {
+  ...wavelengthInAir,
+  lower: positive("a wavelength is positive"),
+  upper: undefined,
+};
+
+export const vacuumWavelength: Quantity = { ...wavelengthInVacuum, lower: airWavelength.lower, upper: undefined };
 
 export const wavelengthShift: Quantity = {
   ...anyWavelength,

@@ -14,6 +14,10 @@ export const ambiguousUnits: Readonly<Record<string, readonly UnitChoice[]>> = {
     { symbol: "earthRad", meaning: "Earth radius" },
   ],
   L: [{ symbol: "solLum", meaning: "solar luminosity" }],
+  as: [
+    { symbol: "arcsec", meaning: "second of arc" },
+    { symbol: "10**-18s", meaning: "attosecond" },
+  ],
   MJ: [jupiterMass, { symbol: "10**6J", meaning: "megajoule" }],
   Mj: [jupiterMass, { symbol: "10**6J", meaning: "megajoule" }],
   RJ: [
@@ -33,10 +37,10 @@ export const ambiguousUnits: Readonly<Record<string, readonly UnitChoice[]>> = {
   ],
   Ms: [solMass, { symbol: "10**6s", meaning: "megasecond" }],
   MS: [solMass, { symbol: "10**6s", meaning: "megasecond" }],
-  mn: [minute, { symbol: "d", meaning: "a month has no fixed length; write days" }],
-  mon: [{ symbol: "d", meaning: "a month has no fixed length; write days" }],
-  month: [{ symbol: "d", meaning: "a month has no fixed length; write days" }],
-  months: [{ symbol: "d", meaning: "a month has no fixed length; write days" }],
+  mn: [minute, { symbol: "d", meaning: "day; a month has no fixed length" }],
+  mon: [{ symbol: "d", meaning: "day; a month has no fixed length" }],
+  month: [{ symbol: "d", meaning: "day; a month has no fixed length" }],
+  months: [{ symbol: "d", meaning: "day; a month has no fixed length" }],
   "'": [minute, { symbol: "arcmin", meaning: "minute of arc" }],
   '"': [
     { symbol: "arcsec", meaning: "second of arc" },

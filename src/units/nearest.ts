@@ -3,13 +3,13 @@
  * `word`, if that is near enough to be meant; a difference in capitals counts half a slip.
  */
 export function nearest(word: string, candidates: Iterable<string>): string | undefined {
-  const allowed = word.length <= 3 ? 1 : word.length <= 6 ? 2 : 3;
+  const allowed = word.length <= 4 ? 1 : word.length <= 7 ? 2 : 3;
   let best: string | undefined;
   let fewest = allowed + 0.25;
   for (const candidate of candidates) {
     if (Math.abs(candidate.length - word.length) > allowed) continue;
     const slips = distance(word, candidate);
-    if (slips < fewest && slips < Math.max(word.length, candidate.length)) {
+    if (slips < fewest && slips < word.length) {
       fewest = slips;
       best = candidate;
     }

@@ -5,6 +5,8 @@ export function quantityText(quantity: QuantityReading): string {
   const { value, upper, lower, unit } = quantity;
   const both = upper === lower;
   const sigma = upper === undefined ? "" : both ? ` \u00b1 ${upper}` : ` +${upper} -${lower}`;
-  const suffix = !unit || unit.text === "1" ? "" : ` ${unit.text}`;
+  // A unit that begins with a number would be read on as part of the value.
+  const symbol = unit && /^\d/.test(unit.text) ? `[${unit.text}]` : unit?.text;
+  const suffix = !unit || unit.text === "1" ? "" : ` ${symbol}`;
   return `${value}${sigma}${suffix}`;
 }

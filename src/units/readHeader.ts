@@ -10,11 +10,13 @@ export interface HeaderReading {
 }
 
 const square = /^(.*)\[((?:[^[\]]|\[[^[\]]*\])*)\]([^[\]]*)$/s;
+// A word, a space and a bracket, `K (m/s)`, is a name with its unit although it could be read as a product.
+const namedBracket = /\s\(/;
 const round = /^(.*)\(((?:[^()]|\([^()]*\))*)\)([^()]*)$/s;
 
 /**
- * The unit of a header: its last square brackets, `Period [d]`; else its last round brackets where they hold a unit;
- * else the whole cell where it is a unit itself (a units row).
+ * The unit of a header: its last square brackets, `Period [d]`; else the whole cell where it is a unit itself (a units
+ * row); else its last round brackets where they hold a unit.
  */
 export function readHeader(text: string): HeaderReading {
   const squared = square.exec(text);
@@ -23,15 +25,16 @@ export function readHeader(text: string): HeaderReading {
     const name = nameAround(squared);
     return isProblem(unit) ? { name, unit: undefined, problem: unit } : { name, unit, problem: undefined };
   }
+  const inside = squared ? squared[2]! : text;
+  const whole = inside.trim() === "" ? undefined : readUnit(inside);
+  const unit = whole && !isProblem(whole) ? whole : undefined;
+  if (unit && !namedBracket.test(inside.trim())) return { name: "", unit, problem: undefined };
   const rounded = round.exec(text);
   if (rounded && rounded[1] !== "" && rounded[2]!.trim() !== "") {
     const unit = readUnit(rounded[2]!);
     if (!isProblem(unit)) return { name: nameAround(rounded), unit, problem: undefined };
     if (unit.problem === "ambiguous unit") return { name: nameAround(rounded), unit: undefined, problem: unit };
   }
-  const inside = squared ? squared[2]! : text;
-  const whole = inside.trim() === "" ? undefined : readUnit(inside);
-  const unit = whole && !isProblem(whole) ? whole : undefined;
   return { name: unit ? "" : text.trim(), unit, problem: undefined };
 }
 

@@ -27,10 +27,14 @@ export function readInstant(text: string): QuantityReading | undefined {
     number,
   ];
   const second = Number(match[6] ?? 0);
-  const midnight = Date.UTC(year, month - 1, day);
-  const date = new Date(midnight);
+  // Not Date.UTC, which takes the years 0 to 99 for those of the twentieth century.
+  const date = new Date(0);
+  date.setUTCFullYear(year, month - 1, day);
+  const midnight = date.getTime();
   const exists = date.getUTCMonth() === month - 1 && date.getUTCDate() === day;
-  if (!exists || hour > 24 || minute > 59 || second >= 61) return undefined;
+  const endOfDay = hour === 24 && minute === 0 && second === 0;
+  if (!exists || (hour > 23 && !endOfDay) || minute > 59 || second >= 61) return undefined;
+  if (Number(match[8] ?? 0) > 14 || Number(match[9] ?? 0) > 59) return undefined;
   const offset = match[7] ? (match[7] === "-" ? 1 : -1) * (Number(match[8]) * 60 + Number(match[9])) : 0;
   const days = midnight / 86400000 + unixEpochJulianDate - julianDateOfEpoch;
   const value = days + ((hour * 60 + minute + offset) * 60 + second) / 86400;

@@ -15,6 +15,10 @@ const form = new RegExp(
   "s",
 );
 
+// Brackets around the unit are those of a header, not the logarithm that they are inside one.
+const squared = /^\[([^[\]]*)\]$/;
+const uncertaintyAfterUnit = new RegExp(`^([^\u00b1]*?)\\s*${plusMinus}\\s*(${number})[^\u00b1]*$`, "s");
+
 /**
  * Reads a quantity text: `4.23 d`, `0.47 \u00b1 0.02 jupiterMass`, `4.2308(2) d` (the digits in brackets are the
  * uncertainty of the last digits), `0.47 +- 0.02`, `0.47 +0.03 -0.02 jupiterMass`, an ISO 8601 instant.
@@ -26,9 +30,14 @@ export function readQuantity(text: string): QuantityReading | QuantityProblem {
   if (!match) return { problem: "not a number", text, hint: undefined };
   const [, open, value, bracket, exponent, both, upper, lower, close, rest = ""] = match;
   if (Boolean(open) !== Boolean(close)) return { problem: "not a number", text, hint: undefined };
-  if (/^,\d/.test(rest)) return { problem: "not a number", text, hint: `${value}.${/^,(\d+)/.exec(rest)![1]}` };
+  const comma = /^,(\d+)(.*)$/s.exec(rest);
+  if (comma) return { problem: "not a number", text, hint: withoutComma(value!, comma[1]!, comma[2]!) };
+  const late = uncertaintyAfterUnit.exec(rest);
+  if (late && !bracket && !both && !upper) {
+    return { problem: "not a number", text, hint: `${value} \u00b1 ${late[2]} ${late[1]!.trim()}` };
+  }
   if (/^\s*[-+.\d]/.test(rest)) return { problem: "not a number", text, hint: undefined };
-  const unit = rest.trim() === "" ? undefined : readUnit(rest);
+  const unit = rest.trim() === "" ? undefined : readUnit(squared.exec(rest.trim())?.[1] ?? rest);
   if (unit && isProblem(unit)) return unit;
   const read = numberOf(value! + (exponent ?? ""));
   const sigmas =
@@ -39,6 +48,12 @@ export function readQuantity(text: string): QuantityReading | QuantityProblem {
     return { problem: "not a number", text, hint: undefined };
   }
   return { value: read, upper: absolute(sigmas[0]), lower: absolute(sigmas[1]), unit };
+}
+
+/** 4,23 is a decimal comma; 1,234 may also be a thousand and more. */
+function withoutComma(value: string, digits: string, rest: string): string {
+  const decimal = `${value}.${digits}${rest}`;
+  return digits.length === 3 ? `${decimal} or ${value}${digits}${rest}` : decimal;
 }
 
 function absolute(sigma: number | undefined): number | undefined {

@@ -9,6 +9,8 @@ import { unitText } from "./unitText.js";
 
 const remembered = new Map<string, Unit | UnitProblem>();
 const mostRemembered = 4096;
+/** Longer texts are prose; reading goes as deep as a text has brackets. */
+const longestUnit = 200;
 
 /**
  * Reads a unit: IVOA VOUnits 1.1 and what catalogues write instead of it (`km s-1`, `m/s^2`, `[cm/s2]`, `Mjup`, `days`).
@@ -17,6 +19,7 @@ const mostRemembered = 4096;
 export function readUnit(text: string): Unit | UnitProblem {
   const known = remembered.get(text);
   if (known) return known;
+  if (text.length > longestUnit) return { problem: "unknown unit", text, nearest: undefined };
   if (remembered.size >= mostRemembered) remembered.clear();
   const unit = read(plain(text));
   remembered.set(text, unit);
@@ -48,7 +51,7 @@ function read(text: string): Unit | UnitProblem {
   return isProblem(product) ? product : unitOf(product);
 }
 
-const logarithmForm = /^(log10|log|lg|dex|ln|exp)\s?\((.*)\)$/;
+const logarithmForm = /^(log10|log|lg|dex|ln)\s?\((.*)\)$/;
 
 /** `log(cm/s**2)`, `dex(cm/s2)`, `[cm/s2]` (the convention of machine-readable tables) and `dex` alone. */
 function readLogarithm(text: string): Unit | UnitProblem | undefined {
@@ -56,10 +59,9 @@ function readLogarithm(text: string): Unit | UnitProblem | undefined {
   const bracket = /^\[(.+)\]$/.exec(text);
   const [, name, inside] = bracket ? ["", "log", bracket[1]!] : (logarithmForm.exec(text) ?? []);
   if (name === undefined || inside === undefined) return undefined;
-  if (name === "exp") return { problem: "unit grammar", text, write: `ln(${inside})` };
   const unit = read(inside.trim());
   if (isProblem(unit)) return unit;
-  if (unit.logarithm || unit.plus !== 0) return { problem: "unit grammar", text, write: inside };
+  if (unit.logarithm || unit.plus !== 0 || unit.frame) return { problem: "unknown unit", text, nearest: undefined };
   const natural = name === "ln";
   return {
     ...unit,
@@ -70,7 +72,12 @@ function readLogarithm(text: string): Unit | UnitProblem | undefined {
 }
 
 function unitOf(product: UnitProduct): Unit | UnitProblem {
-  const { factors, scale, scaleText } = product;
+  const { scale, scaleText } = product;
+  // In the order of the spelling, so that the spelling reads back to the same bits.
+  const factors = [
+    ...product.factors.filter(({ power }) => power > 0),
+    ...product.factors.filter(({ power }) => power < 0),
+  ];
   const text = unitText(factors, scaleText);
   const single = factors.length === 1 && factors[0]!.power === 1 ? factors[0]! : undefined;
   const kind = kindOfProduct(factors.map(({ symbol, power }) => ({ row: symbol.row, power })));
@@ -87,7 +94,7 @@ function unitOf(product: UnitProduct): Unit | UnitProblem {
   }
   if (!single && kind === "mass") times *= gravitationalConstant;
   if (!(times > 0 && over > 0 && Number.isFinite(times / over) && times / over > 0)) {
-    return { problem: "unit grammar", text, write: "a unit whose scale a number can hold" };
+    return { problem: "unknown unit", text, nearest: undefined };
   }
   if (single?.symbol.row.symbol === "1" && !scaleText) return one;
   const meaning = single && !scaleText && !single.symbol.prefix ? single.symbol.row.meaning : text;

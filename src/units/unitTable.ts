@@ -112,15 +112,14 @@ export const unitTable: readonly UnitRow[] = [
   row("g", "gram (as GM, with the CODATA value of G)", G, "kg", { over: 1000, ...prefixed, words: ["gram", "grams"] }),
   row("u", "atomic mass unit", G * constant.atomicMassConstant, "kg", prefixed),
 
-  row("deg", "degree", Math.PI, "rad", {
-    over: 180,
+  row("deg", "degree", Math.PI / 180, "rad", {
     ...prefixed,
     spellings: ["\u00b0"],
     words: ["degree", "degrees", "degs"],
   }),
   row("rad", "radian", 1, "rad", { ...prefixed, words: ["radian", "radians"] }),
   row("arcmin", "minute of arc", Math.PI, "rad", { over: 10800, ...prefixed, spellings: ["\u2032"] }),
-  row("arcsec", "second of arc", Math.PI, "rad", { over: 648000, ...prefixed, spellings: ["\u2033", "as"] }),
+  row("arcsec", "second of arc", Math.PI, "rad", { over: 648000, ...prefixed, spellings: ["\u2033"] }),
   row("mas", "thousandth of a second of arc", Math.PI, "rad", { over: 648000000 }),
   row("hourangle", "hour of right ascension, 15 deg", Math.PI, "rad", { over: 12, source: practice }),
   row("sr", "steradian", 1, "rad^2", prefixed),

@@ -8,7 +8,7 @@ export const air: NumberDefinition = {
   name: "AIR",
   question: "What is this vacuum wavelength in air?",
   inputs: [required(quantity.wavelengthInVacuum), airFormula],
-  result: { quantity: quantity.wavelengthInAir, unit: "nm" },
+  result: { quantity: quantity.airWavelength, unit: "nm" },
   compute: airWavelengths,
   formula: "lambda_air = lambda_vac / n(lambda_vac); n the index of standard air (15 C, 101325 Pa, dry)",
   source: "Ciddor 1996, Appl. Opt. 35, 1566; Morton 2000, ApJS 130, 403 (coefficients from memory)",

@@ -13,5 +13,5 @@ export const lineShift: NumberDefinition = {
   unanswered: linearLimit,
   formula: "dlambda = lambda z, z the fractional shift of SHIFT",
   source: "relativistic Doppler shift of radial motion, Wright & Eastman 2014, PASP 126, 838",
-  examples: [{ cells: ["550 nm", "12.5 m/s"], gives: "2.29325315E-5 nm", because: "computed with 60 digits (mpmath)" }],
+  examples: [{ cells: ["550 nm", "12.5 m/s"], gives: "2.29325320E-5 nm", because: "computed with 60 digits (mpmath)" }],
 };

@@ -14,7 +14,7 @@ export const shift: NumberDefinition = {
   formula: "z = ((1 + v/c) / (1 - v/c))^(1/2) - 1; linear: z = v/c",
   source: "relativistic Doppler shift of radial motion, Wright & Eastman 2014, PASP 126, 838",
   examples: [
-    { cells: ["1 m/s"], gives: "3.3356409575447E-9", because: "computed with 60 digits (mpmath)" },
+    { cells: ["1 m/s"], gives: "3.3356409575448E-9", because: "computed with 60 digits (mpmath)" },
     { cells: ["1 m/s", "linear"], gives: "3.33564095198152E-9", because: "1 / 299792458, SI (2019)" },
   ],
 };

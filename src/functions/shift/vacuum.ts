@@ -8,7 +8,7 @@ export const vacuum: NumberDefinition = {
   name: "VACUUM",
   question: "What is this air wavelength in vacuum?",
   inputs: [required(quantity.wavelengthInAir), airFormula],
-  result: { quantity: quantity.wavelengthInVacuum, unit: "nm" },
+  result: { quantity: quantity.vacuumWavelength, unit: "nm" },
   compute: vacuumWavelengths,
   formula: "lambda_vac = n(lambda_vac) lambda_air, iterated; n the index of standard air (15 C, 101325 Pa, dry)",
   source: "Ciddor 1996, Appl. Opt. 35, 1566; Morton 2000, ApJS 130, 403 (coefficients from memory)",

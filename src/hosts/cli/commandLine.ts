@@ -28,6 +28,8 @@ export function readCommandLine(words: readonly string[], shapes: OptionShapes):
     const count = shapes[name];
     if (count === undefined) throw unknownOption(name, Object.keys(shapes));
     const values = attached === undefined ? words.slice(index + 1, index + 1 + count) : [attached];
+    const next = values.findIndex((value) => shapes[value] !== undefined);
+    if (next >= 0) throw new UsageProblem(`${name} takes ${valuesText(count)}, ${next} given before ${values[next]}.`);
     if (values.length !== count) throw new UsageProblem(`${name} takes ${valuesText(count)}, ${values.length} given.`);
     if (attached === undefined) index += count;
     options.set(name, [...(options.get(name) ?? []), values]);

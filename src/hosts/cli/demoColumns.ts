@@ -1,4 +1,4 @@
-import type { ColumnRequest } from "./fillTable.js";
+import type { ColumnRequest } from "./columnRequest.js";
 
 /** The main job over the demo table: orbit, reflex speed, shift, nm, pixels, and back to a mass. */
 export const demoColumns: readonly ColumnRequest[] = [

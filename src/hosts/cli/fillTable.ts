@@ -1,24 +1,23 @@
 import { type Column, sliceColumn } from "../../call/column.js";
 import type { AddedColumn } from "../../files/delimited/appendColumns.js";
 import type { DelimitedTable } from "../../files/delimited/delimitedTable.js";
-import { columnLetters } from "../../sheet/book/address.js";
-import type { Book } from "../../sheet/book/book.js";
+import { addressText, columnLetters } from "../../sheet/book/address.js";
+import { type Book, columnAt } from "../../sheet/book/book.js";
 import { type CellProblem, listProblems } from "../../sheet/book/listProblems.js";
 import { readColumn } from "../../sheet/book/readColumn.js";
 import { resultWidth } from "../../sheet/book/resultWidth.js";
+import { spansIn } from "../../sheet/book/spans.js";
 import { changeWatched } from "../../sheet/change.js";
 import { fillFormula } from "../../sheet/edit/fillFormula.js";
 import { setCells } from "../../sheet/edit/setCells.js";
 import { readHeader } from "../../units/readHeader.js";
+import { checkReferences } from "./checkReferences.js";
+import type { ColumnRequest } from "./columnRequest.js";
+import { headersOfResult } from "./headersOfResult.js";
 import type { Progress } from "./progress.js";
 import { headerRows, tableBook } from "./tableBook.js";
+import { UsageProblem } from "./usageProblem.js";
 import { functions } from "./worksheet.js";
-
-/** A column asked for: its header, and the formula of its first data row. */
-export interface ColumnRequest {
-  readonly header: string;
-  readonly formula: string;
-}
 
 export interface FilledColumn extends AddedColumn {
   /** Where it stands in the worksheet. */
@@ -28,63 +27,82 @@ export interface FilledColumn extends AddedColumn {
 export interface FilledTable {
   readonly added: readonly FilledColumn[];
   readonly problems: readonly CellProblem[];
+  /** Sentences about formulas that may not mean what they say. */
+  readonly doubts: readonly string[];
+}
+
+interface Rows {
+  readonly from: number;
+  readonly to: number;
+}
+
+/** The columns that one request takes. */
+interface Place {
+  readonly column: number;
+  readonly headers: readonly string[];
+  readonly unit: string | undefined;
 }
 
 /** Adds columns to the right of a table, one after the other, each formula filled down over all rows. */
 export function fillTable(table: DelimitedTable, requests: readonly ColumnRequest[], progress: Progress): FilledTable {
-  const first = headerRows(table);
-  const rows = { from: first, to: first + table.rows };
+  const rows = { from: headerRows(table), to: headerRows(table) + table.rows };
   let book = tableBook(table);
-  let next = table.columns.length;
-  const added: FilledColumn[] = [];
-  const problems: CellProblem[] = [];
-  for (const { header, formula } of requests) {
+  let column = table.columns.length;
+  const places: Place[] = [];
+  for (const request of requests) {
+    const { header, formula } = request;
     const unit = readHeader(header).unit?.text;
-    book = addHeaders(book, next, [header], unit, first);
+    const span = { sheet: 0, column, ...rows };
+    book = addHeaders(book, { column, headers: [header], unit }, rows.from);
     if (table.rows > 0) {
-      const span = { sheet: 0, column: next, ...rows };
       const watch = { onProgress: (done: number) => progress.show(`calculating ${header}`, done) };
       book = changeWatched(book, [fillFormula(span, formula)], functions, watch)!;
-      problems.push(...listProblems(book, span));
+      refuseSeveralRows(book, request, column, rows);
     }
-    const width = table.rows > 0 ? resultWidth(book, { sheet: 0, column: next, ...rows }) : 1;
-    const headers = [header, ...sigmaHeaders(header, width - 1)];
-    book = addHeaders(book, next, headers, unit, first);
-    headers.forEach((text, index) => {
-      const column = dataOf(book, next + index, rows);
-      added.push({
-        header: text,
-        column,
-        letters: columnLetters(next + index),
-        ...(unit === undefined ? {} : { unit }),
-      });
-      if (index > 0 && table.rows > 0)
-        problems.push(...listProblems(book, { sheet: 0, column: next + index, ...rows }));
-    });
-    next += width;
+    const headers = headersOfResult(request, table.rows > 0 ? resultWidth(book, span) : 1);
+    places.push({ column, headers, unit });
+    book = addHeaders(book, { column, headers, unit }, rows.from);
+    column += headers.length;
   }
-  return { added, problems };
+  const doubts = places.flatMap((place, index) =>
+    checkReferences(
+      requests[index]!,
+      { row: rows.from, column: place.column },
+      { first: table.columns.length, end: column },
+    ),
+  );
+  const added = places.flatMap((place) => addedColumns(book, place, rows));
+  const problems = added.flatMap((_, index) =>
+    table.rows > 0 ? listProblems(book, { sheet: 0, column: table.columns.length + index, ...rows }) : [],
+  );
+  return { added, problems, doubts };
 }
 
-function addHeaders(
-  book: Book,
-  column: number,
-  headers: readonly string[],
-  unit: string | undefined,
-  rows: number,
-): Book {
+function addHeaders(book: Book, { column, headers, unit }: Place, rows: number): Book {
   const cells = rows === 1 ? [headers] : [headers, headers.map(() => unit ?? null)];
   return changeWatched(book, [setCells({ sheet: 0, row: 0, column }, cells)], functions, {})!;
 }
 
-/** Headers of the columns that uncertainties fill beside a result: one, or the upper and the lower. */
-function sigmaHeaders(header: string, count: number): string[] {
-  const { name, unit } = readHeader(header);
-  const text = (sign: string) => `${name || header} sigma${sign}${unit ? ` [${unit.text}]` : ""}`;
-  return count === 0 ? [] : count === 1 ? [text("")] : [text("+"), text("-")];
+/** A result of several rows would stand over the rows below, of which each has its own. */
+function refuseSeveralRows(book: Book, { header }: ColumnRequest, column: number, { from, to }: Rows): void {
+  const tall = spansIn(columnAt(book, 0, column).spills, from, to).find(({ rows }) => rows > 1);
+  if (!tall) return;
+  const address = addressText(Math.max(tall.from, from), column);
+  throw new UsageProblem(
+    `the formula of "${header}" gives ${tall.rows} rows of results in ${address}; it is filled down, so refer to one cell of each column, B${from + 1} rather than B${from + 1}:B${Math.max(to, from + 2)}.`,
+  );
 }
 
-function dataOf(book: Book, column: number, rows: { readonly from: number; readonly to: number }): Column {
+function addedColumns(book: Book, { column, headers, unit }: Place, rows: Rows): FilledColumn[] {
+  return headers.map((header, index) => ({
+    header,
+    column: dataOf(book, column + index, rows),
+    letters: columnLetters(column + index),
+    ...(unit === undefined ? {} : { unit }),
+  }));
+}
+
+function dataOf(book: Book, column: number, rows: Rows): Column {
   const data = readColumn(book, { sheet: 0, column, ...rows });
   return data.length === rows.to - rows.from ? data : sliceColumn(data, 0, rows.to - rows.from);
 }

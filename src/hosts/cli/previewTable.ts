@@ -27,7 +27,8 @@ export function* previewTable(table: DelimitedTable, added: readonly FilledColum
     );
     yield `${cells.join("  ").trimEnd()}\n`;
   }
-  if (rows < table.rows) yield `and ${(table.rows - rows).toLocaleString("en")} more rows\n`;
+  const more = table.rows - rows;
+  if (more > 0) yield `and ${more.toLocaleString("en")} more ${more === 1 ? "row" : "rows"}\n`;
 }
 
 function shortText(cell: Cell): string {

@@ -28,6 +28,7 @@ understood; ${exitCode.file} a file cannot be read or written.
 /** Runs one command line; resolves to the exit code. */
 export async function run(words: readonly string[], terminal: Terminal): Promise<number> {
   const [name, ...rest] = words;
+  if (name === "help" && rest.length > 0) return run([...rest, "--help"], terminal);
   if (name === undefined || name === "--help" || name === "-h" || name === "help") {
     await terminal.out(help);
     return name === undefined ? exitCode.usage : exitCode.done;

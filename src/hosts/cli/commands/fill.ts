@@ -1,18 +1,21 @@
 import { appendColumns } from "../../../files/delimited/appendColumns.js";
 import { sentenceOfFinding } from "../../../files/delimited/sentenceOfFinding.js";
 import { checkFormula } from "../../../sheet/formula/readFormula.js";
+import type { ColumnRequest } from "../columnRequest.js";
 import type { Command } from "../command.js";
 import { type CommandLine, optionValue } from "../commandLine.js";
 import { exitCode } from "../exitCode.js";
 import { fillSummary } from "../fillSummary.js";
-import { type ColumnRequest, fillTable } from "../fillTable.js";
+import { fillTable } from "../fillTable.js";
 import { formulaComplaint } from "../formulaComplaint.js";
+import { isSameFile } from "../isSameFile.js";
 import { previewTable } from "../previewTable.js";
 import { progressOn } from "../progress.js";
-import { readTable, tableLayout } from "../readTable.js";
+import { readTable, type TableLayout, tableLayout } from "../readTable.js";
+import type { Terminal } from "../terminal.js";
 import { UsageProblem } from "../usageProblem.js";
 import { functions } from "../worksheet.js";
-import { isSameFile, openWholeFile } from "../writeFile.js";
+import { prepareFile } from "../writeFile.js";
 
 const help = `barycell fill IN.csv --set HEADER FORMULA [--set HEADER FORMULA ...] [--out OUT.csv]
 
@@ -47,25 +50,27 @@ export const fill: Command = {
         `--out "${out}" is the input itself; name another file, or add --force to replace the input.`,
       );
     }
-    const file = out === undefined ? undefined : await openWholeFile(out);
-    try {
-      const progress = progressOn(terminal);
-      const table = await readTable(path, layout, terminal, progress);
-      const filled = fillTable(table, requests, progress);
-      progress.end();
-      const pieces = show === undefined ? appendColumns(table, filled.added) : previewTable(table, filled.added, show);
-      if (file) await file.write(pieces);
-      else for (const piece of pieces) await terminal.out(piece);
-      for (const finding of table.findings) terminal.note(`${sentenceOfFinding(finding)}\n`);
-      terminal.note(fillSummary(table, filled));
-      const failed = filled.problems.length > 0 && line.options.has("--strict");
-      return failed ? exitCode.cellError : exitCode.done;
-    } catch (error) {
-      await file?.discard();
-      throw error;
-    }
+    const write = out === undefined ? undefined : await prepareFile(out);
+    const { table, filled } = await derive(path, layout, requests, terminal);
+    const pieces = show === undefined ? appendColumns(table, filled.added) : previewTable(table, filled.added, show);
+    if (write) await write(pieces);
+    else for (const piece of pieces) await terminal.out(piece);
+    for (const finding of table.findings) terminal.note(`${sentenceOfFinding(finding)}\n`);
+    terminal.note(fillSummary(table, filled));
+    const failed = filled.problems.length > 0 && line.options.has("--strict");
+    return failed ? exitCode.cellError : exitCode.done;
   },
 };
+
+async function derive(path: string, layout: TableLayout, requests: readonly ColumnRequest[], terminal: Terminal) {
+  const progress = progressOn(terminal);
+  try {
+    const table = await readTable(path, layout, terminal, progress);
+    return { table, filled: fillTable(table, requests, progress) };
+  } finally {
+    progress.end();
+  }
+}
 
 interface FillRequest {
   readonly path: string;
@@ -76,8 +81,11 @@ interface FillRequest {
 
 function readRequest(line: CommandLine): FillRequest {
   const [path, ...more] = line.operands;
-  if (path === undefined || more.length > 0)
-    throw new UsageProblem("give one table, for example targets.csv, or - for standard input.");
+  if (path === undefined) throw new UsageProblem("give one table, for example targets.csv, or - for standard input.");
+  if (more.length > 0)
+    throw new UsageProblem(
+      `give one table; ${line.operands.map((operand) => `"${operand}"`).join(", ")} came. Texts with spaces or $ need quotes.`,
+    );
   const requests = (line.options.get("--set") ?? []).map(([header, formula]) => readColumnRequest(header!, formula!));
   if (requests.length === 0) throw new UsageProblem('say which column to add: --set "K [m/s]" "=BARY.REFLEX(...)".');
   const out = optionValue(line, "--out");

@@ -1,0 +1,24 @@
+import { worksheetFunctionNames } from "../worksheetFunctions/findWorksheetFunction.js";
+import type { Functions } from "./functions.js";
+import { nearestName } from "./nearestName.js";
+
+/** The sentence for a function that nobody knows, with the nearest name that somebody does. */
+export function unknownFunction(name: string, functions: Functions): string {
+  const near = nearestName(name, [...functions.cellFunctionNames(), ...worksheetFunctionNames]);
+  return near === undefined
+    ? `${name}: no function has this name; check the spelling, for example SUM or AVERAGE`
+    : `${name}: no function has this name; did you mean ${near}?`;
+}
+
+/** "1 argument", "2 arguments". */
+export function count(parameters: number): string {
+  return parameters === 1 ? "1 argument" : `${parameters} arguments`;
+}
+
+/** "1 argument is", "2 to 3 are". */
+export function argumentCount(least: number, most: number): string {
+  if (least === most) {
+    return `${count(least)} ${least === 1 ? "is" : "are"}`;
+  }
+  return Number.isFinite(most) ? `${least} to ${most} are` : `${least} or more are`;
+}

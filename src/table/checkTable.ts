@@ -1,0 +1,19 @@
+import type { Column } from "../call/column.js";
+import { type ColumnCheck, checkColumn } from "./checkColumn.js";
+
+export interface TableColumn {
+  readonly header: string;
+  /** The cell of a row of units under the header, where the table has one. */
+  readonly unitCell?: string;
+  readonly column: Column;
+}
+
+/** What was understood of each column of a table, and what to look at. */
+export function checkTable(columns: readonly TableColumn[]): readonly ColumnCheck[] {
+  const checks = columns.map(({ header, unitCell, column }) => checkColumn(header, unitCell, column));
+  return checks.map((check, index) => {
+    const before = checks[index - 1]?.recognised;
+    const stray = check.recognised.isUncertainty && !before?.quantity && !before?.isUncertainty && !before?.unit;
+    return stray ? { ...check, findings: [...check.findings, { about: "uncertainty without value" }] } : check;
+  });
+}

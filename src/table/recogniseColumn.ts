@@ -1,0 +1,60 @@
+import * as quantities from "../functions/quantities.js";
+import type { Quantity } from "../functions/quantity.js";
+import { isProblem, type UnitProblem } from "../units/problem.js";
+import { readHeader } from "../units/readHeader.js";
+import { readUnit } from "../units/readUnit.js";
+import type { Unit } from "../units/unit.js";
+
+/** What the header of a column was understood to say. */
+export interface RecognisedColumn {
+  readonly name: string;
+  readonly unit: Unit | undefined;
+  readonly problem: UnitProblem | undefined;
+  /** The quantity of the trade that the name means; undefined where none fits. */
+  readonly quantity: Quantity | undefined;
+  /** The column holds uncertainties of another. */
+  readonly isUncertainty: boolean;
+}
+
+const uncertaintyWords =
+  /\b(sigma|sig|err|error|errors|unc|uncertainty|std|stddev)\b|^e_|[\u00b1\u03c3]|\+\s?\/?\s?-/gi;
+
+/** `unitCell`: the cell of a row of units under the header, where the table has one. */
+export function recogniseColumn(header: string, unitCell?: string): RecognisedColumn {
+  const reading = readHeader(header);
+  const below = unitCell === undefined || unitCell.trim() === "" ? undefined : readUnit(unitCell);
+  // "K" alone heads a column of semi-amplitudes rather than one of kelvins.
+  const isName = reading.name === "" && quantityNamed(header, undefined) !== undefined;
+  const unit = (isName ? undefined : reading.unit) ?? (below && !isProblem(below) ? below : undefined);
+  const problem = reading.problem ?? (below && isProblem(below) ? below : undefined);
+  const name = reading.name || header.trim();
+  const bare = name.replace(uncertaintyWords, " ").trim();
+  return { name, unit, problem, quantity: quantityNamed(bare, unit), isUncertainty: bare !== name.trim() };
+}
+
+interface NamedQuantity {
+  readonly words: string;
+  readonly quantity: Quantity;
+}
+
+const named: readonly NamedQuantity[] = Object.values(quantities).flatMap((quantity) =>
+  [quantity.name, quantity.meaning, ...quantity.headers].map((name) => ({ words: plainWords(name), quantity })),
+);
+
+/** The quantity whose name stands in a header, the longest name first; one of the unit's kind before any other. */
+function quantityNamed(name: string, unit: Unit | undefined): Quantity | undefined {
+  const words = plainWords(name);
+  const fits = ({ quantity }: NamedQuantity) => unit === undefined || quantity.kind === unit.kind;
+  const whole = named.filter((candidate) => candidate.words === words);
+  const within = named
+    .filter((candidate) => candidate.words.length > 2 && ` ${words} `.includes(` ${candidate.words} `))
+    .sort((a, b) => b.words.length - a.words.length);
+  const candidates = [...whole, ...within];
+  return (candidates.find(fits) ?? candidates[0])?.quantity;
+}
+
+/** Letters and digits in words; capitals matter in symbols of one or two letters only (`M` and `m`, `P`, `K`). */
+function plainWords(name: string): string {
+  const words = name.replace(/[^\p{L}\p{N}*]+/gu, " ").trim();
+  return words.length <= 2 ? words : words.toLowerCase();
+}
