@@ -24,3 +24,9 @@ function lettersOf(column: number): string {
   }
   return letters;
 }
+
+/** The column of an address with its sheet, "Table!C"; undefined for what is no address of a cell. */
+export function columnOfAddress(address: string | undefined): string | undefined {
+  const match = address === undefined ? null : /^(.*?)\$?([A-Z]+)\$?\d+$/i.exec(address);
+  return match ? `${match[1]}${match[2]!.toUpperCase()}` : undefined;
+}

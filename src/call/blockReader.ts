@@ -55,6 +55,7 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
     if (reading instanceof CellError || "about" in reading) {
       base[row] = Number.NaN;
       report.value(row, reading);
+      if (sigmaColumns.length > 0) setSigma(row, 0, 0, sigmaColumns.length);
       return;
     }
     const value = toBase(reading.unit, reading.value);

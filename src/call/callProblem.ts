@@ -84,6 +84,12 @@ export type CallProblem =
       readonly otherRows: number;
     }
   | { readonly about: "shape"; readonly input: string; readonly rows: number; readonly columns: number }
+  | {
+      readonly about: "header of another column";
+      readonly input: string;
+      readonly header: HeaderCell;
+      readonly own: HeaderCell;
+    }
   | { readonly about: "header count"; readonly given: number; readonly inputs: number; readonly columns: number }
   | { readonly about: "no result"; readonly result: string; readonly values: string }
   | { readonly about: "result unit missing"; readonly header: HeaderCell | undefined }

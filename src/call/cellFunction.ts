@@ -13,7 +13,13 @@ export interface ArgumentCells {
  * One argument of many calls, one a row: the same cells in every row (headers, constants), or cells of its own
  * in each row, one column or several side by side (a value with its uncertainties).
  */
-export type RowArgument = { readonly fixed: Argument } | { readonly perRow: readonly Column[] };
+export type RowArgument = { readonly fixed: Argument } | RowCells;
+
+export interface RowCells {
+  readonly perRow: readonly Column[];
+  /** The address of the first row's first cell ("C2"), where the host knows it. */
+  readonly address?: string;
+}
 
 /**
  * A cell function as every host calls it. Both forms give the same bits: `eachRow` over n rows is n calls of `once`.
@@ -24,6 +30,8 @@ export interface CellFunction {
   readonly name: string;
   readonly leastArguments: number;
   readonly mostArguments: number;
+  /** The arguments by name, those that may be left out in square brackets. */
+  readonly argumentNames?: readonly string[];
   /** One call; a column argument gives a column, so the result may have many rows. */
   once(parameters: readonly Argument[]): Block;
   /**

@@ -1,4 +1,4 @@
-import { isOptional, takesHeaders, takesResult } from "../functions/argumentNames.js";
+import { argumentNames, isOptional, takesHeaders, takesResult } from "../functions/argumentNames.js";
 import type { Definition, Input } from "../functions/definition.js";
 import type { Unit } from "../units/unit.js";
 import type { CallProblem } from "./callProblem.js";
@@ -23,7 +23,7 @@ export function cellFunctionOf(definition: Definition): CellFunction {
   const least = (definition.inputs as readonly Input[]).filter((input) => !isOptional(input)).length;
 
   function once(parameters: readonly Argument[]): Block {
-    const given = parameters.slice(0, inputs).map((parameter) => parameter?.block);
+    const given = parameters.slice(0, inputs).map(givenCells);
     return answer(given, parameters, false);
   }
 
@@ -37,7 +37,9 @@ export function cellFunctionOf(definition: Definition): CellFunction {
     const given = parameters
       .slice(0, inputs)
       .map((parameter): GivenCells | undefined =>
-        "fixed" in parameter ? parameter.fixed?.block : { rows, columns: parameter.perRow },
+        "fixed" in parameter
+          ? givenCells(parameter.fixed)
+          : { rows, columns: parameter.perRow, address: parameter.address },
       );
     const all = parameters.map((parameter) => ("fixed" in parameter ? parameter.fixed : undefined));
     return widened(answer(given, all, true), rows);
@@ -83,7 +85,20 @@ export function cellFunctionOf(definition: Definition): CellFunction {
     return unit && !("about" in unit) ? unit.text : undefined;
   }
 
-  return { name: `${namespace}.${definition.name}`, leastArguments: least, mostArguments: most, once, eachRow, unitOf };
+  const name = `${namespace}.${definition.name}`;
+  return {
+    name,
+    argumentNames: argumentNames(definition),
+    leastArguments: least,
+    mostArguments: most,
+    once,
+    eachRow,
+    unitOf,
+  };
+}
+
+function givenCells(argument: Argument): GivenCells | undefined {
+  return argument && { rows: argument.block.rows, columns: argument.block.columns, address: argument.address };
 }
 
 function evaluate(definition: Definition, call: CallInputs, result: Argument): Block | CallProblem {

@@ -60,6 +60,7 @@ function eachQuantity(
     const reading = readCell(input.name, cellAt(columns[0]!, row), headers[0] ?? noHeader, undefined);
     if (reading instanceof CellError || "about" in reading) {
       results.fail(row, error(reading));
+      if (definition.form === "conversion" && columns.length > 1) results.spoilSigma(row, columns.length - 1);
       continue;
     }
     const sigmas =

@@ -130,7 +130,11 @@ class BlockUncertainty {
       }
     });
     for (let row = 0; row < rows; row++) {
-      if (sides[row] === 0 || Number.isNaN(values[row])) continue;
+      if (sides[row] === 0) continue;
+      if (results.hasFailed(from + row)) {
+        results.spoilSigma(from + row, sides[row]!);
+        continue;
+      }
       const scale = 1 / Math.abs(baseSlope(unit, values[row]!));
       const upper = Math.sqrt(above[row]!) * scale;
       const lower = Math.sqrt(below[row]!) * scale;

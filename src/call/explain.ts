@@ -53,6 +53,8 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
       return `${problem.input} has ${rowCount(problem.rows)} and ${problem.other} has ${problem.otherRows}; columns of one call need the same number of rows, or one row each.`;
     case "shape":
       return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${mayHaveUncertainty(definition, problem.input) ? ", two with its uncertainty, or three with upper and lower uncertainty" : ""}.`;
+    case "header of another column":
+      return `${problem.input} was given the header ${headerText(problem.header)}, but its own column is headed ${headerText(problem.own)}; give inputs and headers in the same order.`;
     case "header count":
       return headerCountSentence(problem);
     case "no result":

@@ -1,4 +1,5 @@
 import type { Definition, Input } from "../functions/definition.js";
+import { columnOfAddress } from "./address.js";
 import { assignHeaders, type HeaderAssignment } from "./assignHeaders.js";
 import type { CallProblem, HeaderCell } from "./callProblem.js";
 import type { Column } from "./column.js";
@@ -27,6 +28,8 @@ export interface CallInputs {
 export interface GivenCells {
   readonly rows: number;
   readonly columns: readonly Column[];
+  /** Address of the first cell, where the host knows it. */
+  readonly address?: string | undefined;
 }
 
 export function callInputs(
@@ -58,6 +61,13 @@ export function callInputs(
   const ways = assignHeaders(headers, widths);
   if ("about" in ways) return ways;
   const assigned = ways.find((way) => agrees(way, headed, widths)) ?? ways[0]!;
+  const misplaced = headerOfAnotherColumn(
+    headed,
+    given.filter((_, index) => takesHeader(inputs[index]!)),
+    assigned,
+    headers,
+  );
+  if (misplaced) return misplaced;
   return {
     rows,
     filledDown,
@@ -74,6 +84,26 @@ export function callInputs(
       };
     }),
   };
+}
+
+/**
+ * An input whose own column is headed by another of the header cells: the headers are in another order than the
+ * inputs, and a number would be read in the unit of the wrong column.
+ */
+function headerOfAnotherColumn(
+  inputs: readonly Input[],
+  given: readonly (GivenCells | undefined)[],
+  assigned: HeaderAssignment,
+  headers: readonly HeaderCell[],
+): CallProblem | undefined {
+  for (let index = 0; index < inputs.length; index++) {
+    const column = columnOfAddress(given[index]?.address);
+    const header = assigned[index]![0];
+    if (!column || !header || columnOfAddress(header.address) === column) continue;
+    const own = headers.find(({ address }) => columnOfAddress(address) === column);
+    if (own) return { about: "header of another column", input: inputs[index]!.name, header, own };
+  }
+  return undefined;
 }
 
 /** Whether every unit that is stated is of the kind of its input; headers of omitted inputs do not count. */

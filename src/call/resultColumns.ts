@@ -28,6 +28,10 @@ export class ResultColumns {
     this.numbers[row] = Number.NaN;
   }
 
+  hasFailed(row: number): boolean {
+    return this.others?.[row] !== undefined;
+  }
+
   failSigma(row: number, error: CellError, count: number): void {
     const { cells, sides } = this.sigmaColumns();
     if (cells[row] === null || cells[row] === undefined) cells[row] = error;
@@ -43,15 +47,22 @@ export class ResultColumns {
     sigmas.cells[row] = undefined;
   }
 
+  /** A row that states uncertainties and has no value: its error stands in every cell of the row. */
+  spoilSigma(row: number, count: number): void {
+    const { sides } = this.sigmaColumns();
+    sides[row] = Math.max(sides[row]!, count);
+  }
+
   block(): Block {
     const { rows, numbers, others, sigmas } = this;
     const value: Column = { length: rows, numbers, others };
     if (others) for (let row = 0; row < rows; row++) if (others[row] !== undefined) numbers[row] = Number.NaN;
     if (!sigmas) return { rows, columns: [value] };
-    // A row without a value has no uncertainty either: its error stands once, in the value's cell.
-    const failed = (row: number) => others?.[row] !== undefined;
     const cellsOf = (least: number) =>
-      sigmas.cells.map((cell, row) => (failed(row) || (this.filledDown && sigmas.sides[row]! < least) ? null : cell));
+      sigmas.cells.map((cell, row) => {
+        if (sigmas.sides[row]! < (this.filledDown ? least : 1)) return null;
+        return others?.[row] ?? cell;
+      });
     const side = (source: Float64Array, cells: readonly (OtherCell | undefined)[]): Column => {
       cells.forEach((cell, row) => {
         if (cell !== undefined) source[row] = Number.NaN;
@@ -59,7 +70,7 @@ export class ResultColumns {
       return { length: rows, numbers: source, others: cells.some((cell) => cell !== undefined) ? cells : undefined };
     };
     const first = side(sigmas.upper, cellsOf(1));
-    const asymmetric = sigmas.sides.some((count, row) => count > 1 && !failed(row));
+    const asymmetric = sigmas.sides.some((count) => count > 1);
     return { rows, columns: asymmetric ? [value, first, side(sigmas.lower, cellsOf(2))] : [value, first] };
   }
 

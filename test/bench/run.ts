@@ -1,10 +1,12 @@
 import { benchFill } from "./fill.js";
 import { benchReflex } from "./reflex.js";
+import { benchSheet } from "./sheet.js";
 
 /** `npm run bench [part]`: timings that compare two things in one run; they never decide a test. */
 const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
   fill: benchFill,
+  sheet: () => benchSheet((line) => void process.stdout.write(`${line}\n`)),
 };
 
 const asked = process.argv.slice(2);

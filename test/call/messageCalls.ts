@@ -169,6 +169,15 @@ export const messageCalls: readonly MessageCall[] = [
     ["UNITOF", [["K [m/s]", "P [d]"]]],
     ["SHIFT", "1 m/s", [["linear", "linear"]]],
   ),
+  ...about("header of another column", [
+    "REFLEX",
+    { cells: [[1.1]], address: "C2" },
+    { cells: [[4.23]], address: "B2" },
+    { cells: [[0.47]], address: "D2" },
+    undefined,
+    undefined,
+    threeHeaders,
+  ]),
   ...about(
     "header count",
     ["REFLEX", 4.23, 1.1, 0.47, undefined, undefined, "d; solMass"],

@@ -27,6 +27,7 @@ const topics: Record<CallProblem["about"], true> = {
   lengths: true,
   shape: true,
   "header count": true,
+  "header of another column": true,
   "no result": true,
   "result unit missing": true,
   "result unit": true,

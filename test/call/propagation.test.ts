@@ -246,10 +246,16 @@ describe("an uncertainty that does not read", () => {
     expect(sigma.code).toBe("#VALUE!");
   });
 
-  test("and where the value does not read either, its error stands once", () => {
-    const [row] = call("AXIS", [[null, null]], 1, undefined, "d; solMass");
-    expect((row![0] as CellError).code).toBe("#N/A");
-    expect(row!.slice(1).every((cell) => cell === null)).toBe(true);
+  test("and where the value does not read either, its error stands in both cells: a blank would count as 0 later on", () => {
+    for (const [row] of [
+      call("AXIS", [[null, null]], 1, undefined, "d; solMass"),
+      call("AXIS", [[4.23, 0.1]], "about 1", undefined, "d; solMass"),
+      call("INTO", [["soon", 0.1]], "d", "h"),
+    ]) {
+      expect(row).toHaveLength(2);
+      expect(row![0]).toBeInstanceOf(CellError);
+      expect(row![1]).toBe(row![0]);
+    }
   });
 });
 

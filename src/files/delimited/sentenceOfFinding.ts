@@ -1,3 +1,4 @@
+import { columnLetters } from "../../sheet/book/address.js";
 import type { Finding, Place } from "./finding.js";
 
 /** A finding as one sentence of at most 250 characters for the analyst. */
@@ -12,9 +13,9 @@ export function sentenceOfFinding(finding: Finding): string {
     case "unclosed-quote":
       return `${where(finding.first)} opens a quote that is never closed; all that follows was read as one field. Close the quote, or write it twice within quotes.`;
     case "duplicate-header":
-      return `The header ${quoted(finding.header)} stands over columns ${listed(finding.columns)}; refer to them by their position, or rename all but one.`;
+      return `The header ${quoted(finding.header)} stands over columns ${listed(finding.columns)}; refer to them by their letters, or rename all but one.`;
     case "empty-headers":
-      return `${finding.columns.length === 1 ? "Column" : "Columns"} ${listed(finding.columns)} ${finding.columns.length === 1 ? "has" : "have"} no header; refer to them by their position, or name them in the file.`;
+      return `${finding.columns.length === 1 ? "Column" : "Columns"} ${listed(finding.columns)} ${finding.columns.length === 1 ? "has" : "have"} no header; refer to them by their letters, or name them in the file.`;
     case "numbers-as-header":
       return `The first row (${quoted(finding.header)} ...) was taken as the header but holds numbers only; put a row of column names above it.`;
     case "one-column":
@@ -31,7 +32,8 @@ function where({ row, line }: Place): string {
 }
 
 function headerless(from: number, to: number): string {
-  return to === from + 1 ? `column ${to} has` : `columns ${from + 1} to ${to} have`;
+  const [first, last] = [columnLetters(from), columnLetters(to - 1)];
+  return first === last ? `column ${last} has` : `columns ${first} to ${last} have`;
 }
 
 function more(count: number): string {
@@ -47,7 +49,7 @@ function quoted(text: string): string {
 }
 
 function listed(columns: readonly number[]): string {
-  const shown = columns.slice(0, 5).map((column) => String(column + 1));
+  const shown = columns.slice(0, 5).map(columnLetters);
   const rest = columns.length - shown.length;
   const last = rest > 0 ? `${rest} more` : (shown.pop() as string);
   return shown.length === 0 ? last : `${shown.join(", ")} and ${last}`;

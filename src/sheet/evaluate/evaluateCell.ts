@@ -3,7 +3,7 @@ import { CellError } from "../../call/cell.js";
 import type { Argument } from "../../call/cellFunction.js";
 import type { Block } from "../../call/column.js";
 import { cellAt, columnOf } from "../../call/column.js";
-import { nearestName } from "../formula/nearestName.js";
+import { nearest } from "../../units/nearest.js";
 import type { Node, Parameters } from "../formula/node.js";
 import { referenceText } from "../formula/reference.js";
 import type { Matrix, Operand } from "../values/operand.js";
@@ -87,7 +87,7 @@ function evaluateName(name: string, scene: Scene): Operand {
   const formula = scene.world.definedName(name);
   if (formula === undefined) {
     return new CellError("#NAME?", `${name} is not a known name`, () => {
-      const near = nearestName(name, scene.world.definedNames());
+      const near = nearest(name, scene.world.definedNames());
       return near === undefined
         ? `${name}: nothing has this name; a cell, a defined name or a text in quotes is needed, for example "${name}"`
         : `${name}: nothing has this name; did you mean ${near}?`;
@@ -163,22 +163,17 @@ function singleCell(matrix: Matrix): Cell | undefined {
 }
 
 function ownArguments(parameters: Parameters, scene: Scene, row: number, shared: Shared): Argument[] {
-  return parameters.map((each) => each && argumentOf(each, evaluate(each, scene, row, shared), scene));
+  return parameters.map((each) => each && argumentOf(each, evaluate(each, scene, row, shared), scene, row));
 }
 
-/** An argument as our functions take it; the address is told where it is the same in every row. */
-export function argumentOf(node: Node, operand: Operand, scene: Scene): Argument {
-  const block = blockOfOperand(operand);
-  const address = fixedAddress(node, scene);
-  return address === undefined ? { block } : { block, address };
+/** An argument as our functions take it, with the address of its first cell where it is a reference. */
+export function argumentOf(node: Node, operand: Operand, scene: Scene, row: number): Argument {
+  return { block: blockOfOperand(operand), ...addressOf(node, scene, row) };
 }
 
-function fixedAddress(node: Node, scene: Scene): string | undefined {
-  if (node.kind !== "reference" || !node.fixed) {
-    return undefined;
-  }
-  const reference = scene.formula.references[node.index];
-  return reference && referenceText(reference, 0, scene.column).split(":")[0];
+export function addressOf(node: Node, scene: Scene, row: number): { readonly address?: string } {
+  const reference = node.kind === "reference" ? scene.formula.references[node.index] : undefined;
+  return reference ? { address: referenceText(reference, row, scene.column).split(":")[0] as string } : {};
 }
 
 export function blockOfOperand(operand: Operand): Block {

@@ -8,7 +8,7 @@ import { resolveBound } from "../formula/reference.js";
 import type { Operand } from "../values/operand.js";
 import { negate, percent } from "../values/operate.js";
 import { operateOperands } from "../values/operateOperands.js";
-import { argumentOf, evaluateCell, mapOperand } from "./evaluateCell.js";
+import { addressOf, argumentOf, evaluateCell, mapOperand } from "./evaluateCell.js";
 import { mathOverColumn } from "./mathOverColumn.js";
 import type { Side } from "./operateColumns.js";
 import { cellByCell, operateColumns, sideAt } from "./operateColumns.js";
@@ -122,18 +122,26 @@ type ChoiceNode = Extract<Node, { kind: "choice" }>;
 
 function ifRows(node: ChoiceNode, given: Side, branches: Parameters, stretch: Stretch): Rows {
   const rows = branches.map((each) => each && evaluateRows(each, stretch));
-  const slow = eachRow(node, stretch);
-  const at = (row: number): Operand => {
+  const count = stretch.to - stretch.from;
+  const slow = (row: number): Operand => evaluateCell(node, stretch, stretch.from + row);
+  const branchAt = (row: number): 0 | 1 | undefined => {
     const condition = sideAt(given, row);
     const truth = typeof condition === "number" ? condition !== 0 : condition;
-    const chosen = truth === true ? rows[0] : truth === false ? rows[1] : undefined;
-    return rowAt(chosen ?? slow, row);
+    return truth === true ? 0 : truth === false ? 1 : undefined;
   };
   const sides = rows.map((each) => each && sideOf(each));
-  if (sides.every((each) => each !== undefined)) {
-    return computed(cellByCell(stretch.to - stretch.from, (row) => scalarOf(at(row)) as Cell));
-  }
-  return gatherRows(stretch.to - stretch.from, at);
+  const asCells = sides.every((each) => each !== undefined);
+  const cellOf = (row: number): Cell => {
+    const branch = branchAt(row);
+    const side = branch === undefined ? undefined : sides[branch];
+    return side === undefined ? (scalarOf(slow(row)) as Cell) : sideAt(side, row);
+  };
+  const at = (row: number): Operand => {
+    const branch = branchAt(row);
+    const chosen = branch === undefined ? undefined : rows[branch];
+    return chosen === undefined ? slow(row) : rowAt(chosen, row);
+  };
+  return asCells ? computed(cellByCell(count, cellOf)) : gatherRows(count, at);
 }
 
 function insteadRows(node: ChoiceNode, given: Side, instead: Parameters[number], stretch: Stretch): Rows {
@@ -187,11 +195,14 @@ function rowArgument(parameter: Parameters[number], stretch: Stretch): RowArgume
   const rows = evaluateRows(parameter, stretch);
   switch (rows.kind) {
     case "same":
-      return { fixed: argumentOf(parameter, rows.operand, stretch) };
+      return { fixed: argumentOf(parameter, rows.operand, stretch, stretch.from) };
     case "column":
-      return { perRow: [rows.column] };
+      return { perRow: [rows.column], ...addressOf(parameter, stretch, stretch.from) };
     case "columns":
-      return rows.ragged || rows.columns.length > widestValue ? undefined : { perRow: rows.columns };
+      if (rows.ragged || rows.columns.length > widestValue) {
+        return undefined;
+      }
+      return { perRow: rows.columns, ...addressOf(parameter, stretch, stretch.from) };
     case "each":
       return undefined;
   }

@@ -1,8 +1,8 @@
 import { CellError } from "../../call/cell.js";
 import type { Column } from "../../call/column.js";
+import { nearest } from "../../units/nearest.js";
 import { addressText } from "../book/address.js";
 import { goneError } from "../formula/goneError.js";
-import { nearestName } from "../formula/nearestName.js";
 import type { Rectangle, Reference } from "../formula/reference.js";
 import { isOnSheet, resolve } from "../formula/reference.js";
 import { mostColumns, mostRows } from "../limits.js";
@@ -79,7 +79,7 @@ export function spillTarget(world: World, target: Target): Target {
 
 function noSheetError(world: World, name: string): CellError {
   return new CellError("#REF!", `no sheet "${name}"`, () => {
-    const near = nearestName(
+    const near = nearest(
       name.toUpperCase(),
       world.sheetNames().map((each) => each.toUpperCase()),
     );

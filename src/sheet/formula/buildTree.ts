@@ -214,7 +214,8 @@ function buildCall(building: Building, expression: CallExpression): Node {
   }
   const { leastArguments, mostArguments } = called;
   if (parameters.length < leastArguments || parameters.length > mostArguments) {
-    const message = `${name}: ${count(parameters.length)} came; ${argumentCount(leastArguments, mostArguments)} needed`;
+    const names = own?.argumentNames ? `: ${own.argumentNames.join(", ")}` : "";
+    const message = `${name}: ${count(parameters.length)} came; ${argumentCount(leastArguments, mostArguments)} needed${names}`;
     return fail(building, expression, "#VALUE!", `${name}: number of arguments`, message);
   }
   const fixed = parameters.every((each) => each === undefined || each.fixed);

@@ -1,10 +1,10 @@
+import { nearest } from "../../units/nearest.js";
 import { worksheetFunctionNames } from "../worksheetFunctions/findWorksheetFunction.js";
 import type { Functions } from "./functions.js";
-import { nearestName } from "./nearestName.js";
 
 /** The sentence for a function that nobody knows, with the nearest name that somebody does. */
 export function unknownFunction(name: string, functions: Functions): string {
-  const near = nearestName(name, [...functions.cellFunctionNames(), ...worksheetFunctionNames]);
+  const near = nearest(name, [...functions.cellFunctionNames(), ...worksheetFunctionNames]);
   return near === undefined
     ? `${name}: no function has this name; check the spelling, for example SUM or AVERAGE`
     : `${name}: no function has this name; did you mean ${near}?`;

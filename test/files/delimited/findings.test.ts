@@ -15,14 +15,14 @@ const found: [text: string, findings: Finding[], sentences: string[]][] = [
     'a,b\n"1\n\n",2\n3,4,5,6\n',
     [{ kind: "long-rows", count: 1, first: { row: 2, line: 5 }, fields: 4, expected: 2, columns: 4 }],
     [
-      "Line 5 (row 2) has 4 fields where the header has 2; columns 3 to 4 have no header, added columns stand to the right of that. Is a delimiter inside a text without quotes?",
+      "Line 5 (row 2) has 4 fields where the header has 2; columns C to D have no header, added columns stand to the right of that. Is a delimiter inside a text without quotes?",
     ],
   ],
   [
     "a,b\n1,2,\n3,4,\n",
     [{ kind: "long-rows", count: 2, first: { row: 1, line: 2 }, fields: 3, expected: 2, columns: 3 }],
     [
-      "Line 2 (row 1) has 3 fields where the header has 2, and so on in 2 rows in all; column 3 has no header, added columns stand to the right of that. Is a delimiter inside a text without quotes?",
+      "Line 2 (row 1) has 3 fields where the header has 2, and so on in 2 rows in all; column C has no header, added columns stand to the right of that. Is a delimiter inside a text without quotes?",
     ],
   ],
   [
@@ -51,8 +51,8 @@ const found: [text: string, findings: Finding[], sentences: string[]][] = [
       { kind: "empty-headers", columns: [1, 4] },
     ],
     [
-      'The header "K" stands over columns 1, 3 and 6; refer to them by their position, or rename all but one.',
-      "Columns 2 and 5 have no header; refer to them by their position, or name them in the file.",
+      'The header "K" stands over columns A, C and F; refer to them by their letters, or rename all but one.',
+      "Columns B and E have no header; refer to them by their letters, or name them in the file.",
     ],
   ],
   [

@@ -25,6 +25,17 @@ own unit,4.23 d,1.1 Msun,0.47 Mjup,0.01,10 km/s
 good,4.23,1.1,0.47,0.01,10
 `;
 
+describe.concurrent("inputs in another order than their headers", () => {
+  test("are refused, though every header states a unit that fits a number", async () => {
+    const words = ["--set", "K [m/s]", "=BARY.REFLEX(C2,B2,D2,E2,,B$1:E$1,G$1)"];
+    const { out, note } = await barycell(["fill", "-", ...words], { input: table });
+    expect(rowsOf(out.replace('"4,23"', "4.23"))[1]!.at(-1)).toBe("#VALUE!");
+    expect(note).toContain(
+      'REFLEX: period was given the header B$1 "P [d]", but its own column is headed C$1 "M [solMass]"; give inputs and headers in the same order.',
+    );
+  });
+});
+
 describe.concurrent("a bad row", () => {
   test("spoils itself alone, and what is derived from it", async () => {
     const words = [

@@ -103,7 +103,7 @@ test("demo derives its columns and tells what needs attention", async () => {
   expect(code).toBe(0);
   expect(out).toMatch(/^barycell fill .*demo\.csv --show 20/);
   // One eccentricity of 1.08 and one star without mass are there on purpose.
-  expect(note).toMatch(/^10 rows; 7 columns added .*; 11 cells need attention\.\n/);
+  expect(note).toMatch(/^10 rows; 7 columns added .*; 13 cells need attention\.\n/);
   expect(note).toContain("eccentricity is 1.08");
   expect(note).toContain("star mass is blank");
 });

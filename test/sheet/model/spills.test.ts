@@ -39,6 +39,9 @@ function stepsAt(top: number): fc.Arbitrary<Step> {
     fc.constantFrom("={1,2}", "={5;6;7}", "={1,2;3,4}"),
     cell.map((a) => `=TEST.PAIR(${a})`),
     cell.map((a) => `=TEST.PAIR(${a})*2`),
+    fc.tuple(cell, cell).map(([a, b]) => `=IF(${a}>2,TEST.PAIR(${a}),${b})`),
+    fc.tuple(cell, cell).map(([a, b]) => `=IFERROR(1/${a},TEST.PAIR(${b}))`),
+    fc.tuple(cell, cell, cell).map(([a, b, c]) => `=IF(${a}>2,${b}:${c},${a})`),
     cell.map((a) => `=${a}#`),
     cell.map((a) => `=SUM(${a}#)`),
   );
@@ -132,5 +135,24 @@ describe("formulas that fill several cells", () => {
     expect(cellOf(book, at(1, 0))).toBeNull();
     book = change(book, [setCells(at(2, 0), [[null]])], pairFunctions);
     expect([0, 1, 2].map((row) => cellOf(book, at(row, 0)))).toEqual([1, 2, 3]);
+  });
+
+  test("are read whole by A1#, at whatever size they have", () => {
+    const at = (row: number, column: number) => ({ sheet: 0, row, column });
+    let book = bookOf([{ name: "Sheet1", columns: [] }]);
+    book = change(
+      book,
+      [
+        setCells(at(0, 2), [[3]]),
+        setCells(at(0, 0), [[{ formula: "=SEQUENCE(C1)" }]]),
+        setCells(at(0, 3), [[{ formula: "=SUM(A1#)" }]]),
+      ],
+      pairFunctions,
+    );
+    const sumAt = (rows: number) => cellOf(change(book, [setCells(at(0, 2), [[rows]])], pairFunctions), at(0, 3));
+    // 1 + 2 + ... + n = n (n + 1) / 2
+    expect([3, 1, 2, 10, 9000].map(sumAt)).toEqual([6, 1, 3, 55, 40_504_500]);
+    const shorter = change(book, [setCells(at(0, 2), [[1]])], pairFunctions);
+    expect([0, 1, 2].map((row) => cellOf(shorter, at(row, 0)))).toEqual([1, null, null]);
   });
 });

@@ -67,12 +67,15 @@ function argumentsOf({ leastArguments, mostArguments }: WorksheetFunction): fc.A
   return fc.array(operand, { minLength: leastArguments, maxLength: most });
 }
 
+/** All cells of a result; of a very large one, cells spread over it. */
 function cellsOf(result: Operand): Cell[] {
-  return isMatrix(result)
-    ? Array.from({ length: result.rows * result.columns }, (_, at) =>
-        result.at(Math.floor(at / result.columns), at % result.columns),
-      )
-    : [result];
+  if (!isMatrix(result)) return [result];
+  const count = result.rows * result.columns;
+  const step = Math.max(1, Math.floor(count / 1999));
+  return Array.from({ length: Math.ceil(count / step) }, (_, index) => {
+    const at = index * step;
+    return result.at(Math.floor(at / result.columns), at % result.columns);
+  });
 }
 
 function expectCell(value: Cell): void {
@@ -115,4 +118,22 @@ it("refuses a wrong number of arguments", () => {
 it("finds functions in either case", () => {
   expect(findWorksheetFunction("stdev.s")?.name).toBe("STDEV.S");
   expect(findWorksheetFunction("NOSUCH")).toBeUndefined();
+});
+
+it.each<[string, readonly Operand[]]>([
+  ["BINOM.INV", [1e308, 0.5, 0.5]],
+  ["CRITBINOM", [1e308, 0.25, 0.5]],
+  ["DB", [1e9, 1, 1e308, 1e308]],
+  ["DDB", [1e9, 1, 1e308, 1e308]],
+  ["CUMIPMT", [0.1, 1e308, 1e9, 1, 1e308, 0]],
+])("%s ends for numbers too large to count to", (name, given) => {
+  expect((findWorksheetFunction(name) as WorksheetFunction).call(given)).toMatchObject({ code: "#NUM!" });
+});
+
+it("LOOKUP has no answer where the results are fewer than the place found", () => {
+  const searched = matrixOfRows([[1], [2], [3]]);
+  const results = matrixOfRows([["a"], ["b"]]);
+  const lookup = findWorksheetFunction("LOOKUP") as WorksheetFunction;
+  expect(lookup.call([2, searched, results])).toBe("b");
+  expect(lookup.call([3, searched, results])).toMatchObject({ code: "#N/A" });
 });

@@ -46,8 +46,13 @@ const binomialInverse = (name: string) =>
     name,
     [whole("trials"), number("probability"), number("alpha")] as const,
     (n, p, alpha): Cell =>
-      firstProblem(name, [notNegative("trials", n), chance("probability", p), openChance(alpha, "alpha")]) ??
-      leastSuccesses(n, p, alpha),
+      firstProblem(name, [
+        notNegative("trials", n),
+        // Beyond, whole numbers are no longer doubles and a search would not end.
+        upTo("trials", n, Number.MAX_SAFE_INTEGER),
+        chance("probability", p),
+        openChance(alpha, "alpha"),
+      ]) ?? leastSuccesses(n, p, alpha),
   );
 
 const binomialRange = (name: string) =>

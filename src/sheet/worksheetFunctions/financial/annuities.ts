@@ -15,14 +15,23 @@ const present = number("present value");
 /** The library adds period by period: so many are refused before they would take long. */
 const mostPeriods = 100_000;
 
+const tooMany = (name: string, input: string, value: number) =>
+  value > mostPeriods
+    ? outside(`${name}: ${input}`, value, `above ${mostPeriods}`, "a smaller number is needed, for example 12")
+    : undefined;
+
 const cumulative = (name: string) =>
   fromLibrary(
     name,
     [rate, periods, present, number("first period"), number("last period"), number("type")] as const,
-    (_rate, _periods, _present, _first, last, _type) =>
-      last > mostPeriods
-        ? outside(`${name}: last period`, last, `above ${mostPeriods}`, "a smaller number is needed, for example 12")
-        : undefined,
+    (_rate, _periods, _present, _first, last, _type) => tooMany(name, "last period", last),
+  );
+
+const declining = (name: string, last: readonly [string, number]) =>
+  fromLibrary(
+    name,
+    [number("cost"), number("salvage"), number("life"), period, omittable(number(last[0]), last[1])] as const,
+    (_cost, _salvage, _life, at, _last) => tooMany(name, "period", at),
   );
 
 /** Payments at a constant rate and depreciations: section 6.12. */
@@ -42,20 +51,8 @@ export const annuities: readonly WorksheetFunction[] = [
   fromLibrary("PDURATION", [rate, present, number("future value")] as const),
   fromLibrary("SLN", [number("cost"), number("salvage"), number("life")] as const),
   fromLibrary("SYD", [number("cost"), number("salvage"), number("life"), period] as const),
-  fromLibrary("DB", [
-    number("cost"),
-    number("salvage"),
-    number("life"),
-    period,
-    omittable(number("months"), 12),
-  ] as const),
-  fromLibrary("DDB", [
-    number("cost"),
-    number("salvage"),
-    number("life"),
-    period,
-    omittable(number("factor"), 2),
-  ] as const),
+  declining("DB", ["months", 12]),
+  declining("DDB", ["factor", 2]),
   fromLibrary("DOLLARDE", [number("price"), number("fraction")] as const),
   fromLibrary("DOLLARFR", [number("price"), number("fraction")] as const),
 ];

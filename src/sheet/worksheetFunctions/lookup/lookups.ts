@@ -98,7 +98,8 @@ const lookup = define(
     }
     if (results) {
       const line = vectorOf(results);
-      return line ? (line.at(place) ?? null) : notOneLine("LOOKUP", "results");
+      if (!line) return notOneLine("LOOKUP", "results");
+      return place < line.length ? line.at(place) : notFound("LOOKUP", wanted);
     }
     return across ? searched.at(searched.rows - 1, place) : searched.at(place, searched.columns - 1);
   },
