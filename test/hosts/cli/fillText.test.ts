@@ -69,14 +69,14 @@ const tables: readonly (readonly [name: string, words: string[], text: string, f
     "a,b\n1,2\n3\n4,5,6\n7,8,9\n",
     "a,b,,y\n1,2,,10\n3,,,30\n4,5,6,40\n7,8,9,70\n",
     "Line 3 (row 2) has 1 field where the header has 2; the missing cells are blank.\n" +
-      "Line 4 (row 3) has 3 fields where the header has 2, and so on in 2 rows in all; column 3 has no header, added columns stand to the right of that. Is a delimiter inside a text without quotes?\n",
+      "Line 4 (row 3) has 3 fields where the header has 2, and so on in 2 rows in all; column C has no header, added columns stand to the right of that. Is a delimiter inside a text without quotes?\n",
   ],
   [
     "two columns of one name",
     ["--set", "y", "=C2"],
     "a,b,a\n1,2,3\n",
     "a,b,a,y\n1,2,3,3\n",
-    'The header "a" stands over columns 1 and 3; refer to them by their position, or rename all but one.\n',
+    'The header "a" stands over columns A and C; refer to them by their letters, or rename all but one.\n',
   ],
   [
     "a new column of a name that is there",
