@@ -23,45 +23,47 @@ export function evaluateNumber(definition: NumberDefinition, call: CallInputs, u
   );
   const bases = readers.map((reader) => reader.base);
   const results = new ResultColumns(rows, call.filledDown);
-  const values = new Float64Array(size);
+  const scratch = new Float64Array(size);
+  const isBase = unit.times === 1 && unit.over === 1 && unit.plus === 0 && !unit.logarithm;
   const range = openRange(definition.result.quantity);
   const uncertainty = new BlockUncertainty(definition, readers, bases, size);
   for (let from = 0; from < rows; from += blockRows) {
     const count = Math.min(blockRows, rows - from);
     const report = reportTo(results, definition, from);
     for (const reader of readers) reader.read(from, count, report);
+    const out = results.numbers.subarray(from, from + count);
+    const values = isBase ? out : scratch;
     definition.compute(count, values, ...bases);
-    convert(values, count, unit, range, results.numbers, from, (row) => {
-      results.fail(from + row, cellProblem(definition, noResult(definition, call, from + row)));
-    });
+    if (!isBase) convert(values, unit, out);
+    if (countOutside(values, range, out) > 0) {
+      for (let row = 0; row < count; row++) {
+        if (isWithin(range, values[row]!) && Number.isFinite(out[row])) continue;
+        results.fail(from + row, cellProblem(definition, noResult(definition, call, from + row)));
+      }
+    }
     if (readers.some((reader) => reader.uncertain)) uncertainty.propagate(values, count, unit, results, from);
   }
   return results.block();
 }
 
-/** Base units to the result's unit; a value outside the result's own range is no answer. */
-function convert(
-  values: Float64Array,
-  rows: number,
-  unit: Unit,
-  range: OpenRange,
-  out: Float64Array,
-  from: number,
-  fail: (row: number) => void,
-): void {
+/** Base units to the result's unit, as many as `out` has room for. */
+function convert(values: Float64Array, unit: Unit, out: Float64Array): void {
   const { times, over, plus, logarithm } = unit;
-  if (logarithm) for (let row = 0; row < rows; row++) out[from + row] = fromBase(unit, values[row]!);
-  else if (times === 1 && over === 1 && plus === 0) for (let row = 0; row < rows; row++) out[from + row] = values[row]!;
-  else for (let row = 0; row < rows; row++) out[from + row] = ((values[row]! - plus) * over) / times;
+  const rows = out.length;
+  if (logarithm) for (let row = 0; row < rows; row++) out[row] = fromBase(unit, values[row]!);
+  else for (let row = 0; row < rows; row++) out[row] = ((values[row]! - plus) * over) / times;
+}
+
+/** How many values are no answer: outside the result's own range, or beyond numbers in its unit. */
+function countOutside(values: Float64Array, range: OpenRange, out: Float64Array): number {
   const { lower, upper } = range;
+  const rows = out.length;
   let outside = 0;
   for (let row = 0; row < rows; row++) {
     const value = values[row]!;
-    if (!(value > lower && value < upper && Math.abs(out[from + row]!) < Number.POSITIVE_INFINITY)) outside++;
+    if (!(value > lower && value < upper && Math.abs(out[row]!) < Number.POSITIVE_INFINITY)) outside++;
   }
-  for (let row = 0; row < rows && outside > 0; row++) {
-    if (!isWithin(range, values[row]!) || !Number.isFinite(out[from + row])) fail(row);
-  }
+  return outside;
 }
 
 function reportTo(results: ResultColumns, definition: NumberDefinition, from: number): Report {
