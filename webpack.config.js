@@ -1,8 +1,11 @@
 import { chmod } from "node:fs/promises";
 import { fileURLToPath } from "node:url";
+import { gzipSync } from "node:zlib";
+import { tsImport } from "tsx/esm/api";
 import webpack from "webpack";
 
 const at = (path) => fileURLToPath(new URL(path, import.meta.url));
+const building = (name) => tsImport(`./src/hosts/office/build/${name}.ts`, import.meta.url);
 
 const common = {
   devtool: "source-map",
@@ -10,6 +13,7 @@ const common = {
   module: { rules: [{ test: /\.ts$/, loader: "ts-loader", options: { transpileOnly: true } }] },
   resolve: { extensions: [".ts", ".js"], extensionAlias: { ".js": [".ts", ".js"] } },
   performance: { hints: false },
+  stats: "errors-warnings",
 };
 
 /** The command can be run as it is. */
@@ -21,28 +25,101 @@ const runnable = {
   },
 };
 
-export default [
-  {
-    ...common,
-    name: "cli",
-    target: "node20",
-    entry: { cli: at("src/hosts/cli/main.ts") },
-    output: {
-      path: at("dist"),
-      filename: "[name].js",
-      module: true,
-      chunkFormat: "module",
-      assetModuleFilename: "[name][ext]",
+/** The files beside the scripts that make the add-in's folder whole: what the host reads of it, its pages and icons. */
+const addinFiles = (base) => ({
+  apply(compiler) {
+    const { RawSource } = compiler.webpack.sources;
+    compiler.hooks.thisCompilation.tap("addinFiles", (compilation) => {
+      const stage = webpack.Compilation.PROCESS_ASSETS_STAGE_REPORT;
+      compilation.hooks.processAssets.tapPromise({ name: "addinFiles", stage }, async () => {
+        const { addinFiles } = await building("addinFiles");
+        for (const [name, content] of await addinFiles(base)) {
+          compilation.emitAsset(name, new RawSource(content), { minimized: true });
+        }
+      });
+    });
+  },
+});
+
+/** The worksheet loads the functions before it can calculate, so their size is told with every build. */
+const toldSize = {
+  apply(compiler) {
+    compiler.hooks.emit.tap("toldSize", (compilation) => {
+      const script = compilation.getAsset("functions.js").source.buffer();
+      const size = (gzipSync(script).length / 1000).toFixed(1);
+      compilation.getLogger("addin").info(`functions.js is ${size} kB gzipped`);
+    });
+  },
+};
+
+const cli = {
+  ...common,
+  name: "cli",
+  target: "node20",
+  entry: { cli: at("src/hosts/cli/main.ts") },
+  output: {
+    path: at("dist"),
+    filename: "[name].js",
+    module: true,
+    chunkFormat: "module",
+    assetModuleFilename: "[name][ext]",
+  },
+  optimization: { minimize: false },
+  plugins: [new webpack.BannerPlugin({ banner: "#!/usr/bin/env node", raw: true }), runnable],
+};
+
+const library = {
+  ...common,
+  name: "library",
+  target: ["web", "es2022"],
+  entry: { index: at("src/index.ts") },
+  output: { path: at("dist"), filename: "[name].js", library: { type: "module" }, chunkFormat: "module" },
+  optimization: { minimize: false },
+};
+
+const addin = (base) => ({
+  ...common,
+  name: "addin",
+  target: ["web", "es2022"],
+  devtool: false,
+  experiments: {},
+  entry: {
+    functions: at("src/hosts/office/functions.ts"),
+    pane: { import: at("src/hosts/office/pane/main.ts"), dependOn: "functions" },
+  },
+  output: { path: at("dist/addin"), filename: "[name].js", clean: true },
+  infrastructureLogging: { level: "info" },
+  plugins: [addinFiles(base), toldSize],
+});
+
+/** The add-in served by this machine, at the first free port; what to do with it is printed. */
+async function served(env) {
+  const [{ baseAddress }, { freePort }, { localhostCertificate }, { sideloadText }] = await Promise.all(
+    ["baseAddress", "freePort", "localhostCertificate", "sideloadText"].map(building),
+  );
+  const port = await freePort(3443);
+  const base = baseAddress(env.base ?? `https://localhost:${port}`);
+  const { key, cert, path } = await localhostCertificate();
+  return {
+    ...addin(base),
+    devServer: {
+      host: "localhost",
+      port,
+      server: { type: "https", options: { key, cert } },
+      headers: { "Access-Control-Allow-Origin": "*", "Cache-Control": "no-cache" },
+      static: false,
+      client: false,
+      hot: false,
+      liveReload: false,
+      devMiddleware: { writeToDisk: true, stats: "errors-warnings" },
+      onListening: () => process.stdout.write(sideloadText(base, at("dist/addin/manifest.xml"), path)),
     },
-    optimization: { minimize: false },
-    plugins: [new webpack.BannerPlugin({ banner: "#!/usr/bin/env node", raw: true }), runnable],
-  },
-  {
-    ...common,
-    name: "library",
-    target: ["web", "es2022"],
-    entry: { index: at("src/index.ts") },
-    output: { path: at("dist"), filename: "[name].js", library: { type: "module" }, chunkFormat: "module" },
-    optimization: { minimize: false },
-  },
-];
+  };
+}
+
+/** `--env base=https://...` says where the add-in's folder is hosted. */
+export default async function configurations(env) {
+  if (env.WEBPACK_SERVE) return served(env);
+  const { baseAddress } = await building("baseAddress");
+  return [cli, library, addin(baseAddress(env.base))];
+}

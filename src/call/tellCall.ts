@@ -114,7 +114,7 @@ function fallbackOf(input: Input): string | undefined {
 
 /** How the base unit is written for a reader; a mass is carried as G times the mass. */
 function baseText(unit: Unit): string {
-  if (unit.kind === "mass") return "m**3/s**2 (G times the mass)";
+  if (unit.kind === "mass") return "m**3/s**2 (GM)";
   if (unit.kind === "instant") return `d from J2000.0, ${unit.frame ?? ""}`;
   return kinds[unit.kind]?.base ?? unit.kind;
 }

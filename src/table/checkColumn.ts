@@ -7,9 +7,8 @@ import { isProblem } from "../units/problem.js";
 import { readQuantity } from "../units/readQuantity.js";
 import { readUnit } from "../units/readUnit.js";
 import { one, toBase, type Unit } from "../units/unit.js";
-import { unitTable } from "../units/unitTable.js";
 import type { ColumnFinding } from "./columnFinding.js";
-import { type RecognisedColumn, recogniseColumn } from "./recogniseColumn.js";
+import { isSymbol, type RecognisedColumn, recogniseColumn } from "./recogniseColumn.js";
 
 /** What was understood of a column, how its cells are made up, and what to look at. */
 export interface ColumnCheck {
@@ -23,8 +22,10 @@ export interface ColumnCheck {
 
 export function checkColumn(header: string, unitCell: string | undefined, column: Column): ColumnCheck {
   const recognised = recogniseColumn(header, unitCell);
-  const contents = contentsOf(column, recognised);
-  return { header, recognised, ...contents.counts, findings: [...headerFindings(recognised), ...contents.findings] };
+  const { counts, findings } = contentsOf(column, recognised);
+  // A column without numbers needs no unit: names, remarks, or quantities that carry their own.
+  const ofHeader = counts.numbers > 0 ? headerFindings(recognised) : [];
+  return { header, recognised, ...counts, findings: [...ofHeader, ...findings] };
 }
 
 function headerFindings({ problem, quantity, unit, isUncertainty }: RecognisedColumn): ColumnFinding[] {
@@ -81,6 +82,8 @@ function valueFindings(column: Column, values: readonly number[], recognised: Re
       count: outside.length,
     });
   }
+  // A symbol alone is too little to doubt a column for: "R" is a radius as often as a resolving power.
+  if (isSymbol(recognised.name) && recognised.unit === undefined) return findings;
   const median = [...values].sort((a, b) => a - b)[values.length >> 1]!;
   if (!isPlausible(quantity, toBase(unit, median))) {
     findings.push({ about: "implausible", quantity, unit, median, better: betterUnit(quantity, median, unit) });
@@ -92,10 +95,12 @@ function isPlausible({ plausible }: Quantity, base: number): boolean {
   return plausible === undefined || (base >= plausible.least && base <= plausible.most);
 }
 
+/** Units that columns of target tables are given in (common practice). */
+const usualUnits = "d h yr s min solMass jupiterMass earthMass kg deg rad m/s km/s AU solRad nm Angstrom um".split(" ");
+
 /** A unit in which columns of this quantity are common and in which the value would be usual. */
 function betterUnit(quantity: Quantity, value: number, unit: Unit): string | undefined {
-  const symbols = [quantity.unit, ...unitTable.map(({ symbol }) => symbol), "km/s"];
-  return symbols.find((symbol) => {
+  return [quantity.unit, ...usualUnits].find((symbol) => {
     const other = readUnit(symbol);
     if (isProblem(other) || other.kind !== quantity.kind || other.text === unit.text) return false;
     return isPlausible(quantity, toBase(other, value));

@@ -13,7 +13,12 @@ export function checkTable(columns: readonly TableColumn[]): readonly ColumnChec
   const checks = columns.map(({ header, unitCell, column }) => checkColumn(header, unitCell, column));
   return checks.map((check, index) => {
     const before = checks[index - 1]?.recognised;
-    const stray = check.recognised.isUncertainty && !before?.quantity && !before?.isUncertainty && !before?.unit;
+    const stray =
+      check.numbers > 0 &&
+      check.recognised.isUncertainty &&
+      !before?.quantity &&
+      !before?.isUncertainty &&
+      !before?.unit;
     return stray ? { ...check, findings: [...check.findings, { about: "uncertainty without value" }] } : check;
   });
 }

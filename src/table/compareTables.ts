@@ -1,5 +1,7 @@
 import { type Cell, CellError } from "../call/cell.js";
-import { type Column, cellAt } from "../call/column.js";
+import { type Column, cellAt, columnOf } from "../call/column.js";
+import { baseSlope, convertible, fromBase, toBase, type Unit } from "../units/unit.js";
+import { recogniseColumn } from "./recogniseColumn.js";
 
 /** A column as it stood at one moment; `sigma` is the column of its uncertainties, where it has one. */
 export interface ComparedColumn {
@@ -22,6 +24,7 @@ export interface Movement {
   readonly rowBefore: number | undefined;
   readonly rowAfter: number | undefined;
   readonly before: Cell;
+  /** In the unit of the value before. */
   readonly after: Cell;
   /** After less before, where both are numbers. */
   readonly change: number | undefined;
@@ -31,47 +34,99 @@ export interface Movement {
   readonly sigmas: number | undefined;
 }
 
-/**
- * What moved between two states of a table, the most important first: cells that became or ceased to be errors or
- * blanks, then by size in units of the uncertainty, then by relative size.
- */
-export function compareTables(before: ComparedTable, after: ComparedTable): readonly Movement[] {
-  const rows = matchRows(before.keys, after.keys);
-  const movements: Movement[] = [];
-  for (const column of before.columns) {
-    const other = after.columns.find(({ header }) => header === column.header);
-    if (!other) continue;
-    for (const { key, from, to } of rows) {
-      const old = from === undefined ? null : cellAt(column.column, from);
-      const now = to === undefined ? null : cellAt(other.column, to);
-      if (same(old, now)) continue;
-      const sigma = sigmaAt(column, from) ?? sigmaAt(other, to);
-      movements.push({
-        header: column.header,
-        key,
-        rowBefore: from,
-        rowAfter: to,
-        before: old,
-        after: now,
-        ...sizes(old, now, sigma),
-      });
-    }
-  }
-  return movements.sort(byImportance);
+export interface Comparison {
+  /**
+   * The most important first: cells that became or ceased to be errors or blanks, then by size in units of the
+   * uncertainty, then by relative size.
+   */
+  readonly movements: readonly Movement[];
+  /** Headers of columns that are there in one of the states only, and so were not compared. */
+  readonly onlyBefore: readonly string[];
+  readonly onlyAfter: readonly string[];
 }
 
-function matchRows(before: readonly string[], after: readonly string[]) {
+/**
+ * What moved between two states of a table. Columns belong together by their header; one whose unit was changed there
+ * is found by its name and compared in the unit it had.
+ */
+export function compareTables(before: ComparedTable, after: ComparedTable): Comparison {
+  const rows = matchRows(before.keys, after.keys);
+  const pairs = matchColumns(before.columns, after.columns);
+  const movements = pairs.flatMap(({ from, to }) => movementsOf(from, to, rows));
+  const paired = new Set(pairs.map(({ to }) => to.header));
+  const kept = new Set(pairs.map(({ from }) => from.header));
+  return {
+    movements: movements.sort(byImportance),
+    onlyBefore: before.columns.map(({ header }) => header).filter((header) => !kept.has(header)),
+    onlyAfter: after.columns.map(({ header }) => header).filter((header) => !paired.has(header)),
+  };
+}
+
+interface RowPair {
+  readonly key: string;
+  readonly from: number | undefined;
+  readonly to: number | undefined;
+}
+
+interface ColumnPair {
+  readonly from: ComparedColumn;
+  /** Its header is the one it has now, its cells are in the unit of `from`. */
+  readonly to: ComparedColumn;
+}
+
+function movementsOf(from: ComparedColumn, to: ComparedColumn, rows: readonly RowPair[]): Movement[] {
+  return rows.flatMap((row) => {
+    const before = row.from === undefined ? null : cellAt(from.column, row.from);
+    const after = row.to === undefined ? null : cellAt(to.column, row.to);
+    if (same(before, after)) return [];
+    const sigma = sigmaAt(from, row.from) ?? sigmaAt(to, row.to);
+    const { key, from: rowBefore, to: rowAfter } = row;
+    return { header: from.header, key, rowBefore, rowAfter, before, after, ...sizes(before, after, sigma) };
+  });
+}
+
+function matchColumns(before: readonly ComparedColumn[], after: readonly ComparedColumn[]): ColumnPair[] {
+  const left = [...after];
+  const take = (matches: (column: ComparedColumn) => boolean) => {
+    const at = left.findIndex(matches);
+    return at < 0 ? undefined : left.splice(at, 1)[0];
+  };
+  const exact = before.map((from) => ({ from, to: take(({ header }) => header === from.header) }));
+  return exact.flatMap(({ from, to }): ColumnPair[] => {
+    if (to) return [{ from, to }];
+    const was = recogniseColumn(from.header);
+    const renamed = take(({ header }) => {
+      const now = recogniseColumn(header);
+      return now.name === was.name && !!now.unit && !!was.unit && convertible(now.unit, was.unit);
+    });
+    if (!renamed) return [];
+    return [{ from, to: converted(renamed, recogniseColumn(renamed.header).unit!, was.unit!) }];
+  });
+}
+
+function converted({ header, column, sigma }: ComparedColumn, from: Unit, to: Unit): ComparedColumn {
+  const values = Array.from({ length: column.length }, (_, row): Cell => {
+    const cell = cellAt(column, row);
+    return typeof cell === "number" ? fromBase(to, toBase(from, cell)) : cell;
+  });
+  if (!sigma) return { header, column: columnOf(values) };
+  const sigmas = Array.from({ length: sigma.length }, (_, row): Cell => {
+    const [cell, value] = [cellAt(sigma, row), cellAt(column, row)];
+    if (typeof cell !== "number" || typeof value !== "number") return cell;
+    const base = toBase(from, value);
+    return (cell * baseSlope(from, base)) / baseSlope(to, base);
+  });
+  return { header, column: columnOf(values), sigma: columnOf(sigmas) };
+}
+
+function matchRows(before: readonly string[], after: readonly string[]): RowPair[] {
   const waiting = new Map<string, number[]>();
   after.forEach((key, row) => {
     const rows = waiting.get(key);
     if (rows) rows.push(row);
     else waiting.set(key, [row]);
   });
-  const matched: { key: string; from: number | undefined; to: number | undefined }[] = before.map((key, from) => ({
-    key,
-    from,
-    to: waiting.get(key)?.shift(),
-  }));
+  const matched: RowPair[] = before.map((key, from) => ({ key, from, to: waiting.get(key)?.shift() }));
   for (const [key, rows] of waiting) for (const to of rows) matched.push({ key, from: undefined, to });
   return matched;
 }

@@ -16,8 +16,13 @@ export interface RecognisedColumn {
   readonly isUncertainty: boolean;
 }
 
+// Letters on either side make another word ("terror"); "_" and digits do not: "K_err", "err1".
 const uncertaintyWords =
-  /\b(sigma|sig|err|error|errors|unc|uncertainty|std|stddev)\b|^e_|[\u00b1\u03c3]|\+\s?\/?\s?-/gi;
+  /(?<!\p{L})(?:sigma|sig|errors?|err|unc|uncertainty|std|stddev)(?!\p{L})[12]?|^e_|[\u00b1\u03c3]|\+\s?\/?\s?-/giu;
+
+/** A header with one of these words tells something about a quantity and is not the quantity itself. */
+const aboutAnother =
+  /(?<!\p{L})(?:ratio|half|rms|scatter|flag|ref|reference|limit|source|method|number|count|year|date|quality|grade|class|type|name|id)(?!\p{L})/iu;
 
 /** `unitCell`: the cell of a row of units under the header, where the table has one. */
 export function recogniseColumn(header: string, unitCell?: string): RecognisedColumn {
@@ -46,15 +51,24 @@ function quantityNamed(name: string, unit: Unit | undefined): Quantity | undefin
   const words = plainWords(name);
   const fits = ({ quantity }: NamedQuantity) => unit === undefined || quantity.kind === unit.kind;
   const whole = named.filter((candidate) => candidate.words === words);
-  const within = named
-    .filter((candidate) => candidate.words.length > 2 && ` ${words} `.includes(` ${candidate.words} `))
-    .sort((a, b) => b.words.length - a.words.length);
+  const within = aboutAnother.test(name)
+    ? []
+    : named
+        .filter((candidate) => !isSymbol(candidate.words) && ` ${words} `.includes(` ${candidate.words} `))
+        .sort((a, b) => b.words.length - a.words.length);
   const candidates = [...whole, ...within];
-  return (candidates.find(fits) ?? candidates[0])?.quantity;
+  const fitting = candidates.find(fits);
+  if (fitting) return fitting.quantity;
+  // One letter means many things: "K [mag]" is a brightness and no semi-amplitude with a slip in its unit.
+  return candidates.find((candidate) => !isSymbol(candidate.words))?.quantity;
+}
+
+export function isSymbol(name: string): boolean {
+  return name.length <= 2;
 }
 
 /** Letters and digits in words; capitals matter in symbols of one or two letters only (`M` and `m`, `P`, `K`). */
 function plainWords(name: string): string {
   const words = name.replace(/[^\p{L}\p{N}*]+/gu, " ").trim();
-  return words.length <= 2 ? words : words.toLowerCase();
+  return isSymbol(words) ? words : words.toLowerCase();
 }

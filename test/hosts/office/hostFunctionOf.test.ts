@@ -1,0 +1,64 @@
+import { describe, expect, test } from "vitest";
+import type { NumberDefinition } from "../../../src/functions/definition.js";
+import { reflex } from "../../../src/functions/reflex/reflex.js";
+import { hostFunctionOf } from "../../../src/hosts/office/hostFunctionOf.js";
+import type { HostError } from "./standInHost.js";
+import { standInHost } from "./standInHost.js";
+
+standInHost();
+
+const called = hostFunctionOf(reflex);
+const headers = [["Period [d]", "Star mass [solMass]", "Planet mass"]];
+const numbers = [[[4.23]], [[1.1]], [[0.47]], null, null, headers, null];
+
+function messageOf(run: () => unknown): string {
+  try {
+    run();
+  } catch (error) {
+    return (error as HostError).message;
+  }
+  return "no error";
+}
+
+describe("a call by the host", () => {
+  test("names header cells by their addresses where the host gives them", () => {
+    const parameterAddresses = ["T!B2", "T!C2", "T!D2", null, null, "T!B1:D1", null];
+    expect(messageOf(() => called(...numbers, { functionName: "REFLEX", parameterAddresses }))).toContain(
+      'write the unit in its header D1 ("Planet mass [jupiterMass]")',
+    );
+  });
+
+  test("names the sheet where there are two", () => {
+    const parameterAddresses = ["T!B2", "T!C2", "T!D2", null, null, "'My heads'!B1:D1", null];
+    expect(messageOf(() => called(...numbers, { functionName: "REFLEX", parameterAddresses }))).toContain(
+      "'My heads'!D1",
+    );
+  });
+
+  test.each([[[{ functionName: "REFLEX" }]], [[{ functionName: "REFLEX", parameterAddresses: null }]], [[]]])(
+    "works without: %j",
+    (invocation) => {
+      expect(messageOf(() => called(...numbers, ...invocation))).toContain(
+        'write the unit in its header ("Planet mass',
+      );
+    },
+  );
+
+  test("says so where a function of ours stops", () => {
+    const broken: NumberDefinition = {
+      ...reflex,
+      compute: () => {
+        throw new TypeError("x is not a function");
+      },
+    };
+    const message = messageOf(() => hostFunctionOf(broken)("1 d", "1 solMass", "1 jupiterMass"));
+    expect(message).toContain("REFLEX: it stopped with TypeError: x is not a function, a mistake of Barycell");
+  });
+
+  test("lets nothing out that is no number where a kernel gives it", () => {
+    const broken: NumberDefinition = { ...reflex, compute: (rows, out) => out.fill(Number.NaN, 0, rows) };
+    expect(messageOf(() => hostFunctionOf(broken)("1 d", "1 solMass", "1 jupiterMass"))).toMatch(
+      /^REFLEX: no K follows/,
+    );
+  });
+});
