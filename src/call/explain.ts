@@ -77,7 +77,7 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
 }
 
 /** `wanted` is a unit that would do, where one is known. */
-function unitSentence(problem: UnitProblem, wanted?: string): string {
+export function unitSentence(problem: UnitProblem, wanted?: string): string {
   switch (problem.problem) {
     case "unknown unit": {
       const near = problem.nearest;

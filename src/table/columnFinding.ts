@@ -1,4 +1,4 @@
-import { quote } from "../call/explain.js";
+import { quote, unitSentence } from "../call/explain.js";
 import type { Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
 import type { UnitProblem } from "../units/problem.js";
@@ -40,7 +40,7 @@ export function sentenceOfColumnFinding(
       return `${column} looks like ${meaning} but states no unit; write for example ${quote(`${header.trim()} [${unit}]`)}.`;
     }
     case "unit problem":
-      return `${column}: ${unitProblemText(finding.unit)}`;
+      return `${column}: ${unitSentence(finding.unit)}.`.replace("?.", "?");
     case "kind":
       return `${column} looks like ${finding.quantity.meaning}, ${kindPhrase(finding.quantity.kind)}, but its unit ${finding.unit.text} is ${kindPhrase(finding.unit.kind)}; correct the name or the unit.`;
     case "implausible": {
@@ -56,17 +56,6 @@ export function sentenceOfColumnFinding(
       return `${column} holds ${counted(finding.count, "error")}, first ${finding.code} in ${rowText(finding.row)}.`;
     case "uncertainty without value":
       return `${column} looks like an uncertainty, but the column to its left is no value it could belong to; put it to the right of its value.`;
-  }
-}
-
-function unitProblemText(problem: UnitProblem): string {
-  switch (problem.problem) {
-    case "unknown unit":
-      return `${quote(problem.text)} is not a known unit${problem.nearest ? `; did you mean "${problem.nearest.symbol}"?` : "."}`;
-    case "ambiguous unit":
-      return `${quote(problem.text)} has more than one meaning; write ${problem.choices.map(({ symbol }) => `"${symbol}"`).join(" or ")}.`;
-    case "unit grammar":
-      return `${quote(problem.text)} reads in more than one way; write ${quote(problem.write)}.`;
   }
 }
 

@@ -102,11 +102,17 @@ describe("planted faults are named", () => {
       [["Period"], [4.2]],
       ['"Period" looks like orbital period but states no unit; write for example "Period [d]".'],
     ],
-    ["an unknown unit", [["Period [dayz]"], [4.2]], ['"Period [dayz]": "dayz" is not a known unit; did you mean "d"?']],
+    [
+      "an unknown unit",
+      [["Period [dayz]"], [4.2]],
+      ['"Period [dayz]": "dayz" is not a known unit; did you mean "day" (d)?'],
+    ],
     [
       "an ambiguous unit",
       [["Mass [M]"], [1]],
-      ['"Mass [M]": "M" has more than one meaning; write "solMass" or "jupiterMass" or "earthMass" or "mag".'],
+      [
+        '"Mass [M]": "M" has more than one meaning; write "solMass" (solar mass), "jupiterMass" (Jupiter mass), "earthMass" (Earth mass) or "mag" (magnitude).',
+      ],
     ],
     [
       "a unit of another kind",
