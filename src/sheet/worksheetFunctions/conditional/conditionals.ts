@@ -22,7 +22,7 @@ function summarised(name: string, pairs: Pairs, values: Matrix, summary: Summary
 
 function counted(name: string, pairs: Pairs): number | CellError {
   const matching = matchingOf(pairs, name);
-  return matching instanceof CellError ? matching : matching.holds.reduce((count, each) => count + each, 0);
+  return matching instanceof CellError ? matching : matching.places.length;
 }
 
 const ofOneCondition = (name: string, summary: Summary) =>

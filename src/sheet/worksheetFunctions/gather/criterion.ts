@@ -27,6 +27,16 @@ export function conditionOf(criterion: Cell): Condition {
   return (cell) => cell === wanted;
 }
 
+/** The one value that cells equal where a criterion holds; undefined for every other criterion. */
+export function equalValue(criterion: Cell): number | boolean | string | undefined {
+  if (criterion instanceof CellError) return undefined;
+  if (typeof criterion !== "string") return criterion ?? 0;
+  const operand = criterion.startsWith("=") ? criterion.slice(1) : criterion;
+  if (operand === "" || (operand === criterion && /^[<>]/.test(criterion))) return undefined;
+  const value = plainValue(operand);
+  return typeof value === "string" && hasWildcards(value) ? undefined : value;
+}
+
 function matchesText(operand: string): Condition {
   // A criterion that is an empty text finds what looks empty.
   return operand === "" ? (cell) => cell === null || cell === "" : equals(operand);

@@ -1,13 +1,14 @@
 import type { Cell } from "../../../call/cell.js";
 import { CellError } from "../../../call/cell.js";
 import type { Matrix } from "../../values/operand.js";
-import { conditionOf } from "./criterion.js";
+import { conditionOf, equalValue } from "./criterion.js";
+import { rowsByValue } from "./rowsByValue.js";
 
-/** The places of a rectangle, row by row: 1 where every condition holds, 0 elsewhere. */
+/** The places of a rectangle, counted row by row, where every condition holds. */
 export interface Matching {
   readonly rows: number;
   readonly columns: number;
-  readonly holds: Uint8Array;
+  readonly places: ArrayLike<number>;
 }
 
 /**
@@ -17,51 +18,68 @@ export function matchingOf(
   pairs: readonly (readonly [Matrix, { readonly cell: Cell }])[],
   name: string,
 ): Matching | CellError {
-  const [first] = pairs[0] as readonly [Matrix, unknown];
+  const [first, criterion] = pairs[0] as readonly [Matrix, { readonly cell: Cell }];
   const { rows, columns } = first;
-  const holds = new Uint8Array(rows * columns).fill(1);
-  for (const [range, criterion] of pairs) {
-    if (range.rows !== rows || range.columns !== columns) {
-      return unequalRanges(name, range, rows, columns);
-    }
-    narrow(holds, range, criterion.cell);
+  const unequal = pairs.find(([range]) => range.rows !== rows || range.columns !== columns);
+  if (unequal) {
+    return unequalRanges(name, unequal[0], rows, columns);
   }
-  return { rows, columns, holds };
+  let places = placesIn(first, criterion.cell);
+  for (const [range, { cell }] of pairs.slice(1)) {
+    places = narrowed(places, places.length, range, cell);
+  }
+  return { rows, columns, places };
 }
 
-function narrow(holds: Uint8Array, range: Matrix, criterion: Cell): void {
-  const condition = conditionOf(criterion);
+/** Where one condition holds. A single value is looked up in a column that is searched again and again. */
+function placesIn(range: Matrix, criterion: Cell): ArrayLike<number> {
   const { rows, columns } = range;
-  for (let column = 0; column < columns; column++) {
+  const column = columns === 1 ? range.block?.columns[0] : undefined;
+  const value = column && equalValue(criterion);
+  const known = column && value !== undefined ? rowsByValue(column, value) : undefined;
+  return known ?? narrowed(undefined, rows * columns, range, criterion);
+}
+
+/** Of some places, or of all, those where one more condition holds. */
+function narrowed(
+  places: ArrayLike<number> | undefined,
+  count: number,
+  range: Matrix,
+  criterion: Cell,
+): ArrayLike<number> {
+  const condition = conditionOf(criterion);
+  const { columns } = range;
+  const kept = new Uint32Array(count);
+  let found = 0;
+  for (let index = 0; index < count; index++) {
+    const place = places ? (places[index] as number) : index;
+    const column = place % columns;
+    const row = columns === 1 ? place : Math.floor(place / columns);
     const packed = range.block?.columns[column];
-    for (let row = 0; row < rows; row++) {
-      const place = row * columns + column;
-      if (holds[place] === 1) {
-        const cell =
-          packed && packed.others?.[row] === undefined ? (packed.numbers[row] as number) : range.at(row, column);
-        holds[place] = condition(cell) ? 1 : 0;
-      }
+    const cell = packed && packed.others?.[row] === undefined ? (packed.numbers[row] as number) : range.at(row, column);
+    if (condition(cell)) {
+      kept[found++] = place;
     }
   }
+  return kept.subarray(0, found);
 }
 
 /** The number cells of a rectangle at the places that match, its first cell laid on the first place. */
 export function numbersWhere(matching: Matching, values: Matrix, name: string): Float64Array | CellError {
-  const { rows, columns, holds } = matching;
+  const { rows, columns, places } = matching;
   if (values.rows < rows || values.columns < columns) {
     return unequalRanges(name, values, rows, columns);
   }
-  const kept = new Float64Array(holds.length);
+  const kept = new Float64Array(places.length);
   let count = 0;
-  for (let place = 0; place < holds.length; place++) {
-    if (holds[place] === 1) {
-      const cell = values.at(Math.floor(place / columns), place % columns);
-      if (cell instanceof CellError) {
-        return cell;
-      }
-      if (typeof cell === "number") {
-        kept[count++] = cell;
-      }
+  for (let index = 0; index < places.length; index++) {
+    const place = places[index] as number;
+    const cell = values.at(Math.floor(place / columns), place % columns);
+    if (cell instanceof CellError) {
+      return cell;
+    }
+    if (typeof cell === "number") {
+      kept[count++] = cell;
     }
   }
   return kept.subarray(0, count);
