@@ -1,6 +1,6 @@
 import { type Column, cellAt } from "../../call/column.js";
 import { type DelimitedTable, recordOfRow } from "./delimitedTable.js";
-import { type GuardText, guardedField, quoteField } from "./fieldWriter.js";
+import { type GuardText, quotedCell } from "./fieldWriter.js";
 
 /** A column to stand to the right of a table that was read. */
 export interface AddedColumn {
@@ -60,9 +60,9 @@ function tailOfRecord(
   const firstRow = recordOfRow(table, 0);
   const field = (column: AddedColumn, record: number) => {
     if (record >= firstRow) {
-      return guardedField(cellAt(column.column, record - firstRow), guardText);
+      return quotedCell(cellAt(column.column, record - firstRow), guardText);
     }
-    return guardedField(record === 0 ? column.header : (column.unit ?? ""), guardText);
+    return quotedCell(record === 0 ? column.header : (column.unit ?? ""), guardText);
   };
   return (record) => {
     if (added.length === 0) {
@@ -71,7 +71,7 @@ function tailOfRecord(
     let tail = source.unclosed && record === source.records - 1 ? '"' : "";
     tail += delimiter.repeat(columns.length - (source.widths[record] as number));
     for (const column of added) {
-      tail += delimiter + quoteField(field(column, record));
+      tail += delimiter + field(column, record);
     }
     return tail;
   };

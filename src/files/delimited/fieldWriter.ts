@@ -21,3 +21,9 @@ export function quoteFirstField(text: string): string {
 export function guardedField(cell: Cell, guardText: GuardText | undefined): string {
   return typeof cell === "string" && guardText !== undefined ? guardText(cell) : fieldOfCell(cell);
 }
+
+/** A cell as a field in quotes where it needs them; a number never does, and most cells are numbers. */
+export function quotedCell(cell: Cell, guardText: GuardText | undefined): string {
+  const field = guardedField(cell, guardText);
+  return typeof cell === "number" ? field : quoteField(field);
+}
