@@ -1,4 +1,4 @@
-import type { NumberDefinition } from "../functions/definition.js";
+import type { NumberDefinition, QuantityInput } from "../functions/definition.js";
 import { baseSlope, fromBase, type Unit } from "../units/unit.js";
 import { type BlockReader, blockRows, quantityReader, type Report, wordReader } from "./blockReader.js";
 import type { CallProblem } from "./callProblem.js";
@@ -19,7 +19,7 @@ export function evaluateNumber(definition: NumberDefinition, call: CallInputs, u
   const readers = call.inputs.map((cells) =>
     cells.input.takes === "word"
       ? wordReader(cells, cells.input, size)
-      : quantityReader(cells, cells.input as never, size),
+      : quantityReader(cells, cells.input as QuantityInput, size),
   );
   const bases = readers.map((reader) => reader.base);
   const results = new ResultColumns(rows, call.filledDown);

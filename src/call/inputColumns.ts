@@ -1,3 +1,4 @@
+import { isOptional } from "../functions/argumentNames.js";
 import type { Definition, Input } from "../functions/definition.js";
 import { columnOfAddress } from "./address.js";
 import { assignHeaders, type HeaderAssignment } from "./assignHeaders.js";
@@ -38,12 +39,12 @@ export function callInputs(
   headers: readonly HeaderCell[],
   filledDown: boolean,
 ): CallInputs | CallProblem {
-  const { inputs } = definition;
+  const inputs: readonly Input[] = definition.inputs;
   for (let index = 0; index < inputs.length; index++) {
     const input = inputs[index]!;
     const cells = given[index];
     if (!cells) {
-      if (isRequired(input)) return { about: "missing", input: input.name };
+      if (!isOptional(input)) return { about: "missing", input: input.name };
     } else if (cells.columns.length > (takesHeader(input) ? 3 : 1) || cells.columns.length === 0) {
       return { about: "shape", input: input.name, rows: cells.rows, columns: cells.columns.length };
     }
@@ -57,7 +58,7 @@ export function callInputs(
     return { about: "lengths", input, rows: lengths[unequal]!, other, otherRows: rows };
   }
   const headed = inputs.filter(takesHeader);
-  const widths = headed.map((input) => given[inputs.indexOf(input as never)]?.columns.length ?? 0);
+  const widths = headed.map((input) => given[inputs.indexOf(input)]?.columns.length ?? 0);
   const ways = assignHeaders(headers, widths);
   if ("about" in ways) return ways;
   const assigned = ways.find((way) => agrees(way, headed, widths)) ?? ways[0]!;
@@ -118,8 +119,4 @@ function agrees(way: HeaderAssignment, inputs: readonly Input[], widths: readonl
 
 function takesHeader(input: Input): boolean {
   return input.takes === "quantity" || input.takes === "any quantity";
-}
-
-function isRequired(input: Input): boolean {
-  return input.takes !== "word" && !(input.takes === "quantity" && input.fallback !== undefined);
 }

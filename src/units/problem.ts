@@ -1,5 +1,3 @@
-import type { Kind } from "./kind.js";
-
 /** A unit that is close to what was written. */
 export interface NearestUnit {
   readonly spelling: string;
@@ -25,5 +23,3 @@ export type QuantityProblem =
 export function isProblem(value: object): value is UnitProblem | QuantityProblem {
   return "problem" in value;
 }
-
-export type { Kind };

@@ -4,7 +4,9 @@ import type { Functions } from "./functions.js";
 
 /** The sentence for a function that nobody knows, with the nearest name that somebody does. */
 export function unknownFunction(name: string, functions: Functions): string {
-  const near = nearest(name, [...functions.cellFunctionNames(), ...worksheetFunctionNames]);
+  const own = functions.cellFunctionNames();
+  // Most often it is one of the host's functions without the namespace that it stands in.
+  const near = own.find((full) => full.endsWith(`.${name}`)) ?? nearest(name, [...own, ...worksheetFunctionNames]);
   return near === undefined
     ? `${name}: no function has this name; check the spelling, for example SUM or AVERAGE`
     : `${name}: no function has this name; did you mean ${near}?`;

@@ -146,3 +146,11 @@ describe.concurrent("standard input and the command line", () => {
     expect(await calc(...words)).toEqual({ code: 2, out: "", note });
   });
 });
+
+describe.concurrent("one of our functions without its namespace", () => {
+  test.each(["REFLEX", "INTO", "Period"])("=%s(...) is named in full", async (name) => {
+    const { code, note } = await calc(`=${name}("1 AU")`);
+    expect(code).toBe(1);
+    expect(note).toContain(`no function has this name; did you mean BARY.${name.toUpperCase()}?`);
+  });
+});
