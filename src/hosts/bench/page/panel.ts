@@ -1,0 +1,16 @@
+import type { TemplateResult } from "lit-html";
+import type { Page, PageChange } from "./page.js";
+
+/** One of the parts beside the grid: Why, Check, Compare, History, Find. */
+export interface Panel {
+  readonly id: string;
+  readonly title: string;
+  /** The keys that show it, as told in the interface: "Alt+W". */
+  readonly keys: string;
+  view(): TemplateResult;
+  shown(): void;
+  hidden(): void;
+  changed(change: PageChange): void;
+}
+
+export type CreatePanel = (page: Page, redraw: () => void) => Panel;

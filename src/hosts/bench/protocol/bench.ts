@@ -1,0 +1,92 @@
+import type { Area, Place } from "../../../sheet/book/book.js";
+import type {
+  BookEntry,
+  ColumnReport,
+  ComparisonReport,
+  CompletedText,
+  Distribution,
+  FormulaCheck,
+  FunctionEntry,
+  KeptDraft,
+  MarkState,
+  Opened,
+  PlotColumn,
+  TableReport,
+  WhyCell,
+} from "./answers.js";
+import type { BookState } from "./bookState.js";
+import type { Action, FilterCondition, FindOptions, Outcome } from "./request.js";
+import type { ShownWindow } from "./shown.js";
+
+/**
+ * All that the page asks of the worker, which holds the books. Every method is answered by a promise on the page's
+ * side; arguments and answers are plain data.
+ */
+export interface Bench {
+  /** Opens the last book, or the demo where there is none; the state is also sent as an event. */
+  start(): BookState;
+  books(): readonly BookEntry[];
+  openBook(id: string): Opened;
+  /** An empty table with these headers: `Period [d]`. */
+  newBook(title: string, headers: readonly string[]): Opened;
+  openDemo(): Opened;
+  renameBook(title: string): void;
+  /** Removed books can be taken back until the page is closed. */
+  removeBook(id: string): void;
+  takeBack(id: string): void;
+  openFile(file: File): Opened;
+  openText(name: string, text: string): Opened;
+  /** The file as bytes, whole; `sheet` counts for formats of one table. */
+  exportAs(
+    format: ExportFormat,
+    sheet: number,
+  ): { readonly name: string; readonly type: string; readonly bytes: Uint8Array };
+
+  windowOf(sheet: number, from: number, to: number, left: number, right: number): ShownWindow;
+  /** What a cell holds, as one would type it. */
+  entryOf(place: Place): string;
+  act(action: Action, label?: string): Outcome;
+  undo(): Outcome;
+  redo(): Outcome;
+  goTo(version: number): Outcome;
+  cancel(): void;
+
+  copy(area: Area): { readonly text: string; readonly html: string; readonly own: string };
+  filter(sheet: number, conditions: readonly FilterCondition[]): Outcome;
+  find(options: FindOptions, after: Place, backwards: boolean): Place | undefined;
+  /** The edge of the filled cells from a place in a direction: where a jump by keyboard lands. */
+  edge(place: Place, toward: "down" | "up" | "left" | "right"): Place;
+  /** A place typed by name or address: `H12`, `Assumptions!B2`, a defined name, a target's name in the first column. */
+  placeOf(text: string, sheet: number): Area | undefined;
+  nextProblem(after: Place): Place | undefined;
+
+  functions(): readonly FunctionEntry[];
+  /** Functions whose question or words answer these; the best first. */
+  searchFunctions(words: string): readonly string[];
+  checkFormula(text: string, place: Place): FormulaCheck;
+  completeHeaders(text: string, caret: number, place: Place): CompletedText;
+  keepDraft(draft: KeptDraft | undefined): void;
+  keptDraft(): KeptDraft | undefined;
+
+  why(place: Place): WhyCell;
+  draw(place: Place, seed: number): Distribution | undefined;
+  checkTable(sheet: number): TableReport;
+  checkUnit(text: string, place: Place): ColumnReport;
+  marks(): readonly MarkState[];
+  mark(sheet: number): MarkState;
+  forget(mark: string): void;
+  compare(mark: string): ComparisonReport;
+  writeComparison(mark: string): Outcome;
+
+  plotColumn(sheet: number, column: number): PlotColumn;
+}
+
+export type ExportFormat = "csv" | "tsv" | "ecsv" | "votable" | "xlsx" | "book";
+
+/** What the worker tells by itself. */
+export type BenchEvent =
+  | { readonly is: "state"; readonly state: BookState }
+  | { readonly is: "progress"; readonly what: string; readonly done: number; readonly total: number }
+  | { readonly is: "idle" }
+  /** A fault of ours in the worker: it is started anew from the last whole sheet. */
+  | { readonly is: "fault"; readonly message: string };
