@@ -5,7 +5,7 @@ import { tsImport } from "tsx/esm/api";
 import webpack from "webpack";
 
 const at = (path) => fileURLToPath(new URL(path, import.meta.url));
-const building = (name) => tsImport(`./src/hosts/office/build/${name}.ts`, import.meta.url);
+const building = (name, host = "office") => tsImport(`./src/hosts/${host}/build/${name}.ts`, import.meta.url);
 
 const common = {
   devtool: "source-map",
@@ -41,13 +41,35 @@ const addinFiles = (base) => ({
   },
 });
 
-/** The worksheet loads the functions before it can calculate, so their size is told with every build. */
-const toldSize = {
+/** What has to be loaded before anything can be calculated is told with every build. */
+const toldSize = (name, scripts) => ({
   apply(compiler) {
     compiler.hooks.emit.tap("toldSize", (compilation) => {
-      const script = compilation.getAsset("functions.js").source.buffer();
-      const size = (gzipSync(script).length / 1000).toFixed(1);
-      compilation.getLogger("addin").info(`functions.js is ${size} kB gzipped`);
+      for (const script of scripts) {
+        const size = gzipSync(compilation.getAsset(script).source.buffer()).length / 1000;
+        compiler.getInfrastructureLogger(name).info(`${script} is ${size.toFixed(1)} kB gzipped`);
+      }
+    });
+  },
+});
+
+/** The files beside the scripts of the page, and the list of all of them that the service worker keeps. */
+const benchFiles = {
+  apply(compiler) {
+    const { ConcatSource, RawSource } = compiler.webpack.sources;
+    compiler.hooks.thisCompilation.tap("benchFiles", (compilation) => {
+      const stage = webpack.Compilation.PROCESS_ASSETS_STAGE_REPORT;
+      compilation.hooks.processAssets.tapPromise({ name: "benchFiles", stage }, async (assets) => {
+        const [{ benchFiles }, { keptFilesLine }] = await Promise.all(
+          ["benchFiles", "keptFiles"].map((name) => building(name, "bench")),
+        );
+        for (const [name, content] of await benchFiles()) {
+          compilation.emitAsset(name, new RawSource(content), { minimized: true });
+        }
+        const contents = Object.entries(assets).map(([name, source]) => [name, source.buffer()]);
+        const line = keptFilesLine(new Map(contents));
+        compilation.updateAsset("service-worker.js", (script) => new ConcatSource(line, script));
+      });
     });
   },
 };
@@ -89,7 +111,25 @@ const addin = (base) => ({
   },
   output: { path: at("dist/addin"), filename: "[name].js", clean: true },
   infrastructureLogging: { level: "info" },
-  plugins: [addinFiles(base), toldSize],
+  plugins: [addinFiles(base), toldSize("addin", ["functions.js"])],
+});
+
+/** Minimising takes most of a build and spares a page from this machine nothing; `quick` leaves it out. */
+const bench = (quick) => ({
+  ...common,
+  name: "bench",
+  target: ["web", "es2022"],
+  devtool: false,
+  experiments: {},
+  entry: {
+    main: at("src/hosts/bench/page/main.ts"),
+    worker: { import: at("src/hosts/bench/worker/main.ts"), chunkLoading: "import-scripts" },
+    "service-worker": at("src/hosts/bench/offline/serviceWorker.ts"),
+  },
+  output: { path: at("dist/bench"), filename: "[name].js", clean: true },
+  infrastructureLogging: { level: "info" },
+  optimization: { minimize: !quick },
+  plugins: quick ? [benchFiles] : [benchFiles, toldSize("bench", ["main.js", "worker.js"])],
 });
 
 /** The add-in served by this machine, at the first free port; what to do with it is printed. */
@@ -121,5 +161,5 @@ async function served(env) {
 export default async function configurations(env) {
   if (env.WEBPACK_SERVE) return served(env);
   const { baseAddress } = await building("baseAddress");
-  return [cli, library, addin(baseAddress(env.base))];
+  return [cli, library, addin(baseAddress(env.base)), bench(env.quick)];
 }

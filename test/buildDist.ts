@@ -4,7 +4,14 @@ import { fileURLToPath } from "node:url";
 import { promisify } from "node:util";
 
 const root = fileURLToPath(new URL("..", import.meta.url));
-const built = ["dist/cli.js", "dist/index.js", "dist/addin/functions.js", "dist/addin/pane.js"];
+const built = [
+  "dist/cli.js",
+  "dist/index.js",
+  "dist/addin/functions.js",
+  "dist/addin/pane.js",
+  "dist/bench/main.js",
+  "dist/bench/worker.js",
+];
 const settings = ["webpack.config.js", "package.json", "tsconfig.json"];
 
 /** The command is tested as it is shipped: built here, unless it is newer than all it is made of. */

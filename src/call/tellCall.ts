@@ -56,6 +56,14 @@ export function tellCall(definition: Definition, parameters: readonly Argument[]
   };
 }
 
+/** Whether the call has no answer and this is an input that could not be read. */
+export function isUnread({ definition, inputs, result }: CallStory, index: number): boolean {
+  const { takes } = definition.inputs[index]!;
+  const { reading, assumed } = inputs[index]!;
+  const isQuantity = takes === "quantity" || takes === "any quantity";
+  return result instanceof CellError && isQuantity && !reading && assumed === undefined;
+}
+
 function rowOf(parameter: Argument, row: number): Argument {
   if (!parameter || parameter.block.rows === 1) return parameter;
   const columns = parameter.block.columns.map((column) => sliceColumn(column, row, row + 1));

@@ -10,7 +10,11 @@ export interface TableColumn {
 
 /** What was understood of each column of a table, and what to look at. */
 export function checkTable(columns: readonly TableColumn[]): readonly ColumnCheck[] {
-  const checks = columns.map(({ header, unitCell, column }) => checkColumn(header, unitCell, column));
+  return withNeighbours(columns.map(({ header, unitCell, column }) => checkColumn(header, unitCell, column)));
+}
+
+/** Checks of columns side by side, with what only their neighbours show. */
+export function withNeighbours(checks: readonly ColumnCheck[]): readonly ColumnCheck[] {
   return checks.map((check, index) => {
     const before = checks[index - 1]?.recognised;
     const stray =

@@ -9,17 +9,19 @@ export interface HeaderReading {
   readonly problem: UnitProblem | undefined;
 }
 
-const square = /^(.*)\[((?:[^[\]]|\[[^[\]]*\])*)\]([^[\]]*)$/s;
+/** A header with its last square brackets: what is before them, in them and after them. */
+export const squareBrackets = /^(.*)\[((?:[^[\]]|\[[^[\]]*\])*)\]([^[\]]*)$/s;
 // A word, a space and a bracket, `K (m/s)`, is a name with its unit although it could be read as a product.
 const namedBracket = /\s\(/;
-const round = /^(.*)\(((?:[^()]|\([^()]*\))*)\)([^()]*)$/s;
+/** The same of round brackets. */
+export const roundBrackets = /^(.*)\(((?:[^()]|\([^()]*\))*)\)([^()]*)$/s;
 
 /**
  * The unit of a header: its last square brackets, `Period [d]`; else the whole cell where it is a unit itself (a units
  * row); else its last round brackets where they hold a unit.
  */
 export function readHeader(text: string): HeaderReading {
-  const squared = square.exec(text);
+  const squared = squareBrackets.exec(text);
   if (squared && squared[1] !== "") {
     const unit = readUnit(squared[2]!);
     const name = nameAround(squared);
@@ -29,7 +31,7 @@ export function readHeader(text: string): HeaderReading {
   const whole = inside.trim() === "" ? undefined : readUnit(inside);
   const unit = whole && !isProblem(whole) ? whole : undefined;
   if (unit && !namedBracket.test(inside.trim())) return { name: "", unit, problem: undefined };
-  const rounded = round.exec(text);
+  const rounded = roundBrackets.exec(text);
   if (rounded && rounded[1] !== "" && rounded[2]!.trim() !== "") {
     const unit = readUnit(rounded[2]!);
     if (!isProblem(unit)) return { name: nameAround(rounded), unit, problem: undefined };

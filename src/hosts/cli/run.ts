@@ -1,6 +1,7 @@
 import { nearest } from "../../units/nearest.js";
 import type { Command } from "./command.js";
 import { readCommandLine } from "./commandLine.js";
+import { bench } from "./commands/bench.js";
 import { calc } from "./commands/calc.js";
 import { demo } from "./commands/demo.js";
 import { explain } from "./commands/explain.js";
@@ -13,7 +14,7 @@ import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 import { version } from "./version.js";
 
-const commands: readonly Command[] = [calc, fill, functions, explain, units, demo];
+const commands: readonly Command[] = [bench, calc, fill, functions, explain, units, demo];
 
 const help = `barycell: unit-safe functions for radial-velocity target tables
 

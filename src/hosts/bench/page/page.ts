@@ -34,6 +34,9 @@ export interface Page {
   showSheet(sheet: number): void;
   selection(): Selection;
   select(area: Area, active?: Place, options?: SelectOptions): void;
+  /** Rows of the sheet in view that a brush in a plot set apart. */
+  marked(): ReadonlySet<number>;
+  markRows(rows: Iterable<number>): void;
   /** Carries an action out; a refusal is shown. Resolves with whether it was done. */
   act(action: Action): Promise<boolean>;
   /** Says something once, seen and spoken. */
@@ -46,13 +49,15 @@ export interface Page {
   onChange(listener: (change: PageChange) => void): () => void;
 }
 
-export type PageChange = "state" | "sheet" | "selection" | "preferences";
+export type PageChange = "state" | "sheet" | "selection" | "marked" | "preferences";
 
 export interface Preferences {
   readonly theme: "system" | "light" | "dark" | "red";
   /** Cells that changed flash softly; never under reduced motion. */
   readonly flash: boolean;
-  readonly panel: string | undefined;
+  /** The panel beside the grid; empty while none is seen. */
+  readonly panel: string;
+  /** In px. */
   readonly panelWidth: number;
   readonly plots: boolean;
 }

@@ -186,3 +186,36 @@ export interface KeptDraft {
   readonly place: Place;
   readonly text: string;
 }
+
+export interface Summary {
+  /** Cells that hold anything. */
+  readonly filled: number;
+  readonly numbers: number;
+  readonly errors: number;
+  readonly sum: number;
+  readonly mean: number;
+  readonly least: number;
+  readonly most: number;
+  /** The unit of the columns, where they all have the same. */
+  readonly unit: string;
+}
+
+/** What the star of one row does, worked out from the row's own columns. */
+export type CurveAnswer =
+  | {
+      readonly is: "curve";
+      readonly title: string;
+      /** Of K and of the velocities. */
+      readonly unit: string;
+      readonly amplitude: number;
+      /** The orbital phase from the reference time, 0 to 1. */
+      readonly phases: Float64Array;
+      readonly velocities: Float64Array;
+      /** In days; undefined where the period is not in the table. */
+      readonly period: number | undefined;
+      /** The reference time as an instant [d], and its frame, where the table has one. */
+      readonly reference: { readonly day: number; readonly frame: string } | undefined;
+      /** What stood in for columns that the table lacks. */
+      readonly assumed: readonly string[];
+    }
+  | { readonly is: "missing"; readonly message: string };

@@ -4,6 +4,7 @@ import type {
   ColumnReport,
   ComparisonReport,
   CompletedText,
+  CurveAnswer,
   Distribution,
   FormulaCheck,
   FunctionEntry,
@@ -11,6 +12,7 @@ import type {
   MarkState,
   Opened,
   PlotColumn,
+  Summary,
   TableReport,
   WhyCell,
 } from "./answers.js";
@@ -43,6 +45,8 @@ export interface Bench {
   ): { readonly name: string; readonly type: string; readonly bytes: Uint8Array };
 
   windowOf(sheet: number, from: number, to: number, left: number, right: number): ShownWindow;
+  /** The rows of a sheet that its filter lets through, ascending, the header row first; undefined while no filter is on. */
+  visibleRows(sheet: number): Int32Array | undefined;
   /** What a cell holds, as one would type it. */
   entryOf(place: Place): string;
   act(action: Action, label?: string): Outcome;
@@ -51,8 +55,11 @@ export interface Bench {
   goTo(version: number): Outcome;
   cancel(): void;
 
+  /** What the numbers of an area add up to; for the line under the grid. */
+  summarise(area: Area): Summary;
   copy(area: Area): { readonly text: string; readonly html: string; readonly own: string };
-  filter(sheet: number, conditions: readonly FilterCondition[]): Outcome;
+  /** Rows for which every condition holds, and that are among `rows` where these are given. */
+  filter(sheet: number, conditions: readonly FilterCondition[], rows?: Int32Array): Outcome;
   find(options: FindOptions, after: Place, backwards: boolean): Place | undefined;
   /** The edge of the filled cells from a place in a direction: where a jump by keyboard lands. */
   edge(place: Place, toward: "down" | "up" | "left" | "right"): Place;
@@ -79,6 +86,10 @@ export interface Bench {
   writeComparison(mark: string): Outcome;
 
   plotColumn(sheet: number, column: number): PlotColumn;
+  /** Which columns hold these quantities, as far as the headers tell. */
+  columnsOf(sheet: number): Readonly<Record<string, number>>;
+  /** Radial velocity over one orbit of a row's planet. */
+  curve(sheet: number, row: number): CurveAnswer;
 }
 
 export type ExportFormat = "csv" | "tsv" | "ecsv" | "votable" | "xlsx" | "book";

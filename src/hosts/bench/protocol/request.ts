@@ -6,6 +6,8 @@ import type { SortKey } from "../../../sheet/edit/orderRows.js";
 export type Action =
   /** What was typed, row by row: numbers, texts, `=formulas`; an apostrophe in front keeps a text a text. */
   | { readonly do: "type"; readonly place: Place; readonly texts: readonly (readonly string[])[] }
+  /** One text typed over a whole area; a formula is written for `place` and relative in the other cells. */
+  | { readonly do: "type over"; readonly area: Area; readonly place: Place; readonly text: string }
   | { readonly do: "clear"; readonly area: Area }
   /** Repeats the cells of an area beyond one of its sides. */
   | {
@@ -19,7 +21,14 @@ export type Action =
   | { readonly do: "fill over"; readonly area: Area }
   /** Fills an area down to the last row of the table beside it. */
   | { readonly do: "fill to end"; readonly area: Area }
-  | { readonly do: "paste"; readonly place: Place; readonly clipboard: Clipboard; readonly what: "formulas" | "values" }
+  /** `over` is the selection: what was copied is repeated where it fits into it exactly, a single cell fills it. */
+  | {
+      readonly do: "paste";
+      readonly place: Place;
+      readonly clipboard: Clipboard;
+      readonly what: "formulas" | "values";
+      readonly over?: Area;
+    }
   | { readonly do: "move"; readonly area: Area; readonly place: Place }
   | { readonly do: "insert rows"; readonly sheet: number; readonly at: number; readonly count: number }
   | { readonly do: "delete rows"; readonly sheet: number; readonly at: number; readonly count: number }

@@ -1,15 +1,8 @@
 import { html, type TemplateResult } from "lit-html";
 import { type Cell, CellError } from "../../../call/cell.js";
-import { displayMeasured } from "../../../sheet/display/displayMeasured.js";
-import { displayNumber } from "../../../sheet/display/displayNumber.js";
+import { measuredText } from "../../../sheet/display/measuredText.js";
 
-/** A number with as many digits as its uncertainty allows, or six; the unit set apart. */
-export function measuredText(value: number, upper: Cell = null, lower: Cell = null): string {
-  if (typeof upper !== "number" || upper === 0) return displayNumber(value, { kind: "significant", digits: 6 });
-  const below = typeof lower === "number" && lower !== upper ? lower : undefined;
-  return displayMeasured(value, upper, below, { kind: "plus-minus", digits: 2 });
-}
-
+/** A number, its unit set apart. */
 export function withUnit(text: string, unit: string | undefined): TemplateResult {
   const stated = unit === undefined || unit === "1" || unit === "" ? "" : html` <span class="unit">${unit}</span>`;
   return html`<span class="number">${text}</span>${stated}`;

@@ -2,7 +2,7 @@ import { CellError } from "../../../call/cell.js";
 import type { Operand } from "../../values/operand.js";
 import { buildMatrix, isMatrix } from "../../values/operand.js";
 import { elementAt } from "../../values/operateOperands.js";
-import type { WorksheetFunction } from "../worksheetFunction.js";
+import type { ParameterName, WorksheetFunction } from "../worksheetFunction.js";
 import type { Parameter, Read } from "./parameters.js";
 
 type Given = readonly (Operand | undefined)[];
@@ -45,6 +45,7 @@ export function define<A extends readonly unknown[]>(
     name,
     leastArguments,
     mostArguments,
+    parameterNames: list.flatMap(namesOf),
     call(given) {
       if (given.length < leastArguments || given.length > mostArguments) {
         return wrongCount(name, leastArguments, mostArguments, given.length);
@@ -143,4 +144,9 @@ export function notFinite(name: string): CellError {
     `${name}: no finite result`,
     `${name}: the result for these inputs is not a finite number (beyond 1.79E+308 or not defined); other inputs are needed`,
   );
+}
+
+function namesOf({ name, absent, turn, repeatsAtLeast }: Parameter<unknown>): readonly ParameterName[] {
+  if (turn === undefined) return [{ name, optional: absent !== undefined, repeating: false }];
+  return turn.map((each) => ({ name: each.name, optional: repeatsAtLeast === 0, repeating: true }));
 }

@@ -3,10 +3,10 @@ import { afterEach, describe, expect, test } from "vitest";
 import { type Cell, CellError } from "../../../../src/call/cell.js";
 import { cellAt, columnOf } from "../../../../src/call/column.js";
 import { readArea } from "../../../../src/hosts/office/pane/areaText.js";
-import { type Mark, marksText, readMarks } from "../../../../src/hosts/office/pane/compare/mark.js";
 import { cellOfOffice, officeOfCell } from "../../../../src/hosts/office/pane/officeCells.js";
 import { officeWorksheet } from "../../../../src/hosts/office/pane/officeWorksheet.js";
 import { tellCell } from "../../../../src/hosts/office/pane/why/tellCell.js";
+import { type Mark, marksText, readMarks } from "../../../../src/table/mark.js";
 import { standInOffice } from "./standIn/standInOffice.js";
 import { targets } from "./targets.js";
 

@@ -34,7 +34,10 @@ export interface Grid {
   boxOf(place: Place): DOMRect | undefined;
   reveal(place: Place): void;
   focus(): void;
-  /** Moves the selection as a key would: after Enter, Tab, or while a formula picks cells by keyboard. */
+  /**
+   * Goes on from these cells as a key would: after Enter or Tab the selection moves. While a formula picks cells it
+   * stays; the answer is what the key picks.
+   */
   step(from: Area, down: number, right: number, extend: boolean): Area;
 }
 

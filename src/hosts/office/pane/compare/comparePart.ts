@@ -1,13 +1,13 @@
 import { compareTables, type Movement } from "../../../../table/compareTables.js";
+import { comparisonSheet } from "../../../../table/comparisonSheet.js";
+import { columnsText, type Mark, marksText, readMarks } from "../../../../table/mark.js";
 import { recogniseColumn } from "../../../../table/recogniseColumn.js";
 import { latest } from "../latest.js";
 import type { Part, Surroundings } from "../part.js";
 import { dataCell, readSheetTable, type SheetTable } from "../sheetTable.js";
 import type { CompareActions, CompareState } from "./compareState.js";
 import { compareView } from "./compareView.js";
-import { comparisonSheet } from "./comparisonSheet.js";
 import { derivedTable } from "./derivedTable.js";
-import { columnsText, type Mark, marksText, readMarks } from "./mark.js";
 
 const keptName = "barycell.marks";
 

@@ -1,5 +1,5 @@
 import type { Comparison, Movement } from "../../../../table/compareTables.js";
-import type { Mark } from "./mark.js";
+import type { Mark } from "../../../../table/mark.js";
 
 export interface CompareState {
   /** The latest first; undefined until they are read. */

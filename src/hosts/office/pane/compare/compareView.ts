@@ -1,11 +1,11 @@
 import { html, nothing, type TemplateResult } from "lit-html";
-import { CellError } from "../../../../call/cell.js";
 import { displayNumber } from "../../../../sheet/display/displayNumber.js";
 import type { Comparison, Movement } from "../../../../table/compareTables.js";
+import { kindOfChange } from "../../../../table/kindOfChange.js";
+import { columnsText, type Mark } from "../../../../table/mark.js";
 import { readHeader } from "../../../../units/readHeader.js";
 import { cellView } from "../measured.js";
 import type { CompareActions, CompareState } from "./compareState.js";
-import { columnsText, type Mark } from "./mark.js";
 
 /** The pane shows the largest; the sheet holds all. */
 const mostShown = 200;
@@ -77,15 +77,6 @@ function movementView(movement: Movement, actions: CompareActions): TemplateResu
       }</span>
     </button>
   </li>`;
-}
-
-function kindOfChange({ rowBefore, rowAfter, before, after }: Movement): string {
-  if (rowBefore === undefined) return "a new row";
-  if (rowAfter === undefined) return "the row is gone";
-  if (after instanceof CellError) return before instanceof CellError ? "another error" : "became an error";
-  if (before instanceof CellError) return "no longer an error";
-  if (before === null) return "was blank";
-  return after === null ? "became blank" : "another text";
 }
 
 function signed(value: number, digits: number): string {

@@ -1,11 +1,12 @@
 import { html, nothing, type TemplateResult } from "lit-html";
 import { CellError } from "../../../../call/cell.js";
 import type { CellReading } from "../../../../call/readCell.js";
-import type { CallStory, ToldInput } from "../../../../call/tellCall.js";
+import { type CallStory, isUnread, type ToldInput } from "../../../../call/tellCall.js";
 import { resultText } from "../../../../catalog/describeFunction.js";
 import { displayNumber } from "../../../../sheet/display/displayNumber.js";
+import { measuredText } from "../../../../sheet/display/measuredText.js";
 import { general } from "../../../../sheet/display/numberFormat.js";
-import { cellView, errorView, measuredText, withUnit } from "../measured.js";
+import { cellView, errorView, withUnit } from "../measured.js";
 import type { CellStory } from "./tellCell.js";
 
 export function whyView(cell: CellStory, again: () => void): TemplateResult {
@@ -64,14 +65,6 @@ function callView({ formula, story, whole, source }: Extract<CellStory, { is: "c
       ${definition.note ? html`<dt>Note</dt><dd>${definition.note}</dd>` : nothing}
     </dl>
   `;
-}
-
-/** Whether the call has no answer and this is an input that could not be read. */
-function isUnread({ definition, inputs, result }: CallStory, index: number): boolean {
-  const { takes } = definition.inputs[index]!;
-  const { reading, assumed } = inputs[index]!;
-  const isQuantity = takes === "quantity" || takes === "any quantity";
-  return result instanceof CellError && isQuantity && !reading && assumed === undefined;
 }
 
 function inputView({ name, cell, header, assumed, reading, base }: ToldInput, unread: boolean): TemplateResult {

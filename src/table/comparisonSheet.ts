@@ -1,5 +1,5 @@
-import type { Cell } from "../../../../call/cell.js";
-import type { Comparison } from "../../../../table/compareTables.js";
+import type { Cell } from "../call/cell.js";
+import type { Comparison } from "./compareTables.js";
 
 /** A comparison as the cells of a sheet, the numbers in full. */
 export function comparisonSheet({ movements }: Comparison): readonly (readonly Cell[])[] {

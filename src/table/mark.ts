@@ -1,7 +1,7 @@
-import type { Cell } from "../../../../call/cell.js";
-import { CellError, type ErrorCode } from "../../../../call/cell.js";
-import { cellAt, columnOf } from "../../../../call/column.js";
-import type { ComparedTable } from "../../../../table/compareTables.js";
+import type { Cell } from "../call/cell.js";
+import { CellError, type ErrorCode } from "../call/cell.js";
+import { cellAt, columnOf } from "../call/column.js";
+import type { ComparedTable } from "./compareTables.js";
 
 /** The derived values of one sheet as they stood at one moment. */
 export interface Mark {

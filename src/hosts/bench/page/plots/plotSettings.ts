@@ -1,0 +1,51 @@
+export const plotKinds = ["columns", "signal", "phase", "dates"] as const;
+export type PlotKind = (typeof plotKinds)[number];
+
+/** What one plot shows; columns are known by their headers, so that they are found again after they moved. */
+export interface PlotSettings {
+  readonly kind: PlotKind;
+  readonly x: string;
+  readonly y: string;
+  readonly colour: string;
+  readonly xLog: boolean;
+  readonly yLog: boolean;
+  readonly errors: boolean;
+  /** A value of y, as typed; empty for none. */
+  readonly level: string;
+}
+
+export const usualSettings: PlotSettings = {
+  kind: "signal",
+  x: "",
+  y: "",
+  colour: "",
+  xLog: false,
+  yLog: false,
+  errors: true,
+  level: "",
+};
+
+const keptName = "barycell.plot";
+
+export function readSettings(): PlotSettings {
+  try {
+    const kept: unknown = JSON.parse(localStorage.getItem(keptName) ?? "{}");
+    if (typeof kept !== "object" || kept === null) return usualSettings;
+    const known = Object.entries(usualSettings).map(([name, usual]) => {
+      const value = (kept as Record<string, unknown>)[name];
+      return [name, typeof value === typeof usual ? value : usual];
+    });
+    const settings = Object.fromEntries(known) as PlotSettings;
+    return plotKinds.includes(settings.kind) ? settings : { ...settings, kind: usualSettings.kind };
+  } catch {
+    return usualSettings;
+  }
+}
+
+export function keepSettings(settings: PlotSettings): void {
+  try {
+    localStorage.setItem(keptName, JSON.stringify(settings));
+  } catch {
+    // They hold until the page is closed.
+  }
+}

@@ -1,0 +1,90 @@
+import { html, nothing, type TemplateResult } from "lit-html";
+import type { Page } from "../page.js";
+import { headerText } from "./makeFigure.js";
+import type { PlotKind, PlotSettings } from "./plotSettings.js";
+
+const kindWords: Readonly<Record<PlotKind, string>> = {
+  signal: "Signal against period",
+  columns: "Any two columns",
+  phase: "Velocity over the orbit of the selected row",
+  dates: "Velocity over days of the selected row",
+};
+
+export interface PlotActions {
+  set(change: Partial<PlotSettings>): void;
+  save(type: "svg" | "png"): void;
+  showMarked(): void;
+  unmark(): void;
+}
+
+/** What the plot shows, in words that can be changed. */
+export function plotsView(page: Page, settings: PlotSettings, missing: string, actions: PlotActions): TemplateResult {
+  const { kind } = settings;
+  const isColumns = kind === "columns";
+  const hasPoints = isColumns || kind === "signal";
+  const marked = page.marked().size;
+  return html`<div class="plot-controls">
+      ${choice("plot-kind", "Plot", Object.entries(kindWords), kind, (value) => actions.set({ kind: value as PlotKind }))}
+      ${
+        isColumns
+          ? html`${columnChoice(page, "plot-y", "of", settings.y, (y) => actions.set({ y }))}
+            ${columnChoice(page, "plot-x", "against", settings.x, (x) => actions.set({ x }))}
+            ${box("log across", settings.xLog, (xLog) => actions.set({ xLog }))}
+            ${box("log up", settings.yLog, (yLog) => actions.set({ yLog }))}`
+          : nothing
+      }
+      ${
+        hasPoints
+          ? html`${columnChoice(page, "plot-colour", "coloured by", settings.colour, (colour) => actions.set({ colour }), "nothing")}
+            ${box("uncertainties", settings.errors, (errors) => actions.set({ errors }))}
+            <span class="plot-level"><label for="plot-level">${kind === "signal" ? "floor" : "line at"}</label>
+              <input id="plot-level" type="text" inputmode="decimal" .value=${settings.level} @change=${(event: Event) => actions.set({ level: (event.target as HTMLInputElement).value })} /></span>`
+          : nothing
+      }
+      <span class="plot-save">
+        <button type="button" class="quiet" @click=${() => actions.save("svg")}>Save SVG</button>
+        <button type="button" class="quiet" @click=${() => actions.save("png")}>Save PNG</button>
+      </span>
+    </div>
+    ${
+      marked > 0
+        ? html`<p class="plot-marked" role="status">${marked} ${marked === 1 ? "row is" : "rows are"} marked.
+            <button type="button" class="quiet" @click=${actions.showMarked}>Show only these</button>
+            <button type="button" class="quiet" @click=${actions.unmark}>Unmark</button></p>`
+        : nothing
+    }
+    ${missing ? html`<p class="plot-missing">${missing}</p>` : nothing}`;
+}
+
+function columnChoice(
+  page: Page,
+  id: string,
+  label: string,
+  value: string,
+  set: (value: string) => void,
+  none = "choose a column",
+): TemplateResult {
+  const headers = page
+    .sheetState()
+    .columnStates.map(headerText)
+    .filter((header) => header !== "");
+  const entries = headers.map((header): [string, string] => [header, header]);
+  return choice(id, label, [["", none], ...entries], value, set);
+}
+
+function choice(
+  id: string,
+  label: string,
+  entries: readonly (readonly [string, string])[],
+  value: string,
+  set: (value: string) => void,
+): TemplateResult {
+  return html`<span class="plot-choice"><label for=${id}>${label}</label>
+    <select id=${id} @change=${(event: Event) => set((event.target as HTMLSelectElement).value)}>
+      ${entries.map(([key, words]) => html`<option value=${key} ?selected=${key === value}>${words}</option>`)}
+    </select></span>`;
+}
+
+function box(words: string, value: boolean, set: (value: boolean) => void): TemplateResult {
+  return html`<label class="shell-check"><input type="checkbox" .checked=${value} @change=${(event: Event) => set((event.target as HTMLInputElement).checked)} /> ${words}</label>`;
+}

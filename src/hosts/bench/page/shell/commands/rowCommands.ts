@@ -1,0 +1,49 @@
+import type { Command } from "../command.js";
+import { filterDialog } from "../dialogs/filterDialog.js";
+import { sortDialog } from "../dialogs/sortDialog.js";
+import type { Shell } from "../shell.js";
+
+export function rowCommands(shell: Shell): Command[] {
+  const { page } = shell;
+  const menu = "Rows";
+  const about = ["rows"] as const;
+  const area = () => page.selection().area;
+  const count = () => area().bottom - area().top + 1;
+  const isFiltered = () => page.sheetState().filter.length > 0;
+  return [
+    { id: "sort", menu, words: "Sort…", keys: "Alt+S", about: ["rows", "columns"], run: () => sortDialog(shell) },
+    { id: "filter", menu, words: "Filter…", keys: "Alt+F", about: ["rows", "columns"], run: () => filterDialog(shell) },
+    {
+      id: "no-filter",
+      menu,
+      words: "Show all rows",
+      isPossible: isFiltered,
+      run: () => shell.attempt(async () => void page.settle(await page.bench.filter(page.sheet(), []))),
+    },
+    {
+      id: "insert-row-above",
+      menu,
+      words: "Insert above",
+      apart: true,
+      about,
+      isPossible: () => !isFiltered(),
+      run: () => void page.act({ do: "insert rows", sheet: page.sheet(), at: area().top, count: count() }),
+    },
+    {
+      id: "insert-row-below",
+      menu,
+      words: "Insert below",
+      about,
+      isPossible: () => !isFiltered(),
+      run: () => void page.act({ do: "insert rows", sheet: page.sheet(), at: area().bottom + 1, count: count() }),
+    },
+    {
+      id: "delete-rows",
+      menu,
+      words: "Delete",
+      about,
+      isPossible: () => !isFiltered(),
+      run: () => void page.act({ do: "delete rows", sheet: page.sheet(), at: area().top, count: count() }),
+    },
+  ];
+}
