@@ -1,4 +1,5 @@
 import { benchFill } from "./fill.js";
+import { benchPage } from "./page.js";
 import { benchReflex } from "./reflex.js";
 import { benchSheet } from "./sheet.js";
 
@@ -6,8 +7,13 @@ import { benchSheet } from "./sheet.js";
 const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
   fill: benchFill,
-  sheet: () => benchSheet((line) => void process.stdout.write(`${line}\n`)),
+  sheet: () => benchSheet(print),
+  page: () => benchPage(print),
 };
+
+function print(line: string): void {
+  process.stdout.write(`${line}\n`);
+}
 
 const asked = process.argv.slice(2);
 for (const [name, bench] of Object.entries(parts)) {

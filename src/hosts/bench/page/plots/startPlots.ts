@@ -1,6 +1,7 @@
 import { render } from "lit-html";
 import { faultText } from "../createPage.js";
 import type { Page } from "../page.js";
+import { showOnly } from "../shell/showOnly.js";
 import { brush } from "./brush.js";
 import { canvasSurface } from "./draw/canvasSurface.js";
 import { type Chosen, drawFigure, type Frame, frameOf } from "./draw/drawFigure.js";
@@ -106,8 +107,7 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
   }
 
   function showMarked(): void {
-    const rows = Int32Array.from(page.marked()).sort();
-    page.bench.filter(page.sheet(), page.sheetState().filter, rows).then(
+    showOnly(page).then(
       (outcome) => {
         if (outcome.is === "refused") page.trouble(outcome.message);
       },

@@ -26,9 +26,16 @@ export function clipboardOf(page: OwnedPage, files: Files): PageClipboard {
     const { own, text } = await answer;
     last = { own, text, cut };
     from = area;
-    const cells = (area.bottom - area.top + 1) * (area.right - area.left + 1);
+    const cells = countOf(area);
     const what = cells === 1 ? "1 cell" : `${cells.toLocaleString("en")} cells`;
     page.announce(cut ? `${what} cut; paste moves them.` : `${what} copied.`);
+  }
+
+  /** Of the cells in use: whole columns and rows go on beyond them. */
+  function countOf({ top, bottom, left, right }: typeof from): number {
+    const { rows, columns } = page.sheetState();
+    const across = Math.min(right, Math.max(columns - 1, left)) - left + 1;
+    return (Math.min(bottom, Math.max(rows - 1, top)) - top + 1) * across;
   }
 
   async function paste(text: string, html: string, file: File | undefined): Promise<void> {

@@ -11,6 +11,8 @@ export interface Command {
   readonly about?: readonly ("cells" | "rows" | "columns")[];
   readonly isOn?: () => boolean;
   readonly isPossible?: () => boolean;
+  /** What is being typed in a cell goes on; other commands enter it first. */
+  readonly leavesTyping?: true;
   readonly run: () => void;
 }
 

@@ -9,7 +9,12 @@ export interface MenuBar {
 }
 
 /** Menus of words. Arrow keys walk in and between them, a first letter jumps, Escape closes. */
-export function createMenuBar(commands: () => readonly Command[], redraw: () => void, refocus: () => void): MenuBar {
+export function createMenuBar(
+  commands: () => readonly Command[],
+  redraw: () => void,
+  refocus: () => void,
+  start: (command: Command) => void,
+): MenuBar {
   let open: MenuName | undefined;
   let around: { readonly about: "cells" | "rows" | "columns"; readonly x: number; readonly y: number } | undefined;
 
@@ -34,7 +39,7 @@ export function createMenuBar(commands: () => readonly Command[], redraw: () => 
   function run(command: Command): void {
     close();
     refocus();
-    command.run();
+    start(command);
   }
 
   function onKey(event: KeyboardEvent): void {

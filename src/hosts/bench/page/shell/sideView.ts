@@ -36,5 +36,5 @@ export function sideView(page: Page, panels: readonly Panel[], actions: SideActi
       </div>
       <button type="button" class="quiet" aria-label="Close what is beside the table" @click=${actions.hide}>Close</button>
     </div>
-    <section class="shell-panel" id="side-panel" role="tabpanel" aria-labelledby="side-${shown.id}" tabindex="0">${shown.view()}</section>`;
+    <section class="shell-panel" id="side-panel" role="tabpanel" aria-labelledby="side-${shown.id}" tabindex="0"><h2 class="unseen">${shown.title}</h2>${shown.view()}</section>`;
 }

@@ -22,7 +22,8 @@ export function buildSkeleton(root: HTMLElement): Skeleton {
   const head = add(root, "header", "shell-head");
   const trouble = add(root, "div", "shell-trouble");
   trouble.setAttribute("role", "alert");
-  const line = add(root, "div", "shell-line");
+  const line = add(root, "section", "shell-line");
+  line.setAttribute("aria-label", "Formula line");
   const work = add(root, "main", "shell-work");
   const table = add(work, "div", "shell-table");
   const grid = add(table, "div", "shell-grid");

@@ -21,6 +21,7 @@ import { footView, type Progress } from "./footView.js";
 import { headView } from "./headView.js";
 import { keysOf } from "./keysOf.js";
 import { createMenuBar } from "./menuBar.js";
+import { createParts } from "./parts.js";
 import { showPlots } from "./plots.js";
 import type { Shell } from "./shell.js";
 import { sideView } from "./sideView.js";
@@ -69,12 +70,25 @@ export function startShell(
     ...lookCommands(shell, panels),
     ...helpCommands(shell, () => commands),
   ];
+  /** A command is about the book with what was typed last; a text that cannot be entered is to be mended first. */
+  const run = (command: Command) => {
+    if (command.leavesTyping || !editor.editing()) return command.run();
+    attempt(async () => {
+      if (await editor.commit()) command.run();
+    });
+  };
   const menus = createMenuBar(
     () => commands,
     drawHead,
     () => grid.focus(),
+    run,
   );
-  const runById = (id: string) => commands.find((command) => command.id === id)?.run();
+  const byId = (id: string) => commands.find((command) => command.id === id);
+  const runById = (id: string) => {
+    const command = byId(id);
+    if (command) run(command);
+  };
+  const goToPart = createParts(skeleton, () => grid.focus());
   let summary: Summary | undefined;
   let progress: Progress | undefined;
   let summed = 0;
@@ -149,12 +163,16 @@ export function startShell(
   document.addEventListener("keydown", (event) => {
     if (event.defaultPrevented || dialogs.isOpen()) return;
     const keys = keysOf(event);
+    if (keys === "F6" || keys === "Shift+F6") {
+      event.preventDefault();
+      menus.close();
+      return goToPart(event.shiftKey);
+    }
     const command = commands.find((each) => each.keys === keys) ?? (keys === "Ctrl+Y" ? byId("redo") : undefined);
     if (!command || isTyped(event, keys) || command.isPossible?.() === false) return;
     event.preventDefault();
-    command.run();
+    run(command);
   });
-  const byId = (id: string) => commands.find((command) => command.id === id);
   takeDrops(skeleton.root, (file) => attempt(() => files.open(file)));
   dragSide(skeleton.side, page);
   showPlots(skeleton.plots, page, attempt);

@@ -51,7 +51,7 @@ function checkView(page: Page, report: TableReport | undefined): TemplateResult 
   return html`<p role="status">${summaryText(report.columns.length, findings, errors)}</p>
     ${
       errors > 0
-        ? html`<h4>Cells that could not be worked out</h4>
+        ? html`<h3>Cells that could not be worked out</h3>
           <ul class="panel-findings">
             ${report.errors.map(
               ({
@@ -65,7 +65,7 @@ function checkView(page: Page, report: TableReport | undefined): TemplateResult 
           </ul>`
         : nothing
     }
-    <h4>Columns</h4>
+    <h3>Columns</h3>
     <ul class="panel-columns">
       ${report.columns.map((column) => columnView(page, column))}
     </ul>`;

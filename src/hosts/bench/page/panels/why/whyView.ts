@@ -16,7 +16,7 @@ export function whyView(
 ): TemplateResult {
   if (!cell) return html`<p class="soft">Select a cell to see where its value comes from.</p>`;
   return html`<div class="panel-headline">
-      <h3>${cell.address}</h3>
+      <h3 class="panel-address">${cell.address}</h3>
       ${cell.changedBy ? html`<span class="soft">last changed by: ${cell.changedBy}</span>` : nothing}
     </div>
     ${answerView(cell)} ${cell.formula ? html`<p class="code panel-formula">${cell.formula}</p>` : nothing}
@@ -49,11 +49,11 @@ function callView(
   const shared = call.inputs.filter(({ share }) => share !== undefined);
   return html`${call.part ? html`<p class="soft">The call of ${call.name} is a part of this formula; its own result is told here.</p>` : nothing}
     <p>${call.question}</p>
-    <h4>Inputs as they were read</h4>
+    <h3>Inputs as they were read</h3>
     <ul class="panel-inputs">${call.inputs.map((input) => inputView(input, actions))}</ul>
     ${shared.length > 0 ? sharesView(shared) : nothing}
     ${call.canDraw ? distributionPart(cell, distribution, actions) : nothing}
-    <h4>How</h4>
+    <h3>How</h3>
     ${mathView(call.formulaMath, call.formula)}
     <p class="soft">${call.source}</p>
     ${call.note ? html`<p class="soft">${call.note}</p>` : nothing}`;
@@ -73,7 +73,7 @@ function inputView(input: WhyInput, actions: WhyActions): TemplateResult {
 
 function sharesView(shared: readonly WhyInput[]): TemplateResult {
   const sorted = [...shared].sort((a, b) => (b.share as number) - (a.share as number));
-  return html`<h4>Whose uncertainty it is</h4>
+  return html`<h3>Whose uncertainty it is</h3>
     <ul class="panel-shares">
       ${sorted.map(({ name, share }) => {
         const part = share as number;
@@ -91,7 +91,7 @@ function distributionPart(
   distribution: Distribution | "drawing" | undefined,
   actions: WhyActions,
 ): TemplateResult {
-  return html`<h4>Drawn from the uncertainties</h4>
+  return html`<h3>Drawn from the uncertainties</h3>
     ${
       distribution === undefined
         ? html`<p class="soft">10,000 draws of the inputs show where the first order is not enough.</p>
@@ -104,7 +104,7 @@ function distributionPart(
 
 function readsView({ reads }: WhyCell, actions: WhyActions): TemplateResult {
   if (reads.length === 0) return html``;
-  return html`<h4>It reads</h4>
+  return html`<h3>It reads</h3>
     <ul class="panel-inputs">
       ${reads.map(
         ({ address, place, text }) => html`<li>

@@ -31,7 +31,16 @@ export function editCommands(shell: Shell): Command[] {
       keys: "F2",
       apart: true,
       about: ["cells"],
+      leavesTyping: true,
       run: () => shell.editor.beginInCell(undefined),
+    },
+    {
+      id: "edit-in-line",
+      menu,
+      words: "Edit in the line above the table",
+      keys: "Shift+F2",
+      leavesTyping: true,
+      run: () => shell.editor.beginInLine(),
     },
     {
       id: "clear",
@@ -75,6 +84,7 @@ export function editCommands(shell: Shell): Command[] {
       words: "Find and replace",
       keys: "Ctrl+F",
       apart: true,
+      leavesTyping: true,
       run: () => shell.showPanel("find"),
     },
     {

@@ -13,7 +13,7 @@ const themes: readonly { readonly theme: Preferences["theme"]; readonly words: s
 export function lookCommands(shell: Shell, panels: readonly Panel[]): Command[] {
   const { page } = shell;
   const menu = "Look";
-  return [
+  const commands: readonly Command[] = [
     ...panels.map(
       ({ id, title, keys }): Command => ({
         id: `panel-${id}`,
@@ -59,4 +59,5 @@ export function lookCommands(shell: Shell, panels: readonly Panel[]): Command[] 
       run: () => page.prefer({ flash: !page.preferences().flash }),
     },
   ];
+  return commands.map((command) => ({ ...command, leavesTyping: true }));
 }

@@ -2,6 +2,7 @@ import type { Command } from "../command.js";
 import { filterDialog } from "../dialogs/filterDialog.js";
 import { sortDialog } from "../dialogs/sortDialog.js";
 import type { Shell } from "../shell.js";
+import { showOnly } from "../showOnly.js";
 
 export function rowCommands(shell: Shell): Command[] {
   const { page } = shell;
@@ -13,6 +14,13 @@ export function rowCommands(shell: Shell): Command[] {
   return [
     { id: "sort", menu, words: "Sort…", keys: "Alt+S", about: ["rows", "columns"], run: () => sortDialog(shell) },
     { id: "filter", menu, words: "Filter…", keys: "Alt+F", about: ["rows", "columns"], run: () => filterDialog(shell) },
+    {
+      id: "only-these",
+      menu,
+      words: "Show only the marked or selected rows",
+      about,
+      run: () => shell.attempt(async () => void page.settle(await showOnly(page))),
+    },
     {
       id: "no-filter",
       menu,
