@@ -188,7 +188,13 @@ export function wordReader(cells: InputColumns, input: WordInput, size: number):
     for (let row = 0; row < rows && column; row++) readWord(row, cellAt(column, from + row), report);
   };
   const readWord = (row: number, cell: Cell, report: Report) => {
-    const code = cell === null || cell === "" ? 0 : codes.get(String(cell).trim().toLowerCase());
+    const isBlank = cell === null || cell === "";
+    if (isBlank && input.required) {
+      base[row] = Number.NaN;
+      report.value(row, { about: "blank", input: input.name });
+      return;
+    }
+    const code = isBlank ? 0 : codes.get(String(cell).trim().toLowerCase());
     base[row] = code ?? Number.NaN;
     if (cell instanceof CellError) report.value(row, cell);
     else if (code === undefined) {

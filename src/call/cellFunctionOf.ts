@@ -1,4 +1,4 @@
-import { argumentNames, isOptional, takesHeaders, takesResult } from "../functions/argumentNames.js";
+import { argumentNames, isOptional, isRepeating, takesHeaders, takesResult } from "../functions/argumentNames.js";
 import type { Definition, Input } from "../functions/definition.js";
 import type { Unit } from "../units/unit.js";
 import type { CallProblem } from "./callProblem.js";
@@ -10,6 +10,7 @@ import { evaluateConversion, evaluateLookup, evaluateText } from "./evaluateEach
 import { evaluateNumber } from "./evaluateNumber.js";
 import { headerCells } from "./headerCells.js";
 import { type CallInputs, callInputs, type GivenCells } from "./inputColumns.js";
+import { mayStateUnits, orderedCall } from "./repeatedCall.js";
 import { askedUnit, knownUnit, resultUnit } from "./resultUnit.js";
 
 /** All our functions stand in this namespace. */
@@ -17,10 +18,48 @@ export const namespace = "BARY";
 
 /** The one door from cells to a definition and back, for every host. */
 export function cellFunctionOf(definition: Definition): CellFunction {
+  const inputs: readonly Input[] = definition.inputs;
+  const fixed = fixedCalls(definition);
+  const name = `${namespace}.${definition.name}`;
+  const common = {
+    name,
+    argumentNames: argumentNames(definition),
+    leastArguments: inputs.filter((input) => !isOptional(input)).length,
+  };
+  if (!isRepeating(inputs.at(-1))) return { ...common, ...fixed };
+
+  /** A call of some inputs is one of a function that has as many. */
+  function ordered<Parameter extends Argument | RowArgument>(parameters: readonly Parameter[]) {
+    const call = orderedCall(definition, parameters);
+    return { parameters: call.parameters, calls: fixedCalls(call.definition) };
+  }
+
+  function once(parameters: readonly Argument[]): Block {
+    const { calls, parameters: given } = ordered(parameters);
+    return calls.once(given);
+  }
+
+  function eachRow(rows: number, parameters: readonly RowArgument[]): Block {
+    if (parameters.some((parameter) => "perRow" in parameter && mayStateUnits(parameter.perRow))) {
+      return rowByRow(definition, once, rows, parameters);
+    }
+    const { calls, parameters: given } = ordered(parameters);
+    return calls.eachRow(rows, given);
+  }
+
+  function unitOf(parameters: readonly Argument[]): string | undefined {
+    const { calls, parameters: given } = ordered(parameters);
+    return calls.unitOf(given);
+  }
+
+  return { ...common, mostArguments: Number.POSITIVE_INFINITY, once, eachRow, unitOf };
+}
+
+/** The calls of a definition whose every argument has its place. */
+function fixedCalls(definition: Definition) {
   const inputs = definition.inputs.length;
   const extra = takesHeaders(definition) ? 1 : 0;
   const most = inputs + extra + (takesResult(definition) ? 1 : 0);
-  const least = (definition.inputs as readonly Input[]).filter((input) => !isOptional(input)).length;
 
   function once(parameters: readonly Argument[]): Block {
     const given = parameters.slice(0, inputs).map(givenCells);
@@ -33,7 +72,7 @@ export function cellFunctionOf(definition: Definition): CellFunction {
     const oneRowEach = parameters
       .slice(0, inputs)
       .every((parameter) => !("fixed" in parameter) || (parameter.fixed?.block.rows ?? 1) === 1);
-    if (!fixedTail || !oneRowEach) return rowByRow(rows, parameters);
+    if (!fixedTail || !oneRowEach) return rowByRow(definition, once, rows, parameters);
     const given = parameters
       .slice(0, inputs)
       .map((parameter): GivenCells | undefined =>
@@ -63,38 +102,12 @@ export function cellFunctionOf(definition: Definition): CellFunction {
     return "about" in evaluated ? single(cellProblem(definition, evaluated)) : evaluated;
   }
 
-  function rowByRow(rows: number, parameters: readonly RowArgument[]): Block {
-    const blocks = Array.from({ length: rows }, (_, row) =>
-      once(
-        parameters.map(
-          (parameter): Argument => ("fixed" in parameter ? parameter.fixed : { block: rowOf(parameter.perRow, row) }),
-        ),
-      ),
-    ).map((block) =>
-      block.rows === 1 ? block : single(cellProblem(definition, { about: "several rows", rows: block.rows })),
-    );
-    const width = Math.max(1, ...blocks.map((block) => block.columns.length));
-    const columns = Array.from({ length: width }, (_, index) =>
-      columnOf(blocks.map((block) => (block.columns[index] ? cellAt(block.columns[index], 0) : null))),
-    );
-    return { rows, columns };
-  }
-
   function unitOf(parameters: readonly Argument[]): string | undefined {
     const unit = numberUnit(definition, parameters, inputs + extra);
     return unit && !("about" in unit) ? unit.text : undefined;
   }
 
-  const name = `${namespace}.${definition.name}`;
-  return {
-    name,
-    argumentNames: argumentNames(definition),
-    leastArguments: least,
-    mostArguments: most,
-    once,
-    eachRow,
-    unitOf,
-  };
+  return { mostArguments: most, once, eachRow, unitOf };
 }
 
 function givenCells(argument: Argument): GivenCells | undefined {
@@ -154,4 +167,27 @@ function repeated(column: Column, rows: number): Column {
 
 function rowOf(columns: readonly Column[], row: number): Block {
   return { rows: 1, columns: columns.map((column) => sliceColumn(column, row, row + 1)) };
+}
+
+/** Call by call, for what may differ from row to row. */
+function rowByRow(
+  definition: Definition,
+  once: CellFunction["once"],
+  rows: number,
+  parameters: readonly RowArgument[],
+): Block {
+  const blocks = Array.from({ length: rows }, (_, row) =>
+    once(
+      parameters.map(
+        (parameter): Argument => ("fixed" in parameter ? parameter.fixed : { block: rowOf(parameter.perRow, row) }),
+      ),
+    ),
+  ).map((block) =>
+    block.rows === 1 ? block : single(cellProblem(definition, { about: "several rows", rows: block.rows })),
+  );
+  const width = Math.max(1, ...blocks.map((block) => block.columns.length));
+  const columns = Array.from({ length: width }, (_, index) =>
+    columnOf(blocks.map((block) => (block.columns[index] ? cellAt(block.columns[index], 0) : null))),
+  );
+  return { rows, columns };
 }

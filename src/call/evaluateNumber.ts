@@ -96,6 +96,7 @@ function noResult(definition: NumberDefinition, call: CallInputs, row: number): 
 class BlockUncertainty {
   private readonly scratch;
   private readonly slope: Float64Array;
+  private readonly exact: Float64Array;
   private readonly above: Float64Array;
   private readonly below: Float64Array;
   private readonly sides: Uint8Array;
@@ -108,6 +109,7 @@ class BlockUncertainty {
   ) {
     this.scratch = slopeScratch(size);
     this.slope = new Float64Array(size);
+    this.exact = new Float64Array(definition.beforeRounding ? size : 0);
     this.above = new Float64Array(size);
     this.below = new Float64Array(size);
     this.sides = new Uint8Array(size);
@@ -115,13 +117,17 @@ class BlockUncertainty {
 
   propagate(values: Float64Array, rows: number, unit: Unit, results: ResultColumns, from: number): void {
     const { above, below, sides, slope } = this;
+    const { beforeRounding, compute } = this.definition;
+    const law = beforeRounding ?? compute;
+    if (beforeRounding) beforeRounding(rows, this.exact, ...this.bases);
+    const exact = beforeRounding ? this.exact : values;
     above.fill(0);
     below.fill(0);
     sides.fill(0);
     this.definition.inputs.forEach((input, index) => {
       const reader = this.readers[index]!;
       if (!reader.uncertain || input.takes !== "quantity") return;
-      slopes(this.definition.compute, input.quantity, index, this.bases, values, rows, this.scratch, slope);
+      slopes(law, input.quantity, index, this.bases, exact, rows, this.scratch, slope);
       for (let row = 0; row < rows; row++) {
         if (reader.sides[row] === 0) continue;
         const up = slope[row]! * reader.upper[row]!;

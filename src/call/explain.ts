@@ -52,7 +52,7 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
     case "lengths":
       return `${problem.input} has ${rowCount(problem.rows)} and ${problem.other} has ${problem.otherRows}; columns of one call need the same number of rows, or one row each.`;
     case "shape":
-      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${mayHaveUncertainty(definition, problem.input) ? ", two with its uncertainty, or three with upper and lower uncertainty" : ""}.`;
+      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${columnsRemedy(definition, problem.input)}.`;
     case "header of another column":
       return `${problem.input} was given the header ${headerText(problem.header)}, but its own column is headed ${headerText(problem.own)}; give inputs and headers in the same order.`;
     case "header count":
@@ -183,6 +183,8 @@ function boundPhrase(problem: Extract<CallProblem, { about: "bound" }>): string 
 }
 
 function remedy(definition: Definition, input: string): string {
+  const found = inputNamed(definition, input);
+  if (found?.takes === "word") return `write ${anyOf(found.words.map(({ word }) => `"${word}"`))}`;
   return input.startsWith("uncertainty")
     ? "type 0 if it is exact"
     : `${kindOfInput(definition, input)} is needed, for example ${exampleOf(definition, input)}`;
@@ -199,9 +201,13 @@ function exampleOf(definition: Definition, input: string): string {
   return quantity.unit === "1" ? `${quantity.example}` : `${quantity.example} ${quantity.unit}`;
 }
 
-function quantityOf(definition: Definition, input: string): Quantity | undefined {
+function inputNamed(definition: Definition, input: string): Input | undefined {
   const name = input.replace(/^uncertainty of /, "");
-  const found = (definition.inputs as readonly Input[]).find((candidate) => candidate.name === name);
+  return (definition.inputs as readonly Input[]).find((candidate) => candidate.name === name);
+}
+
+function quantityOf(definition: Definition, input: string): Quantity | undefined {
+  const found = inputNamed(definition, input);
   return found?.takes === "quantity" ? found.quantity : undefined;
 }
 
@@ -213,8 +219,11 @@ function argumentList(definition: Definition): string {
   return argumentNames(definition).join(", ");
 }
 
-function mayHaveUncertainty(definition: Definition, input: string): boolean {
-  return quantityOf(definition, input) !== undefined || takesQuantity(definition);
+function columnsRemedy(definition: Definition, input: string): string {
+  const found = inputNamed(definition, input);
+  if (found?.takes === "quantity" && found.alone) return "; give each as an argument of its own: B2, C2, D2";
+  const mayHaveUncertainty = found?.takes === "quantity" || takesQuantity(definition);
+  return mayHaveUncertainty ? ", two with its uncertainty, or three with upper and lower uncertainty" : "";
 }
 
 /** Whether its one input is a quantity of any kind, not a text. */

@@ -45,7 +45,7 @@ export function callInputs(
     const cells = given[index];
     if (!cells) {
       if (!isOptional(input)) return { about: "missing", input: input.name };
-    } else if (cells.columns.length > (takesHeader(input) ? 3 : 1) || cells.columns.length === 0) {
+    } else if (cells.columns.length > mostColumns(input) || cells.columns.length === 0) {
       return { about: "shape", input: input.name, rows: cells.rows, columns: cells.columns.length };
     }
   }
@@ -115,6 +115,10 @@ function agrees(way: HeaderAssignment, inputs: readonly Input[], widths: readonl
       return !unit || fits(unit, input.takes === "quantity" ? input.quantity.kind : undefined);
     }),
   );
+}
+
+function mostColumns(input: Input): number {
+  return takesHeader(input) && !(input.takes === "quantity" && input.alone) ? 3 : 1;
 }
 
 function takesHeader(input: Input): boolean {

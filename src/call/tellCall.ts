@@ -9,6 +9,7 @@ import { headerCells } from "./headerCells.js";
 import { noHeader } from "./headerUnit.js";
 import { callInputs, type InputColumns } from "./inputColumns.js";
 import { type CellReading, readCell } from "./readCell.js";
+import { orderedCall } from "./repeatedCall.js";
 
 /** One call of one row told in full: what went in, by which formula, what came out, and whose doubt it carries. */
 export interface CallStory {
@@ -38,11 +39,12 @@ export interface ToldInput {
 }
 
 /** `row` counts within the call where its inputs are columns. */
-export function tellCall(definition: Definition, parameters: readonly Argument[], row = 0): CallStory {
+export function tellCall(called: Definition, given: readonly Argument[], row = 0): CallStory {
+  const { definition, parameters } = orderedCall(called, given);
   const count = definition.inputs.length;
   const ofRow = parameters.map((parameter, index) => (index < count ? rowOf(parameter, row) : parameter));
-  const called = cellFunctionOf(definition);
-  const [value, upper, lower] = called.once(ofRow).columns;
+  const cellFunction = cellFunctionOf(definition);
+  const [value, upper, lower] = cellFunction.once(ofRow).columns;
   const result = cellAt(value!, 0);
   const told = inputsOf(definition, ofRow);
   const shares = result instanceof CellError ? [] : sharesOf(definition, told, ofRow);
@@ -52,7 +54,7 @@ export function tellCall(definition: Definition, parameters: readonly Argument[]
     result,
     upper: upper ? cellAt(upper, 0) : null,
     lower: lower ? cellAt(lower, 0) : upper ? cellAt(upper, 0) : null,
-    unit: typeof result === "number" ? called.unitOf?.(ofRow) : undefined,
+    unit: typeof result === "number" ? cellFunction.unitOf?.(ofRow) : undefined,
   };
 }
 

@@ -1,3 +1,4 @@
+import { isRepeating } from "../functions/argumentNames.js";
 import type { Input } from "../functions/definition.js";
 import type { Bound, Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
@@ -8,12 +9,13 @@ export function describeInput(input: Input): string {
     case "quantity": {
       const { quantity, fallbackText } = input;
       const leftOut = fallbackText === undefined ? "" : `; left out: ${fallbackText}`;
-      return `${quantity.meaning}; ${kindPhrase(quantity.kind)}${rangeText(quantity)}${leftOut}`;
+      const more = isRepeating(input) ? "; as many as there are" : "";
+      return `${quantity.meaning}; ${kindPhrase(quantity.kind)}${rangeText(quantity)}${leftOut}${more}`;
     }
     case "any quantity":
       return "a number with a unit of any kind";
     case "word":
-      return `${input.words.map(({ word, meaning }) => `${word} (${meaning})`).join(", ")}; left out: ${input.words[0]!.word}`;
+      return `${input.words.map(({ word, meaning }) => `${word} (${meaning})`).join(", ")}${input.required ? "" : `; left out: ${input.words[0]!.word}`}`;
     case "text":
       return input.meaning;
   }

@@ -1,4 +1,4 @@
-import { argumentNames } from "../functions/argumentNames.js";
+import { argumentNames, isRepeating } from "../functions/argumentNames.js";
 import type { Definition, Input } from "../functions/definition.js";
 import { definitions } from "../functions/definitions.js";
 import type { Kind } from "../units/kind.js";
@@ -30,6 +30,7 @@ export interface HostParameter {
   readonly type: "any";
   readonly dimensionality: "matrix";
   readonly optional?: true;
+  readonly repeating?: true;
   readonly customEnumId?: string;
 }
 
@@ -61,8 +62,21 @@ function hostFunction(definition: Definition, helpAddress: string): HostFunction
   };
 }
 
-/** A host wants every argument after one that may be left out to be so too; the call says what it misses. */
+/**
+ * A host wants every argument after one that may be left out to be so too; the call says what it misses. Where an input
+ * repeats, nothing can follow it: headers and result header are more of the same argument to the host.
+ */
 function parameters(definition: Definition): HostParameter[] {
+  const inputs: readonly Input[] = definition.inputs;
+  if (isRepeating(inputs.at(-1))) {
+    return inputs.map((input) => ({
+      name: input.name.replaceAll(" ", "_"),
+      description: `${capital(describeInput(input))}. Then the header cells, then the header cell of the result, where they are given.`,
+      type: "any",
+      dimensionality: "matrix",
+      ...(isRepeating(input) ? { repeating: true } : {}),
+    }));
+  }
   const names = argumentNames(definition);
   const required = names.findIndex((name) => name.startsWith("["));
   return names.map((written, index): HostParameter => {

@@ -14,6 +14,10 @@ export interface QuantityInput {
   readonly fallback: number | undefined;
   /** What the fallback means, for the help: "90 deg". */
   readonly fallbackText: string | undefined;
+  /** The last input of its function, given once or more; the computation receives a column for each. */
+  readonly repeats?: true;
+  /** It has no uncertainty in the cells beside it, which could be taken for more of its kind; a text may state one. */
+  readonly alone?: true;
 }
 
 /** A number in any unit of any kind. */
@@ -22,10 +26,14 @@ export interface AnyQuantityInput {
   readonly name: string;
 }
 
-/** One of a few words; the computation receives the word's place in the list. The first is the fallback. */
+/**
+ * One of a few words; the computation receives the word's place in the list. The first is the fallback where the word is
+ * not required.
+ */
 export interface WordInput {
   readonly takes: "word";
   readonly name: string;
+  readonly required?: true;
   readonly words: readonly { readonly word: string; readonly meaning: string }[];
 }
 
@@ -65,6 +73,8 @@ export interface NumberDefinition extends Common {
   readonly inputs: readonly (QuantityInput | WordInput)[];
   readonly result: { readonly quantity: Quantity; readonly unit: string };
   readonly compute: Compute;
+  /** The same before the result is made whole: what uncertainties follow, since steps have no slope. */
+  readonly beforeRounding?: Compute;
   /** Why values inside their ranges may have no result together, and what to do: ends a sentence. */
   readonly unanswered?: string;
 }
@@ -106,4 +116,8 @@ export function required(quantity: Quantity, name: string = quantity.name): Quan
 
 export function optional(quantity: Quantity, fallback: number, fallbackText: string): QuantityInput {
   return { takes: "quantity", name: quantity.name, quantity, fallback, fallbackText };
+}
+
+export function repeating(quantity: Quantity): QuantityInput {
+  return { ...required(quantity), repeats: true, alone: true };
 }

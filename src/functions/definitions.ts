@@ -5,6 +5,15 @@ import { planetSpeed } from "./orbit/planetSpeed.js";
 import { starAxis } from "./orbit/starAxis.js";
 import { starSpeed } from "./orbit/starSpeed.js";
 import { totalMass } from "./orbit/totalMass.js";
+import { electrons } from "./plan/electrons.js";
+import { exposure } from "./plan/exposure.js";
+import { hours } from "./plan/hours.js";
+import { massVisits } from "./plan/massVisits.js";
+import { noiseSum } from "./plan/noiseSum.js";
+import { qNoise } from "./plan/qNoise.js";
+import { rvNoise } from "./plan/rvNoise.js";
+import { significance } from "./plan/significance.js";
+import { visits } from "./plan/visits.js";
 import { massFunction } from "./reflex/massFunction.js";
 import { minMass } from "./reflex/minMass.js";
 import { planetMass } from "./reflex/planetMass.js";
@@ -48,4 +57,13 @@ export const definitions: readonly Definition[] = [
   pixelSpeed,
   vacuum,
   air,
+  rvNoise,
+  exposure,
+  qNoise,
+  electrons,
+  noiseSum,
+  visits,
+  massVisits,
+  significance,
+  hours,
 ];

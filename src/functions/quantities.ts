@@ -1,3 +1,5 @@
+export * from "./planQuantities.js";
+
 import {
   astronomicalUnit,
   day,
