@@ -11,6 +11,9 @@ import {
 } from "../kernel/constants.js";
 import { above, atLeast, atMost, below, type Quantity } from "./quantity.js";
 
+export * from "./skyQuantities.js";
+export * from "./timeQuantities.js";
+
 const positive = (reason: string) => above(0, "0", reason);
 const hasMass = positive("a body has mass");
 const slowerThanLight = "nothing moves as fast as light";

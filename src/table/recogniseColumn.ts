@@ -54,13 +54,18 @@ function quantityNamed(name: string, unit: Unit | undefined): Quantity | undefin
   const within = aboutAnother.test(name)
     ? []
     : named
-        .filter((candidate) => !isSymbol(candidate.words) && ` ${words} `.includes(` ${candidate.words} `))
+        .filter((candidate) => !isVague(candidate.words) && ` ${words} `.includes(` ${candidate.words} `))
         .sort((a, b) => b.words.length - a.words.length);
   const candidates = [...whole, ...within];
   const fitting = candidates.find(fits);
   if (fitting) return fitting.quantity;
   // One letter means many things: "K [mag]" is a brightness and no semi-amplitude with a slip in its unit.
-  return candidates.find((candidate) => !isSymbol(candidate.words))?.quantity;
+  return candidates.find((candidate) => !isVague(candidate.words))?.quantity;
+}
+
+/** A name that heads a column only where it stands alone: an exposure time is no instant. */
+function isVague(name: string): boolean {
+  return isSymbol(name) || name === "time";
 }
 
 export function isSymbol(name: string): boolean {
