@@ -1,4 +1,9 @@
 import type { Definition } from "./definition.js";
+import { airmass } from "./night/airmass.js";
+import { altitude } from "./night/altitude.js";
+import { hoursUp } from "./night/hoursUp.js";
+import { moonLit } from "./night/moonLit.js";
+import { moonSep } from "./night/moonSep.js";
 import { axis } from "./orbit/axis.js";
 import { period } from "./orbit/period.js";
 import { planetSpeed } from "./orbit/planetSpeed.js";
@@ -57,6 +62,11 @@ export const definitions: readonly Definition[] = [
   pixelSpeed,
   vacuum,
   air,
+  altitude,
+  airmass,
+  hoursUp,
+  moonSep,
+  moonLit,
   rvNoise,
   exposure,
   qNoise,

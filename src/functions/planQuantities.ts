@@ -295,16 +295,3 @@ export const telescopeTime: Quantity = {
   plausible: undefined,
   headers: ["hours", "cost", "time needed", "total time"],
 };
-
-export const omega: Quantity = {
-  name: "omega",
-  meaning: "argument of periastron of the star's own orbit; the planet's differs by 180 deg",
-  kind: "angle",
-  lower: atLeast(-2 * Math.PI, "-360 deg", "a turn is 360 deg"),
-  upper: atMost(2 * Math.PI, "360 deg", "a turn is 360 deg"),
-  unit: "deg",
-  example: 58,
-  step: 0.1,
-  plausible: undefined,
-  headers: ["w", "argument of periastron", "omega_star", "arg_periastron"],
-};

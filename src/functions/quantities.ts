@@ -1,3 +1,4 @@
+export * from "./nightQuantities.js";
 export * from "./planQuantities.js";
 
 import {

@@ -25,11 +25,16 @@ for (const text of [...symbols, ...compounds, "10**27kg", "2.5d", "10**-3"]) {
 }
 
 const numeric = definitions.filter((definition): definition is NumberDefinition => definition.form === "number");
-const inputs = numeric.flatMap((definition) =>
-  definition.inputs.flatMap((input, index) =>
-    input.takes === "quantity" ? [{ name: definition.name, definition, input, index, label: input.name }] : [],
-  ),
-);
+// An instant has a zero of its own, and what the sky shows at one changes by no power law: test/kernel/night.test.ts.
+const takesInstant = ({ inputs }: NumberDefinition) =>
+  inputs.some((input) => input.takes === "quantity" && input.quantity.kind === "instant");
+const inputs = numeric
+  .filter((definition) => !takesInstant(definition))
+  .flatMap((definition) =>
+    definition.inputs.flatMap((input, index) =>
+      input.takes === "quantity" ? [{ name: definition.name, definition, input, index, label: input.name }] : [],
+    ),
+  );
 
 /** The same amount in another unit, exact but for one rounding to the nearest double. */
 function converted(value: number, from: Unit, to: Unit): number {

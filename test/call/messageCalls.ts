@@ -133,6 +133,9 @@ export const messageCalls: readonly MessageCall[] = [
     ["MINMASS", "300000 km/s", "4.23 d", "1.1 solMass"],
     ["REFLEX", -4.23, 1.1, 0.47, undefined, undefined, threeHeaders],
     ["QNOISE", 1e4, -5],
+    ["HOURSUP", "2027-06-21", "0 deg", "60 deg", "18.5 deg", "69.6 deg", "95 deg"],
+    ["HOURSUP", "2027-06-21", "0 deg", "60 deg", "18.5 deg", "69.6 deg", "30 deg", "18 deg"],
+    ["MOONLIT", "1950-01-01"],
     ["HOURS", 24, "900 s", "-300 s"],
     ["HOURS", 24, "900 s", "300 s", "120 %"],
     ["HOURS", 0.5, "900 s", "300 s"],
@@ -218,6 +221,8 @@ export const messageCalls: readonly MessageCall[] = [
     ["ELECTRONS", "9 mag", "V", "3.6 m", 0.05, "900 s", "90 nm", undefined, "0.1 mag"],
     ["VISITS", "2.5 m/s", "3 m/s", 5, undefined, 0.3],
     ["MASSVISITS", "2.5 m/s", "3 m/s", "1 solMass", "0.05 solMass", 40],
+    ["AIRMASS", "2027-02-01T04:00:00", "0 deg", "-90 deg", "0 deg", "45 deg"],
+    ["HOURSUP", "2027-06-21", "0 deg", "60 deg", "18.5 deg", "69.6 deg"],
   ),
   ...about(
     "result unit missing",

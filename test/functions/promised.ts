@@ -23,6 +23,11 @@ export const promised: Readonly<Record<string, readonly string[]>> = {
   PIXELSPEED: ["pixel shift", "resolving power", "pixels per resolution element"],
   VACUUM: ["wavelength in air", "formula?"],
   AIR: ["wavelength in vacuum", "formula?"],
+  ALTITUDE: ["time", "RA", "dec", "longitude", "latitude"],
+  AIRMASS: ["time", "RA", "dec", "longitude", "latitude"],
+  HOURSUP: ["night", "RA", "dec", "longitude", "latitude", "lowest altitude?", "Sun below?"],
+  MOONSEP: ["time", "RA", "dec", "longitude", "latitude"],
+  MOONLIT: ["time"],
   RVNOISE: [
     "magnitude",
     "exposure",

@@ -1,5 +1,5 @@
-import { astronomicalUnit } from "../constants.js";
 import { cos } from "../angle.js";
+import { astronomicalUnit } from "../constants.js";
 import { isNight } from "./altitude.js";
 import { earthRadius, moonPosition } from "./moon.js";
 import { angleBetween } from "./moonDistance.js";
