@@ -113,7 +113,7 @@ describe("darkness", () => {
 
   test("does not come in a white night, nor end in the polar night", () => {
     // 2027-06-21 and 2027-12-21, far north.
-    const [june, december] = [10033.5, 10216.5];
+    const [june, december] = [10032.5, 10215.5];
     expect(darkness(noonBefore(june, 0), 0, 69 * deg, astronomical)).toEqual([]);
     const noon = noonBefore(december, 0);
     expect(darkness(noon, 0, 88 * deg, astronomical)).toEqual([{ from: noon, to: noon + 1 }]);
@@ -155,7 +155,7 @@ describe("hours up", () => {
     const orientation = newOrientation();
     fc.assert(
       fc.property(
-        fc.integer({ min: 9862, max: 10227 }),
+        fc.integer({ min: 9862, max: 10226 }),
         fc.double({ min: 0, max: 360, noNaN: true }),
         fc.double({ min: -90, max: 90, noNaN: true }),
         fc.double({ min: -60, max: 60, noNaN: true }),
@@ -182,8 +182,8 @@ describe("hours up", () => {
   });
 
   test("of a night that is never dark are none that could be told", () => {
-    expect(hoursUp(10033.5, 0, 0, 0, 69 * deg, 30 * deg, astronomical)).toBeNaN();
-    expect(hoursUp(10216.5, 0, 80 * deg, 0, 88 * deg, 30 * deg, astronomical)).toBeCloseTo(86400, 6);
-    expect(hoursUp(10216.5, 0, -80 * deg, 0, 88 * deg, 30 * deg, astronomical)).toBe(0);
+    expect(hoursUp(10032.5, 0, 0, 0, 69 * deg, 30 * deg, astronomical)).toBeNaN();
+    expect(hoursUp(10215.5, 0, 80 * deg, 0, 88 * deg, 30 * deg, astronomical)).toBeCloseTo(86400, 6);
+    expect(hoursUp(10215.5, 0, -80 * deg, 0, 88 * deg, 30 * deg, astronomical)).toBe(0);
   });
 });

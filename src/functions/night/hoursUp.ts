@@ -17,7 +17,8 @@ export const hoursUp: NumberDefinition = {
   ],
   result: { quantity: quantity.hoursUp, unit: "h" },
   compute: hoursUps,
-  unanswered: "the Sun does not sink that deep in this night; ask for another date, or for less with Sun below, for example -12 deg",
+  unanswered:
+    "the Sun does not sink that deep in this night; ask for another date, or for less with Sun below, for example -12 deg",
   formula:
     "the time for which cos H < (sin h - sin phi sin delta) / (cos phi cos delta) is false while the Sun is below its limit, noon to noon",
   source: "spherical trigonometry; The Astronomical Almanac's low-precision Sun (from memory)",
