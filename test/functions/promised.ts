@@ -23,4 +23,10 @@ export const promised: Readonly<Record<string, readonly string[]>> = {
   PIXELSPEED: ["pixel shift", "resolving power", "pixels per resolution element"],
   VACUUM: ["wavelength in air", "formula?"],
   AIR: ["wavelength in vacuum", "formula?"],
+  ANOMALY: ["time", "period", "periastron time", "eccentricity", "which?"],
+  RVAT: ["time", "period", "K", "reference time", "eccentricity?", "omega?", "systemic velocity?", "reference?"],
+  PHASE: ["time", "period", "reference time"],
+  EVENT: ["which", "after", "period", "reference time", "eccentricity?", "omega?", "count?"],
+  BARYSPEED: ["time", "RA", "dec", "longitude", "latitude", "height", "pm RA?", "pm dec?", "parallax?", "epoch?"],
+  BARYTIME: ["time", "RA", "dec", "longitude", "latitude", "height"],
 };
