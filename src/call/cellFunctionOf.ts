@@ -1,8 +1,8 @@
 import { argumentNames, isOptional, isRepeating, takesHeaders, takesResult } from "../functions/argumentNames.js";
-import type { Definition, Input } from "../functions/definition.js";
+import type { Definition, Input, NumberDefinition } from "../functions/definition.js";
 import type { Unit } from "../units/unit.js";
 import type { CallProblem } from "./callProblem.js";
-import type { CellError } from "./cell.js";
+import { CellError } from "./cell.js";
 import type { Argument, CellFunction, RowArgument } from "./cellFunction.js";
 import { cellProblem } from "./cellProblem.js";
 import { type Block, type Column, cellAt, columnOf, sliceColumn } from "./column.js";
@@ -10,6 +10,7 @@ import { evaluateConversion, evaluateLookup, evaluateText } from "./evaluateEach
 import { evaluateNumber } from "./evaluateNumber.js";
 import { headerCells } from "./headerCells.js";
 import { type CallInputs, callInputs, type GivenCells } from "./inputColumns.js";
+import { ownUnit } from "./ownUnit.js";
 import { mayStateUnits, orderedCall } from "./repeatedCall.js";
 import { askedUnit, knownUnit, resultUnit } from "./resultUnit.js";
 
@@ -71,7 +72,11 @@ function fixedCalls(definition: Definition) {
     const fixedTail = tail.every((parameter) => "fixed" in parameter);
     const oneRowEach = parameters
       .slice(0, inputs)
-      .every((parameter) => !("fixed" in parameter) || (parameter.fixed?.block.rows ?? 1) === 1);
+      .every((parameter, index) =>
+        "fixed" in parameter
+          ? (parameter.fixed?.block.rows ?? 1) === 1
+          : (definition.inputs[index] as Input).takes !== "count",
+      );
     if (!fixedTail || !oneRowEach) return rowByRow(definition, once, rows, parameters);
     const given = parameters
       .slice(0, inputs)
@@ -97,13 +102,17 @@ function fixedCalls(definition: Definition) {
     if (problem) return single(cellProblem(definition, problem));
     const headers = definition.form === "lookup" ? [] : headerCells(parameters[inputs]);
     const call = callInputs(definition, given, headers, filledDown);
+    if (call instanceof CellError) return single(call);
     if ("about" in call) return single(cellProblem(definition, call));
     const evaluated = evaluate(definition, call, parameters[inputs + extra]);
     return "about" in evaluated ? single(cellProblem(definition, evaluated)) : evaluated;
   }
 
   function unitOf(parameters: readonly Argument[]): string | undefined {
-    const unit = numberUnit(definition, parameters, inputs + extra);
+    const unit =
+      definition.form === "number"
+        ? unitOfNumbers(definition, parameters)
+        : numberUnit(definition, parameters, inputs + extra);
     return unit && !("about" in unit) ? unit.text : undefined;
   }
 
@@ -117,7 +126,7 @@ function givenCells(argument: Argument): GivenCells | undefined {
 function evaluate(definition: Definition, call: CallInputs, result: Argument): Block | CallProblem {
   switch (definition.form) {
     case "number": {
-      const unit = resultUnit(result, knownUnit(definition.result.unit));
+      const unit = resultUnit(result, ownUnit(definition, call));
       return "about" in unit ? unit : evaluateNumber(definition, call, unit);
     }
     case "conversion": {
@@ -133,13 +142,29 @@ function evaluate(definition: Definition, call: CallInputs, result: Argument): B
   }
 }
 
+function unitOfNumbers(definition: NumberDefinition, parameters: readonly Argument[]): Unit | CallProblem {
+  const inputs = definition.inputs.length;
+  const own = () => {
+    const call = callInputs(
+      definition,
+      parameters.slice(0, inputs).map(givenCells),
+      headerCells(parameters[inputs]),
+      false,
+    );
+    return call instanceof CellError || "about" in call ? undefined : call;
+  };
+  return resultUnit(
+    parameters[inputs + 1],
+    ownUnit(definition, definition.result.as === undefined ? undefined : own()),
+  );
+}
+
 /** The unit of the numbers a call gives; undefined where it gives texts. */
 function numberUnit(
-  definition: Definition,
+  definition: Exclude<Definition, NumberDefinition>,
   parameters: readonly Argument[],
   at: number,
 ): Unit | CallProblem | undefined {
-  if (definition.form === "number") return resultUnit(parameters[at], knownUnit(definition.result.unit));
   if (definition.form === "conversion") return askedUnit(parameters[at], undefined);
   if (definition.form === "text" || !parameters[0]) return undefined;
   const answer = definition.answer(String(cellAt(parameters[0].block.columns[0]!, 0)));

@@ -69,7 +69,7 @@ function eachQuantity(
         : columns.slice(1).map((column, index) => {
             const own = headers[index + 1]!;
             const header = own.unit || own.problem ? own : { ...own, unit: reading.unit };
-            return readCell(`uncertainty of ${input.name}`, cellAt(column, row), header, reading.unit.kind);
+            return readCell(`uncertainty of ${input.name}`, cellAt(column, row), header, { kind: reading.unit.kind });
           });
     const bad = sigmas.find((sigma) => sigma instanceof CellError || "about" in sigma);
     if (bad && definition.form === "conversion")

@@ -4,7 +4,7 @@ import type { Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
 import type { UnitProblem } from "../units/problem.js";
 import { readHeader } from "../units/readHeader.js";
-import type { Unit } from "../units/unit.js";
+import { toBase, type Unit } from "../units/unit.js";
 import type { CallProblem, HeaderCell, UnitPlace } from "./callProblem.js";
 
 /** Some worksheet hosts cut a message here. */
@@ -69,6 +69,20 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
       return resultKindSentence(problem);
     case "several rows":
       return `one row of this column gives ${problem.rows} rows of results; give each input one cell a row.`;
+    case "count":
+      return `${problem.input} is ${problem.value}; it must be a whole number from 1 to ${problem.most}, for example 5.`;
+    case "count of columns":
+      return `${problem.input} is ${problem.count} for a column of ${rowCount(problem.rows)}; a column has one result in each row, so leave ${problem.input} out, or give each input one cell.`;
+    case "needed":
+      return `${problem.input} is 0 or missing, but ${problem.by} is not 0; ${problem.because}, for example ${exampleOf(definition, problem.input)}${zeroRemedy(definition, problem.input)}.`;
+    case "two frames":
+      return `${problem.input} is in ${problem.frame} and ${problem.other} in ${problem.otherFrame}; times of two scales do not mix: bring both into one${byBarytime(problem)}.`;
+    case "no clock":
+      return `${problem.input} is in ${problem.frame}; the clock of the site is needed, ${problem.wanted} (JD_TAI, JD_TT and JD_TDB are converted), for example ${exampleOf(definition, problem.input)}.`;
+    case "zero of date":
+      return `${problem.input} is ${problem.value}, ${Math.abs(yearOf(problem)) > 1e4 ? "far outside history" : `the year ${yearOf(problem)}`}; it looks like ${problem.meant}: ${problem.header ? `write the header ${headerWith(problem.header.text, problem.meant)}` : `write ${problem.meant} after it`}.`;
+    case "hours or degrees":
+      return `${problem.input} is ${quote(problem.text)}, ${problem.headerUnit.text === "hourangle" ? "degrees" : "hours"}, but its header ${headerText(problem.header)} says ${problem.headerUnit.text}; ${problem.headerUnit.text === "hourangle" ? `write the header ${headerWith(problem.header.text, "deg")}` : `write the header ${headerWith(problem.header.text, "h")}`}, or letters: 12h30m00s, 12d30m00s.`;
     case "no unit stated":
       return `${quote(problem.text)} states no unit; write it in square brackets, for example "Period [d]", or after a number, "4.23 d".`;
     case "unknown name":
@@ -182,6 +196,22 @@ function boundPhrase(problem: Extract<CallProblem, { about: "bound" }>): string 
   return `${word} ${bound.text}`;
 }
 
+/** A blank may arrive as the number 0, so a 0 that is meant says its unit. */
+function zeroRemedy(definition: Definition, input: string): string {
+  const quantity = quantityOf(definition, input);
+  const allowed = quantity && (quantity.lower === undefined || quantity.lower.at < 0);
+  return allowed ? `; for a true 0 type "0 ${quantity.unit}"` : "";
+}
+
+function byBarytime({ frame, otherFrame }: Extract<CallProblem, { about: "two frames" }>): string {
+  const frames = [frame, otherFrame];
+  return frames.includes("JD_UTC") && frames.includes("BJD_TDB") ? "; BARYTIME turns JD_UTC into BJD_TDB" : "";
+}
+
+function yearOf({ value, unit }: Extract<CallProblem, { about: "zero of date" }>): number {
+  return Math.floor(2000 + toBase(unit, Number.parseFloat(value)) / 365.2425);
+}
+
 function remedy(definition: Definition, input: string): string {
   const found = inputNamed(definition, input);
   if (found?.takes === "word") return `write ${anyOf(found.words.map(({ word }) => `"${word}"`))}`;
@@ -192,11 +222,15 @@ function remedy(definition: Definition, input: string): string {
 
 function kindOfInput(definition: Definition, input: string): string {
   const quantity = quantityOf(definition, input);
+  const words = wordsOf(definition, input);
+  if (words) return "one of its words";
   return quantity ? kindPhrase(quantity.kind) : takesQuantity(definition) ? "a quantity" : "a text";
 }
 
 function exampleOf(definition: Definition, input: string): string {
   const quantity = quantityOf(definition, input);
+  const words = wordsOf(definition, input);
+  if (words) return anyOf(words.map((word) => `"${word}"`));
   if (!quantity) return quote(definition.examples[0].cells[0]!);
   return quantity.unit === "1" ? `${quantity.example}` : `${quantity.example} ${quantity.unit}`;
 }
@@ -209,6 +243,11 @@ function inputNamed(definition: Definition, input: string): Input | undefined {
 function quantityOf(definition: Definition, input: string): Quantity | undefined {
   const found = inputNamed(definition, input);
   return found?.takes === "quantity" ? found.quantity : undefined;
+}
+
+function wordsOf(definition: Definition, input: string): readonly string[] | undefined {
+  const found = (definition.inputs as readonly Input[]).find(({ name }) => name === input);
+  return found?.takes === "word" ? found.words.map(({ word }) => word) : undefined;
 }
 
 function defaultUnit(definition: Definition): string | undefined {

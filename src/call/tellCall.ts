@@ -1,6 +1,6 @@
 import type { Definition, Input } from "../functions/definition.js";
 import { kinds } from "../units/kind.js";
-import { baseSlope, one, toBase, type Unit } from "../units/unit.js";
+import { baseSlope, one, toBaseOf, type Unit } from "../units/unit.js";
 import { type Cell, CellError } from "./cell.js";
 import type { Argument } from "./cellFunction.js";
 import { cellFunctionOf } from "./cellFunctionOf.js";
@@ -72,7 +72,8 @@ function inputsOf(definition: Definition, parameters: readonly Argument[]): read
   const headers = definition.form === "lookup" ? [] : headerCells(parameters[inputs.length]);
   const call = callInputs(definition, given, headers, false);
   // Without a way to share out the headers the cells can still be shown.
-  if ("about" in call) return inputs.map((input, index) => unread(input, given[index]?.columns[0]));
+  if (call instanceof CellError || "about" in call)
+    return inputs.map((input, index) => unread(input, given[index]?.columns[0]));
   return call.inputs.map(told);
 }
 
@@ -86,21 +87,21 @@ function told({ input, columns, headers }: InputColumns): Untold {
   const cells = unread(input, columns[0]);
   const [own = noHeader, ...beside] = headers;
   const header = own.header && { text: own.header.text, address: own.header.address };
-  const wanted = input.takes === "quantity" ? input.quantity.kind : undefined;
+  const wanted = input.takes === "quantity" ? input.quantity : undefined;
   const isBlank = cells.cell === null || cells.cell === "";
   if (isBlank && fallbackOf(input) === undefined) return { ...cells, header };
-  if (input.takes === "word" || input.takes === "text") return cells;
+  if (input.takes === "word" || input.takes === "text" || input.takes === "count") return cells;
   const reading = isBlank ? undefined : readCell(input.name, cells.cell, own, wanted);
   if (!reading || reading instanceof CellError || "about" in reading) {
     // A blank stands for a circular orbit only where the fallback is 0; any other blank is an error of the call.
     const assumed = isBlank && input.takes === "quantity" && input.fallback === 0 ? input.fallbackText : cells.assumed;
     return { ...cells, header, assumed };
   }
-  const value = toBase(reading.unit, reading.value);
+  const value = toBaseOf(reading.unit, reading.value, reading.digits);
   const sigmas = columns.slice(1).map((column, index) => {
     const header = beside[index] ?? noHeader;
     const unit = header.unit ?? reading.unit;
-    const sigma = readCell(input.name, cellAt(column, 0), { ...header, unit }, wanted);
+    const sigma = readCell(input.name, cellAt(column, 0), { ...header, unit }, wanted && { kind: wanted.kind });
     return sigma instanceof CellError || "about" in sigma
       ? undefined
       : (Math.abs(sigma.value) * baseSlope(sigma.unit, value)) / baseSlope(reading.unit, value);
@@ -111,7 +112,8 @@ function told({ input, columns, headers }: InputColumns): Untold {
 
 function fallbackOf(input: Input): string | undefined {
   if (input.takes === "quantity") return input.fallbackText;
-  return input.takes === "word" ? input.words[0]!.word : undefined;
+  if (input.takes === "count") return "1";
+  return input.takes === "word" && !input.required ? input.words[0]!.word : undefined;
 }
 
 /** How the base unit is written for a reader; a mass is carried as G times the mass. */

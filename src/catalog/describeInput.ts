@@ -8,7 +8,10 @@ export function describeInput(input: Input): string {
   switch (input.takes) {
     case "quantity": {
       const { quantity, fallbackText } = input;
-      const leftOut = fallbackText === undefined ? "" : `; left out: ${fallbackText}`;
+      const needed = input.needed
+        ? `, if ${input.needed.by.join(" and ")} ${input.needed.by.length > 1 ? "are" : "is"} 0`
+        : "";
+      const leftOut = fallbackText === undefined ? "" : `; left out: ${fallbackText}${needed}`;
       const more = isRepeating(input) ? "; as many as there are" : "";
       return `${quantity.meaning}; ${kindPhrase(quantity.kind)}${rangeText(quantity)}${leftOut}${more}`;
     }
@@ -16,6 +19,8 @@ export function describeInput(input: Input): string {
       return "a number with a unit of any kind";
     case "word":
       return `${input.words.map(({ word, meaning }) => `${word} (${meaning})`).join(", ")}${input.required ? "" : `; left out: ${input.words[0]!.word}`}`;
+    case "count":
+      return `${input.meaning}; a whole number from 1 to ${input.most}; left out: 1`;
     case "text":
       return input.meaning;
   }

@@ -1,5 +1,5 @@
 import { argumentNames, isRepeating } from "../functions/argumentNames.js";
-import type { Definition, Input } from "../functions/definition.js";
+import type { Definition, Input, WordInput } from "../functions/definition.js";
 import { definitions } from "../functions/definitions.js";
 import type { Kind } from "../units/kind.js";
 import { resultText } from "./describeFunction.js";
@@ -82,7 +82,8 @@ function parameters(definition: Definition): HostParameter[] {
   return names.map((written, index): HostParameter => {
     const input: Input | undefined = definition.inputs[index];
     const name = written.replace(/[[\]]/g, "");
-    const choiceId = input?.takes === "word" ? wordsId(name) : input ? undefined : resultChoices(definition, name);
+    const choiceId =
+      input?.takes === "word" ? wordsId(definition, input) : input ? undefined : resultChoices(definition, name);
     return {
       name: name.replaceAll(" ", "_"),
       description: description(definition, input, name),
@@ -109,8 +110,11 @@ function exampleUnit(definition: Definition): string {
   return definition.form === "number" ? definition.result.unit : "km/s";
 }
 
-function wordsId(name: string): string {
-  return `BARY.${name}`;
+/** Inputs of one name share their choices, unless these differ between functions. */
+function wordsId(definition: Definition, { name, words }: WordInput): string {
+  const others = definitions.flatMap(({ inputs }) => inputs as readonly Input[]);
+  const differ = others.some((other) => other.takes === "word" && other.name === name && other.words !== words);
+  return differ ? `BARY.${definition.name}.${name}` : `BARY.${name}`;
 }
 
 function unitsId(kind: Kind | undefined): string {
@@ -129,7 +133,7 @@ function choices(): HostChoices[] {
   for (const definition of definitions) {
     for (const input of definition.inputs as readonly Input[]) {
       if (input.takes !== "word") continue;
-      const id = wordsId(input.name);
+      const id = wordsId(definition, input);
       words.set(
         id,
         hostChoices(

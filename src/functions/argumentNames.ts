@@ -1,8 +1,16 @@
 import type { Definition, Input } from "./definition.js";
 
 export function isOptional(input: Input): boolean {
-  if (input.takes === "word") return input.required !== true;
-  return input.takes === "quantity" && input.fallback !== undefined;
+  switch (input.takes) {
+    case "word":
+      return !input.required;
+    case "quantity":
+      return input.fallback !== undefined;
+    case "count":
+      return true;
+    default:
+      return false;
+  }
 }
 
 export function isRepeating(input: Input | undefined): boolean {

@@ -32,6 +32,12 @@ import { pixelSpeed } from "./shift/pixelSpeed.js";
 import { shift } from "./shift/shift.js";
 import { shiftSpeed } from "./shift/shiftSpeed.js";
 import { vacuum } from "./shift/vacuum.js";
+import { anomaly } from "./time/anomaly.js";
+import { barySpeed } from "./time/barySpeed.js";
+import { baryTime } from "./time/baryTime.js";
+import { event } from "./time/event.js";
+import { phase } from "./time/phase.js";
+import { rvAt } from "./time/rvAt.js";
 import { constant } from "./units/constant.js";
 import { into } from "./units/into.js";
 import { tag } from "./units/tag.js";
@@ -62,6 +68,12 @@ export const definitions: readonly Definition[] = [
   pixelSpeed,
   vacuum,
   air,
+  anomaly,
+  rvAt,
+  phase,
+  event,
+  barySpeed,
+  baryTime,
   altitude,
   airmass,
   hoursUp,

@@ -17,7 +17,9 @@ const named = definitions.map((definition) => ({ name: definition.name, definiti
 /** An input as the table of functions writes it: a question mark where it may be left out. */
 function written(input: Input): string {
   const optional =
-    (input.takes === "word" && !input.required) || (input.takes === "quantity" && input.fallback !== undefined);
+    (input.takes === "word" && !input.required) ||
+    (input.takes === "quantity" && input.fallback !== undefined) ||
+    input.takes === "count";
   if (input.takes === "quantity" && input.repeats) return `${input.name} ...`;
   return optional ? `${input.name}?` : input.name;
 }
@@ -74,9 +76,11 @@ describe.each(named)("$name", ({ definition }) => {
       } else if (input.takes === "word") {
         expect(input.words.length).toBeGreaterThan(1);
         for (const { word, meaning } of input.words) {
-          expect(word).toMatch(/^[A-Za-z][A-Za-z0-9]*$/);
+          expect(word).toMatch(/^[A-Za-z][A-Za-z0-9]*(-[a-z]+)?$/);
           expect(meaning).not.toBe("");
         }
+      } else if (input.takes === "count") {
+        expect(input.meaning).not.toBe("");
       }
     }
     if (definition.form === "number") {
