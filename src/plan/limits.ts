@@ -4,9 +4,7 @@ export interface Limits {
   readonly airmass: number;
   /** in the dark: with the Sun below this altitude [rad], */
   readonly sunBelow: number;
-  /** with one of these phases, any where there are none, */
-  readonly phases: readonly number[];
-  /** its middle and the standard uncertainty of its phase together no farther from it than this, */
+  /** its middle and the standard uncertainty of its phase together no farther than this from a phase that is wanted, */
   readonly phaseWidth: number;
   /** and with the Moon, while it is up, no nearer than this [rad]. */
   readonly moonDistance: number;

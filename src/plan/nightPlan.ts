@@ -105,7 +105,7 @@ export class NightPlan {
 
   /** A phase with its share of the visits waits for the others while there are nights to spare. */
   private hasShare({ target, laid, laidAt, nightsLeft }: Opportunities, phase: number): boolean {
-    const share = Math.ceil(target.visits / Math.max(1, this.limits.phases.length));
+    const share = Math.ceil(target.visits / Math.max(1, target.phases.length));
     const missing = target.visits - laid;
     return (laidAt[phase] ?? 0) >= share && nightsLeft * this.limits.perNight >= 2 * missing;
   }

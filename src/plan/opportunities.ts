@@ -72,13 +72,13 @@ export function noteNight(one: Opportunities, night: Night, site: Site, lowest: 
   const width = limits.phaseWidth - error - lightSlack / target.period;
   const openings = up.flatMap((span): Opening[] => {
     const within = { from: span.from, to: span.to - exposure };
-    if (limits.phases.length === 0) return [{ ...within, phase: 0 }];
-    return limits.phases.flatMap((wanted, phase) =>
+    if (target.phases.length === 0) return [{ ...within, phase: 0 }];
+    return target.phases.flatMap((wanted, phase) =>
       phaseSpans(target, wanted, width, within, lead + exposure / 2).map((opening) => ({ ...opening, phase })),
     );
   });
   one.openings.push(openings);
-  if (limits.phases.length === 0 || error < limits.phaseWidth) one.nightsSure++;
+  if (target.phases.length === 0 || error < limits.phaseWidth) one.nightsSure++;
   if (openings.length > 0) {
     one.nightsInPhase++;
     one.nightsLeft++;

@@ -15,6 +15,7 @@ import type { Limits } from "../../src/plan/limits.js";
 import { nightsBetween } from "../../src/plan/nights.js";
 import { nightTimeline } from "../../src/plan/nightTimeline.js";
 import type { PlannedTarget } from "../../src/plan/plannedTarget.js";
+import { quadraturePhases } from "../../src/plan/quadraturePhases.js";
 import { type ScheduleRequest, scheduleSteps } from "../../src/plan/schedule.js";
 import { tellSchedule, tellShortfall } from "../../src/plan/tellSchedule.js";
 import { visibility } from "../../src/plan/visibility.js";
@@ -28,7 +29,6 @@ const start = 9892.5;
 const limits: Limits = {
   airmass: 2,
   sunBelow: -18 * deg,
-  phases: [0.25, 0.75],
   phaseWidth: 0.1,
   moonDistance: 0,
   perNight: 1,
@@ -47,6 +47,7 @@ function target(change: Partial<PlannedTarget> = {}): PlannedTarget {
     visits: 10,
     exposure: 900 / 86400,
     overhead: 300 / 86400,
+    phases: [0.25, 0.75],
     value: 1,
     ...change,
   };
@@ -63,6 +64,7 @@ const anyTarget: fc.Arbitrary<PlannedTarget> = fc.record({
   visits: fc.integer({ min: 1, max: 12 }),
   exposure: fc.integer({ min: 60, max: 5400 }).map((seconds) => seconds / 86400),
   overhead: fc.integer({ min: 0, max: 900 }).map((seconds) => seconds / 86400),
+  phases: fc.constantFrom([], [0.25, 0.75], [0.98]),
   value: fc.integer({ min: 0, max: 5 }),
 });
 const anyRequest: fc.Arbitrary<ScheduleRequest> = fc
@@ -82,7 +84,6 @@ const anyRequest: fc.Arbitrary<ScheduleRequest> = fc
     limits: fc.record({
       airmass: fc.constantFrom(1.3, 2, 3),
       sunBelow: fc.constantFrom(-18 * deg, -12 * deg),
-      phases: fc.constantFrom([], [0.25, 0.75], [0.98]),
       phaseWidth: fc.constantFrom(0.05, 0.1),
       moonDistance: fc.constantFrom(0, 30 * deg, 60 * deg),
       perNight: fc.constantFrom(1, 2, 3),
@@ -148,8 +149,8 @@ describe("no schedule breaks a limit", () => {
           const error = Math.hypot(one.referenceError, turns * one.periodError) / one.period;
           expect(Math.abs(visit.phase - (turns - Math.floor(turns)))).toBeLessThan(1e-9);
           expect(visit.phaseError).toBeCloseTo(error, 12);
-          if (limits.phases.length > 0) {
-            const apart = limits.phases.map((wanted) => Math.abs(((visit.phase - wanted + 1.5) % 1) - 0.5));
+          if (one.phases.length > 0) {
+            const apart = one.phases.map((wanted) => Math.abs(((visit.phase - wanted + 1.5) % 1) - 0.5));
             expect(Math.min(...apart) + error).toBeLessThanOrEqual(limits.phaseWidth + 1e-9);
           }
           expect(visit.airmass).toBeCloseTo(airmass(middle, ...place), 3);
@@ -205,15 +206,15 @@ describe("a schedule", () => {
 
   test("gives time to the target that can wait least", () => {
     // Both want the same stretch of the only night; the second has visits for no other.
-    const long = { exposure: 0.2, overhead: 0, visits: 1 };
+    const long = { exposure: 0.2, overhead: 0, visits: 1, phases: [] };
     const two = [target({ ...long, value: 9, visits: 1 }), target({ ...long, value: 1, visits: 2 })];
-    const { visits } = schedule({ ...request, targets: two, to: start, limits: { ...limits, phases: [] } });
+    const { visits } = schedule({ ...request, targets: two, to: start, limits });
     expect(visits.map(({ target }) => target)).toEqual([1]);
   });
 
   test("and else to the one that is worth more, then to the earlier", () => {
-    const long = { exposure: 0.2, overhead: 0, visits: 1 };
-    const once = { ...request, to: start, limits: { ...limits, phases: [] } };
+    const long = { exposure: 0.2, overhead: 0, visits: 1, phases: [] };
+    const once = { ...request, to: start, limits };
     const worth = schedule({ ...once, targets: [target({ ...long, value: 1 }), target({ ...long, value: 2 })] });
     expect(worth.visits.map(({ target }) => target)).toEqual([1]);
     const equal = schedule({ ...once, targets: [target(long), target(long)] });
@@ -267,23 +268,23 @@ describe("what was left out is told with its reason", () => {
   });
 
   test("few nights", () => {
-    expect(told([target()], { phases: [] }, 3)).toEqual([
+    expect(told([target({ phases: [] })], {}, 3)).toEqual([
       "Lantern 1 b: 4 of 10 visits; it can be visited in 4 nights only; look for more dates, or allow more visits a night.",
     ]);
   });
 
   test("the Moon", () => {
     // Full moon of 2027-02-20 passes near RA 150 deg; 120 deg keeps half the month away.
-    const [line] = told([target({ declination: 10 * deg, visits: 28 })], { phases: [], moonDistance: 120 * deg });
+    const [line] = told([target({ declination: 10 * deg, visits: 28, phases: [] })], { moonDistance: 120 * deg });
     expect(line).toMatch(
       /^Lantern 1 b: \d+ of 28 visits; the Moon was too near in \d+ nights; allow a smaller distance\.$/,
     );
   });
 
   test("others took its time", () => {
-    const long = { exposure: 0.2, overhead: 0, visits: 3 };
+    const long = { exposure: 0.2, overhead: 0, visits: 3, phases: [] };
     const two = [target({ ...long, value: 2 }), target({ ...long, name: "Quarry 1 b", visits: 3 })];
-    expect(told(two, { phases: [] }, 3)).toEqual([
+    expect(told(two, {}, 3)).toEqual([
       "Lantern 1 b: 2 of 3 visits; others took its time, 4 nights would do; plan fewer targets, or more dates.",
       "Quarry 1 b: 2 of 3 visits; others took its time, 4 nights would do; plan fewer targets, or more dates.",
     ]);
@@ -326,4 +327,12 @@ test("dates and times as text", () => {
   expect(isoText(0)).toBe("2000-01-01T12:00:00");
   expect(isoText(start)).toBe("2027-02-01T00:00:00");
   expect(dateText(start + 27.999)).toBe("2027-02-28");
+});
+
+test("the quadratures of an orbit, as phases after its transit", () => {
+  expect(quadraturePhases(0, 1)).toEqual([expect.closeTo(0.25, 12), expect.closeTo(0.75, 12)]);
+  // e = 0.013, omega = 58 deg: minimum at 0.248647413999, maximum at 0.755665932776, computed with mpmath.
+  const [low, high] = quadraturePhases(0.013, 58 * deg) as [number, number];
+  expect(low).toBeCloseTo(0.248647413999, 11);
+  expect(high).toBeCloseTo(0.755665932776, 11);
 });
