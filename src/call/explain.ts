@@ -52,7 +52,7 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
     case "lengths":
       return `${problem.input} has ${rowCount(problem.rows)} and ${problem.other} has ${problem.otherRows}; columns of one call need the same number of rows, or one row each.`;
     case "shape":
-      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${mayHaveUncertainty(definition, problem.input) ? ", two with its uncertainty, or three with upper and lower uncertainty" : ""}.`;
+      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes ${isCount(definition, problem.input) ? "one cell" : "one column"}${mayHaveUncertainty(definition, problem.input) ? ", two with its uncertainty, or three with upper and lower uncertainty" : ""}.`;
     case "header of another column":
       return `${problem.input} was given the header ${headerText(problem.header)}, but its own column is headed ${headerText(problem.own)}; give inputs and headers in the same order.`;
     case "header count":
@@ -242,6 +242,10 @@ function quantityOf(definition: Definition, input: string): Quantity | undefined
 function wordsOf(definition: Definition, input: string): readonly string[] | undefined {
   const found = (definition.inputs as readonly Input[]).find(({ name }) => name === input);
   return found?.takes === "word" ? found.words.map(({ word }) => word) : undefined;
+}
+
+function isCount(definition: Definition, input: string): boolean {
+  return (definition.inputs as readonly Input[]).some(({ name, takes }) => name === input && takes === "count");
 }
 
 function defaultUnit(definition: Definition): string | undefined {
