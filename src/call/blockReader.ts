@@ -6,6 +6,7 @@ import { baseSlope, one, toBaseOf, type Unit } from "../units/unit.js";
 import type { CallProblem } from "./callProblem.js";
 import { type Cell, CellError } from "./cell.js";
 import { cellAt } from "./column.js";
+import { quote } from "./explain.js";
 import type { InputColumns } from "./inputColumns.js";
 import { isWithin, type OpenRange, openRange, rangeProblem } from "./range.js";
 import { type CellReading, fits, readCell, valueText } from "./readCell.js";
@@ -83,7 +84,9 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
     if (frames) frames[row] = reading.unit.frame;
     if (!isWithin(range, value)) {
       base[row] = Number.NaN;
-      const text = valueText(reading.value, reading.unit);
+      // The number behind a date counts from J2000.0, which nobody typed.
+      const isDate = reading.unit.kind === "instant" && reading.unit.plus === 0;
+      const text = isDate ? quote(String(cell)) : valueText(reading.value, reading.unit);
       const problem = zeroOfDate(input.name, quantity, reading, header.header);
       report.value(row, problem ?? rangeProblem(input.name, quantity, value, text));
     }

@@ -52,7 +52,7 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
     case "lengths":
       return `${problem.input} has ${rowCount(problem.rows)} and ${problem.other} has ${problem.otherRows}; columns of one call need the same number of rows, or one row each.`;
     case "shape":
-      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${columnsRemedy(definition, problem.input)}.`;
+      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes ${isCount(definition, problem.input) ? "one cell" : "one column"}${columnsRemedy(definition, problem.input)}.`;
     case "header of another column":
       return `${problem.input} was given the header ${headerText(problem.header)}, but its own column is headed ${headerText(problem.own)}; give inputs and headers in the same order.`;
     case "header count":
@@ -213,8 +213,6 @@ function yearOf({ value, unit }: Extract<CallProblem, { about: "zero of date" }>
 }
 
 function remedy(definition: Definition, input: string): string {
-  const found = inputNamed(definition, input);
-  if (found?.takes === "word") return `write ${anyOf(found.words.map(({ word }) => `"${word}"`))}`;
   return input.startsWith("uncertainty")
     ? "type 0 if it is exact"
     : `${kindOfInput(definition, input)} is needed, for example ${exampleOf(definition, input)}`;
@@ -248,6 +246,10 @@ function quantityOf(definition: Definition, input: string): Quantity | undefined
 function wordsOf(definition: Definition, input: string): readonly string[] | undefined {
   const found = (definition.inputs as readonly Input[]).find(({ name }) => name === input);
   return found?.takes === "word" ? found.words.map(({ word }) => word) : undefined;
+}
+
+function isCount(definition: Definition, input: string): boolean {
+  return (definition.inputs as readonly Input[]).some(({ name, takes }) => name === input && takes === "count");
 }
 
 function defaultUnit(definition: Definition): string | undefined {

@@ -68,7 +68,7 @@ export function callInputs(
     const { name } = inputs.find(({ takes }) => takes === "count")!;
     return { about: "count of columns", input: name, count, rows: ownRows };
   }
-  const rows = Math.max(ownRows, count);
+  const rows = count > 1 ? count : ownRows;
   const headed = inputs.filter(takesHeader);
   const widths = headed.map((input) => given[inputs.indexOf(input)]?.columns.length ?? 0);
   const ways = assignHeaders(headers, widths);

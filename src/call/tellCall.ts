@@ -1,5 +1,6 @@
 import type { Definition, Input } from "../functions/definition.js";
 import { kinds } from "../units/kind.js";
+import { symbolOf } from "../units/quantityText.js";
 import { baseSlope, one, toBaseOf, type Unit } from "../units/unit.js";
 import { type Cell, CellError } from "./cell.js";
 import type { Argument } from "./cellFunction.js";
@@ -144,7 +145,7 @@ function sharesOf(definition: Definition, inputs: readonly Untold[], parameters:
 function textOf({ reading }: Untold, withUncertainty: boolean): string {
   const { value, upper, lower, unit } = reading!;
   const sigma = withUncertainty ? ` +${upper} -${lower}` : "";
-  return `${value}${sigma}${unit.text === one.text ? "" : ` ${unit.text}`}`;
+  return `${value}${sigma}${unit.text === one.text ? "" : ` ${symbolOf(unit)}`}`;
 }
 
 function varianceOf(definition: Definition, parameters: readonly Argument[]): number | undefined {

@@ -23,7 +23,7 @@ export function zeroOfDate(
 ): CallProblem | undefined {
   const { plausible } = quantity;
   const [place, scale] = unit.frame?.split("JD_") ?? [];
-  if (quantity.kind !== "instant" || !plausible || place === undefined || scale === undefined) return undefined;
+  if (unit.plus === 0 || !plausible || place === undefined || scale === undefined) return undefined;
   for (const zero of zeros) {
     const meant = readUnit(zero(place, scale));
     if (isProblem(meant)) continue;

@@ -111,7 +111,7 @@ export const radialVelocity: Quantity = {
 export const barycentricCorrection: Quantity = {
   ...systemicVelocity,
   name: "barycentric correction",
-  meaning: "c z_B, to be applied as (1 + z)(1 + z_B)",
+  meaning: "barycentric correction c z_B, to be applied as (1 + z)(1 + z_B)",
   example: 19557.9989,
   headers: ["BERV", "barycentric velocity", "BVC"],
 };

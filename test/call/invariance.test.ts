@@ -1,14 +1,14 @@
 import { Decimal } from "decimal.js";
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import type { NumberDefinition, QuantityInput, WordInput } from "../../src/functions/definition.js";
+import type { NumberDefinition, QuantityInput } from "../../src/functions/definition.js";
 import { definitions } from "../../src/functions/definitions.js";
 import { isProblem } from "../../src/units/problem.js";
 import { quantityText } from "../../src/units/quantityText.js";
 import { readUnit } from "../../src/units/readUnit.js";
 import { one, toBase, type Unit } from "../../src/units/unit.js";
 import { unitTable } from "../../src/units/unitTable.js";
-import { exampleText, type Given, numberFrom } from "./door.js";
+import { exampleOf, type Given, numberFrom } from "./door.js";
 
 Decimal.set({ precision: 60 });
 
@@ -25,16 +25,16 @@ for (const text of [...symbols, ...compounds, "10**27kg", "2.5d", "10**-3"]) {
 }
 
 const numeric = definitions.filter((definition): definition is NumberDefinition => definition.form === "number");
-// An instant has a zero of its own, and what the sky shows at one changes by no power law: test/kernel/night.test.ts.
+// An instant has a zero of its own, a small part of a period is a large part of its orbit, and what the sky shows changes by
+// no power law: test/call/times.test.ts, test/kernel/night.test.ts.
 const takesInstant = ({ inputs }: NumberDefinition) =>
   inputs.some((input) => input.takes === "quantity" && input.quantity.kind === "instant");
-const inputs = numeric
-  .filter((definition) => !takesInstant(definition))
-  .flatMap((definition) =>
-    definition.inputs.flatMap((input, index) =>
-      input.takes === "quantity" ? [{ name: definition.name, definition, input, index, label: input.name }] : [],
-    ),
-  );
+const proportional = numeric.filter((one) => !takesInstant(one));
+const inputs = proportional.flatMap((definition) =>
+  definition.inputs.flatMap((input, index) =>
+    input.takes === "quantity" ? [{ name: definition.name, definition, input, index, label: input.name }] : [],
+  ),
+);
 
 /** The same amount in another unit, exact but for one rounding to the nearest double. */
 function converted(value: number, from: Unit, to: Unit): number {
@@ -54,8 +54,7 @@ describe("the same quantity in any unit gives the same result", () => {
     const own = readUnit(input.quantity.unit) as Unit;
     const values = (value: number, unit: Unit): Given[] =>
       definition.inputs.map((one, at): Given => {
-        if (one.takes === "word") return wordOf(one);
-        if (at !== index) return exampleText(one.quantity);
+        if (at !== index) return exampleOf(one);
         return quantityText({ value, upper: undefined, lower: undefined, unit });
       });
     fc.assert(
@@ -79,10 +78,11 @@ describe("the same quantity in any unit gives the same result", () => {
   });
 
   test.each(numeric)("$name: the result in any unit", ({ name, inputs, result }) => {
-    const values = inputs.map((one): Given => (one.takes === "word" ? wordOf(one) : exampleText(one.quantity)));
+    const values = inputs.map(exampleOf);
     const own = readUnit(result.unit) as Unit;
     const plain = numberFrom(name, ...values);
-    for (const unit of known.get(result.quantity.kind)!) {
+    // Instants in another zero, as conversions in test/units/readInstant.test.ts.
+    for (const unit of known.get(result.quantity.kind) ?? []) {
       const asked = numberFrom(name, ...values, undefined, unit.text);
       expect(Math.abs(converted(asked, unit, own) / plain - 1), unit.text).toBeLessThanOrEqual(3 * ulp);
     }
@@ -90,16 +90,11 @@ describe("the same quantity in any unit gives the same result", () => {
 
   test("asked for in its own unit, the result is the same to the last bit", () => {
     for (const { name, inputs, result } of numeric) {
-      const values = inputs.map((one): Given => (one.takes === "word" ? wordOf(one) : exampleText(one.quantity)));
+      const values = inputs.map(exampleOf);
       expect(numberFrom(name, ...values, undefined, result.unit)).toBe(numberFrom(name, ...values));
     }
   });
 });
-
-/** Only a word that is required has to be given. */
-function wordOf({ required, words }: WordInput): string | undefined {
-  return required ? words[0]!.word : undefined;
-}
 
 /** Factors that leave the example inside its range, and a tenth of a percent beyond as well. */
 function factorFor({ quantity }: QuantityInput): fc.Arbitrary<number> {

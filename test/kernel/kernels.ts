@@ -4,6 +4,10 @@ import { lineShift, lineShifts } from "../../src/kernel/lineShift.js";
 import { massFunction, massFunctions } from "../../src/kernel/massFunction.js";
 import { massVisits, massVisitsOf } from "../../src/kernel/massVisits.js";
 import { noiseSum, noiseSums } from "../../src/kernel/noiseSum.js";
+import { anomalies, anomaly } from "../../src/kernel/orbit/anomaly.js";
+import { eccentricAnomalies, eccentricAnomaly } from "../../src/kernel/orbit/eccentricAnomaly.js";
+import { eventTime, eventTimes } from "../../src/kernel/orbit/orbitalEvent.js";
+import { radialVelocities, radialVelocity } from "../../src/kernel/orbit/radialVelocity.js";
 import { orbitalPeriod, orbitalPeriods } from "../../src/kernel/orbitalPeriod.js";
 import { photoelectronCounts, photoelectrons } from "../../src/kernel/photoelectrons.js";
 import { photonNoise, photonNoises } from "../../src/kernel/photonNoise.js";
@@ -17,10 +21,13 @@ import { reflexAmplitude, reflexAmplitudes } from "../../src/kernel/reflexAmplit
 import { semiMajorAxes, semiMajorAxis } from "../../src/kernel/semiMajorAxis.js";
 import { shiftMass, shiftMasses } from "../../src/kernel/shiftMass.js";
 import { shiftOfSpeed, shiftsOfSpeeds } from "../../src/kernel/shiftOfSpeed.js";
+import { barycentricSpeed, barycentricSpeeds } from "../../src/kernel/sky/barycentricSpeed.js";
+import { barycentricTime, barycentricTimes } from "../../src/kernel/sky/barycentricTime.js";
 import { speedOfShift, speedsOfShifts } from "../../src/kernel/speedOfShift.js";
 import { starAxes, starAxis } from "../../src/kernel/starAxis.js";
 import { starSpeed, starSpeeds } from "../../src/kernel/starSpeed.js";
 import { telescopeTime, telescopeTimes } from "../../src/kernel/telescopeTime.js";
+import { phase, phases } from "../../src/kernel/time/phase.js";
 import { totalMass, totalMasses } from "../../src/kernel/totalMass.js";
 import { vacuumWavelength, vacuumWavelengths } from "../../src/kernel/vacuumWavelength.js";
 import { visitSignificance, visitSignificances } from "../../src/kernel/visitSignificance.js";
@@ -104,6 +111,26 @@ const resolvingPower = positive("resolvingPower", 1e5, 1, 1e7);
 const pixelsPerElement = positive("pixelsPerElement", 3.2, 0.1, 100);
 const pixels: Domain = { name: "pixels", inside: [1.5, 0, -0, -1.5, 1e-6], outside: [9.9e-41, 1.1e40, -1.1e40] };
 
+const instant: Domain = { name: "time", inside: [9000.25, 0, -9000.5, 73048], outside: [4.1e6, -4.1e6] };
+const reference: Domain = { ...instant, name: "reference" };
+const orbitPeriod: Domain = { ...period, inside: [3e5, 100, 3.2e10] };
+const omega: Domain = { name: "omega", inside: [1, 0, -6.3, 6.3], outside: [101, -101] };
+const code = (name: string, most: number): Domain => ({
+  name,
+  inside: Array.from({ length: most + 1 }, (_, index) => index),
+  outside: [-1, 0.5, most + 1],
+});
+const meanAnomaly: Domain = { name: "meanAnomaly", inside: [1, 0, -0, -3.1, Math.PI, 1e-300], outside: [3.2, -3.2] };
+const systemic: Domain = { name: "systemic", inside: [-3e4, 0], outside: [] };
+const utc: Domain = { name: "utc", inside: [3716.75, -10227.5, 13148.4], outside: [-10228, 13148.5] };
+const circle = (name: string): Domain => ({ name, inside: [2, 0, 6.28], outside: [] });
+const declination: Domain = { name: "declination", inside: [-0.5, 0, Math.PI / 2], outside: [] };
+const longitude: Domain = { name: "longitude", inside: [-1.2, 0, 3.14, 6.28], outside: [7, -7] };
+const latitude: Domain = { name: "latitude", inside: [-0.5, 0, Math.PI / 2, -Math.PI / 2], outside: [1.6, -1.6] };
+const height: Domain = { name: "height", inside: [2400, 0, -100], outside: [1.1e5, -1.1e5] };
+const motion: Domain = { name: "motion", inside: [1e-14, 0, -1e-13], outside: [] };
+const parallax: Domain = { name: "parallax", inside: [1e-7, 0], outside: [-1e-7] };
+const epoch: Domain = { name: "epoch", inside: [6.3e10], outside: [] };
 const magnitude: Domain = { name: "magnitude", inside: [9, 0, -0, -30, 40], outside: [-30.1, 40.1] };
 const exposure = positive("exposure", 900, 1, 1e5);
 const noise = positive("noise", 1.2, 1e-3, 1e3);
@@ -113,12 +140,12 @@ const part: Domain = { name: "part", inside: [0.05, 1, 1e-6], outside: [0, -0.05
 const significance = positive("significance", 5, 0.1, 100);
 const sampling: Domain = { name: "sampling", inside: [0, 1], outside: [-1, 0.5, 2] };
 const shape: Domain = { name: "eccentricity", inside: [0.3, 0, -0, 0.9999], outside: [1, -0.1, 1.5] };
-const omega: Domain = {
+const anyOmega: Domain = {
   name: "omega",
   inside: [1, 0, -0, Math.PI, -Math.PI, 2 * Math.PI, -6, 6],
   outside: [1e4, -1e4],
 };
-const orbit = [sampling, shape, omega] as const;
+const orbit = [sampling, shape, anyOmega] as const;
 const anchor = [noise, magnitude, exposure, aperture, aperture] as const;
 
 const kernel = (scalar: unknown, batch: unknown, ...inputs: Domain[]): Kernel => ({
@@ -159,6 +186,41 @@ export const kernels: readonly Kernel[] = [
   kernel(pixelSpeed, pixelSpeeds, pixels, resolvingPower, pixelsPerElement),
   kernel(vacuumWavelength, vacuumWavelengths, airRange, formula),
   kernel(airWavelength, airWavelengths, airRange, formula),
+  kernel(eccentricAnomaly, eccentricAnomalies, meanAnomaly, eccentricity),
+  kernel(anomaly, anomalies, instant, orbitPeriod, reference, eccentricity, code("which", 2)),
+  kernel(phase, phases, instant, orbitPeriod, reference),
+  kernel(
+    radialVelocity,
+    radialVelocities,
+    instant,
+    orbitPeriod,
+    { ...amplitude, outside: [-12.5, 9.9e-41] },
+    reference,
+    eccentricity,
+    omega,
+    systemic,
+    code("event", 1),
+  ),
+  kernel(eventTime, eventTimes, code("which", 5), instant, orbitPeriod, reference, eccentricity, omega, {
+    name: "place",
+    inside: [1, 2, 10000],
+    outside: [],
+  }),
+  kernel(
+    barycentricSpeed,
+    barycentricSpeeds,
+    utc,
+    circle("rightAscension"),
+    declination,
+    longitude,
+    latitude,
+    height,
+    motion,
+    motion,
+    parallax,
+    epoch,
+  ),
+  kernel(barycentricTime, barycentricTimes, utc, circle("rightAscension"), declination, longitude, latitude, height),
   kernel(photonNoise, photonNoises, magnitude, exposure, ...anchor),
   kernel(exposureForNoise, exposuresForNoises, noise, magnitude, ...anchor),
   kernel(qualityNoise, qualityNoises, positive("quality", 1e4, 1, 1e6), positive("photoelectrons", 1e9, 1, 1e15)),

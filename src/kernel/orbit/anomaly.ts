@@ -1,6 +1,6 @@
 import { atan2, cos, sin } from "../angle.js";
 import { isEccentricity } from "../domain.js";
-import { periodsBetween, wholePeriods } from "../time/phase.js";
+import { partOf, periodsBetween, wholePeriods } from "../time/phase.js";
 import { eccentricAnomaly } from "./eccentricAnomaly.js";
 
 /*
@@ -40,7 +40,7 @@ export function anomaly(
   if (!isEccentricity(eccentricity) || !(which === trueAnomaly || which === eccentric || which === mean)) {
     return Number.NaN;
   }
-  const part = periodsBetween(time, period, periastron) - turns;
+  const part = partOf(periodsBetween(time, period, periastron), turns);
   if (which === mean) return part * turn;
   // Kepler's equation is odd: what lies past apastron is as far before the next periastron.
   const whole = Math.round(part);
@@ -48,7 +48,7 @@ export function anomaly(
   if (which === eccentric) return E + whole * turn;
   const half = atan2(Math.sqrt(1 + eccentricity) * sin(E / 2), Math.sqrt(1 - eccentricity) * cos(E / 2));
   const angle = 2 * half + whole * turn;
-  return angle < turn || part >= 1 ? angle : 0;
+  return angle >= turn && part < 1 ? 0 : angle;
 }
 
 /** `anomaly` of the first `rows` entries, to the same bits. */

@@ -67,7 +67,7 @@ export function eventNumber(
   omega: number,
   place: number,
 ): number {
-  if (!(isEccentricity(eccentricity) && Math.abs(omega) <= 100)) return Number.NaN;
+  if (!(isEccentricity(eccentricity) && Math.abs(omega) <= 100 && place >= 1 && place <= 1e9)) return Number.NaN;
   const each = which === atQuadrature ? 2 : 1;
   const passed = periodsBetween(after, period, reference);
   let number = Math.floor(passed) * each - each;

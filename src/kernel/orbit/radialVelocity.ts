@@ -1,5 +1,5 @@
 import { atan2, cos, sin } from "../angle.js";
-import { isEccentricity, isMagnitudeOrZero } from "../domain.js";
+import { isEccentricity, isMagnitudeOrZero, isVelocity } from "../domain.js";
 import { periodsBetween } from "../time/phase.js";
 import { eccentricAnomaly } from "./eccentricAnomaly.js";
 
@@ -63,7 +63,7 @@ export function radialVelocity(
   event: number,
 ): number {
   if (!(isMagnitudeOrZero(amplitude) && isEccentricity(eccentricity) && Math.abs(omega) <= 100)) return Number.NaN;
-  if (!(event === transit || event === periastron)) return Number.NaN;
+  if (!(isVelocity(systemic) && (event === transit || event === periastron))) return Number.NaN;
   const start = event === transit ? meanAnomalyAtTransit(eccentricity, omega) / turn : 0;
   const periods = periodsBetween(time, period, reference);
   const whole = Math.round(periods);

@@ -25,7 +25,7 @@ const towards = new Float64Array(3);
  *   epoch                        [s]      scalar: Julian years since year 0
  * Returned  [m/s]; NaN outside the domain
  * Accuracy  2 mm/s against the ephemeris it is fitted to; UT1 = UTC is worth up to 0.03 m/s, polar motion 1 mm/s;
- *           test/kernel/barycentricSpeed.test.ts, test/astropy/barycentric.test.ts
+ *           test/kernel/barycentric.test.ts, test/astropy/barycentric.test.ts
  * Source    Wright & Eastman 2014, PASP 126, 838, eq. 28; Lindegren & Dravins 2003, A&A 401, 1185
  */
 export function barycentricSpeed(

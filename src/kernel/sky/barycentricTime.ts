@@ -19,7 +19,7 @@ const towards = new Float64Array(3);
  *   longitude, latitude          [rad]  scalars, geodetic (WGS 84), east and north positive
  *   height                       [m]    scalar, above the ellipsoid
  * Returned  [d from J2000.0 TDB]; NaN outside the domain
- * Accuracy  2e-5 s for plane waves; test/kernel/barycentricSpeed.test.ts, test/astropy/barycentric.test.ts
+ * Accuracy  2e-5 s for plane waves; test/kernel/barycentric.test.ts, test/astropy/barycentric.test.ts
  * Source    Eastman, Siverd & Gaudi 2010, PASP 122, 935
  */
 export function barycentricTime(

@@ -49,7 +49,7 @@ export function newOrientation(): Orientation {
  *   ut1  [d from J2000.0 UT1]  scalar; UTC serves to 0.9 s
  *   tt   [d from J2000.0 TT]   scalar
  *   out                        to fill
- * Accuracy  0.03 arcsec from 1970 to 2040; test/kernel/earthOrientation.test.ts
+ * Accuracy  0.05 arcsec from 1970 to 2040; test/kernel/earth.test.ts
  * Source    Hilton et al. 2006, Celest. Mech. 94, 351 (precession angles); McCarthy & Luzum 2003, Celest. Mech. 85, 37
  *           (nutation); Capitaine et al. 2003, A&A 406, 1135 (sidereal time)
  */

@@ -19,7 +19,7 @@ const cosines = Float64Array.from({ length: steps }, (_, k) => cos(k * step));
  *   out                        six numbers to fill
  * Returned  out = x, y, z [m], then their rates [m/s]; NaN outside the domain
  * Accuracy  1.4 mm/s and 1.4 km against the series it is fitted to, which itself is 5 mm/s and 13 km from a numerical
- *           ephemeris at most; test/kernel/earthState.test.ts
+ *           ephemeris at most; test/kernel/earth.test.ts
  * Source    fit to epv00 of ERFA, made by earthSeries.py
  */
 export function earthState(tdb: number, out: Float64Array): void {

@@ -15,7 +15,7 @@ const squash = (1 - flattening) * (1 - flattening);
  *   orientation                 of the Earth at the instant
  *   out                         six numbers to fill
  * Returned  out = x, y, z [m], then their rates [m/s]
- * Accuracy  1 mm/s and 10 m; test/kernel/barycentricSpeed.test.ts
+ * Accuracy  1 mm/s and 10 m; test/kernel/barycentric.test.ts
  * Source    NGA.STND.0036 (WGS 84)
  */
 export function siteState(

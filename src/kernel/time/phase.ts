@@ -33,6 +33,12 @@ export function wholePeriods(time: number, period: number, reference: number): n
   return periods - whole < 1 ? whole : whole + 1;
 }
 
+/** What is left of periods when whole ones are taken off; 0 where it misses 0 by a rounding. */
+export function partOf(periods: number, turns: number): number {
+  const part = periods - turns;
+  return part < 0 && part > -Number.EPSILON ? 0 : part;
+}
+
 /**
  * Phase: the part of a period that has passed since the last whole one.
  *
@@ -42,7 +48,7 @@ export function wholePeriods(time: number, period: number, reference: number): n
  *   reference  [d from J2000.0]  scalar: an instant of phase 0, in the scale of the time
  *   turns      [1]               scalar: whole periods taken off, those that have passed where left out
  * Returned  [1], 0 <= phase < 1 for the whole periods that have passed; NaN outside the domain
- * Accuracy  that of the instants over the period; test/kernel/phase.test.ts
+ * Accuracy  that of the instants over the period; test/kernel/kepler.test.ts
  * Source    definition
  */
 export function phase(
@@ -51,7 +57,7 @@ export function phase(
   reference: number,
   turns: number = wholePeriods(time, period, reference),
 ): number {
-  return periodsBetween(time, period, reference) - turns;
+  return partOf(periodsBetween(time, period, reference), turns);
 }
 
 /** `phase` of the first `rows` entries, to the same bits. */
