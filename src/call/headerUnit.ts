@@ -28,5 +28,8 @@ export function headerUnit(input: string, header: HeaderCell | undefined, hours 
     at: { place: "header", header },
     unit: reading.problem,
   };
-  return { header, unit: hours ? angleOf(reading.unit) : reading.unit, problem };
+  if (!hours) return { header, unit: reading.unit, problem };
+  // "RA" alone heads a column of right ascensions rather than one of ronnaamperes.
+  const unit = header.text.trim() === "RA" ? undefined : angleOf(reading.unit);
+  return { header, unit, problem };
 }
