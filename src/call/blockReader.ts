@@ -10,6 +10,7 @@ import { quote } from "./explain.js";
 import type { InputColumns } from "./inputColumns.js";
 import { isWithin, type OpenRange, openRange, rangeProblem } from "./range.js";
 import { type CellReading, fits, readCell, valueText } from "./readCell.js";
+import { readSigma } from "./readSigma.js";
 import { zeroOfDate } from "./zeroOfDate.js";
 
 /** Rows are read in blocks of this many, so that what one block needs stays in the processor's cache. */
@@ -120,19 +121,19 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
 
   /** Reads what stands beside a value, in its own header's unit or else in that of the value. */
   function readSigmas(row: number, unit: Unit, value: number, at: number, report: Report): void {
-    const first = readSigma(0, row, unit, value, at, report);
-    const last = sigmaColumns.length > 1 ? readSigma(1, row, unit, value, at, report) : first;
+    const first = sigmaAt(0, row, unit, value, at, report);
+    const last = sigmaColumns.length > 1 ? sigmaAt(1, row, unit, value, at, report) : first;
     setSigma(row, first, last, sigmaColumns.length);
   }
 
-  function readSigma(index: number, row: number, unit: Unit, value: number, at: number, report: Report): number {
+  function sigmaAt(index: number, row: number, unit: Unit, value: number, at: number, report: Report): number {
     const header = sigmaHeaders[index]!;
     const cell = cellAt(sigmaColumns[index]!, at);
     const own = header.unit ?? unit;
     if (typeof cell === "number" && !header.problem && fits(own, quantity.kind)) {
       return Math.abs(cell) * baseSlope(own, value);
     }
-    const reading = readCell(`uncertainty of ${input.name}`, cell, { ...header, unit: own }, { kind: quantity.kind });
+    const reading = readSigma(input.name, cell, header, unit);
     if (reading instanceof CellError || "about" in reading) {
       report.sigma(row, reading);
       return 0;

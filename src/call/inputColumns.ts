@@ -8,6 +8,7 @@ import { type Column, cellAt } from "./column.js";
 import { quote } from "./explain.js";
 import { type HeaderUnit, headerUnit, noHeader } from "./headerUnit.js";
 import { fits } from "./readCell.js";
+import { fitsSigma } from "./readSigma.js";
 
 /** The cells one input was given, with what their headers say; no columns where the input was left out. */
 export interface InputColumns {
@@ -144,9 +145,10 @@ function headerOfAnotherColumn(
 /** Whether every unit that is stated is of the kind of its input; headers of omitted inputs do not count. */
 function agrees(way: HeaderAssignment, inputs: readonly Input[], widths: readonly number[]): boolean {
   return inputs.every((input, index) =>
-    way[index]!.slice(0, widths[index]).every((header) => {
+    way[index]!.slice(0, widths[index]).every((header, column) => {
       const unit = header && headerUnit(input.name, header, countsHours(input)).unit;
-      return !unit || fits(unit, input.takes === "quantity" ? input.quantity.kind : undefined);
+      const kind = input.takes === "quantity" ? input.quantity.kind : undefined;
+      return !unit || fits(unit, kind) || (column > 0 && fitsSigma(unit, kind));
     }),
   );
 }

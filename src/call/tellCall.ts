@@ -10,6 +10,7 @@ import { headerCells } from "./headerCells.js";
 import { noHeader } from "./headerUnit.js";
 import { callInputs, type InputColumns } from "./inputColumns.js";
 import { type CellReading, readCell } from "./readCell.js";
+import { readSigma } from "./readSigma.js";
 import { orderedCall } from "./repeatedCall.js";
 
 /** One call of one row told in full: what went in, by which formula, what came out, and whose doubt it carries. */
@@ -100,9 +101,7 @@ function told({ input, columns, headers }: InputColumns): Untold {
   }
   const value = toBaseOf(reading.unit, reading.value, reading.digits);
   const sigmas = columns.slice(1).map((column, index) => {
-    const header = beside[index] ?? noHeader;
-    const unit = header.unit ?? reading.unit;
-    const sigma = readCell(input.name, cellAt(column, 0), { ...header, unit }, wanted && { kind: wanted.kind });
+    const sigma = readSigma(input.name, cellAt(column, 0), beside[index] ?? noHeader, reading.unit);
     return sigma instanceof CellError || "about" in sigma
       ? undefined
       : (Math.abs(sigma.value) * baseSlope(sigma.unit, value)) / baseSlope(reading.unit, value);

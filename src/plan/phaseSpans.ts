@@ -53,7 +53,7 @@ export function phaseSpans(
   const spans: Span[] = [];
   for (let turn = Math.ceil((within.from - reach - zero) / period); ; turn++) {
     const middle = zero + turn * period;
-    if (middle - reach >= within.to) return spans;
+    if (!(middle - reach < within.to)) return spans;
     spans.push({ from: Math.max(middle - reach, within.from), to: Math.min(middle + reach, within.to) });
   }
 }

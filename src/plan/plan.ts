@@ -2,7 +2,8 @@ import { nearest } from "../units/nearest.js";
 import { type Choice, chooseSteps, type Infeasible } from "./choose.js";
 import type { Limits } from "./limits.js";
 import type { PlanRow, PlanTable } from "./planTable.js";
-import { type Schedule, scheduleSteps } from "./schedule.js";
+import { outlookSteps, type Schedule, scheduleSteps, unreachable } from "./schedule.js";
+import type { Shortfall } from "./shortfall.js";
 import type { Site } from "./site.js";
 import { tellInfeasible } from "./tellChoice.js";
 import type { Steps } from "./watch.js";
@@ -28,6 +29,8 @@ export interface Plan {
   /** The chosen rows, in the order of the table; the targets of the schedule. */
   readonly chosen: readonly PlanRow[];
   readonly schedule: Schedule;
+  /** Rows that were not offered to the choice because their visits do not fit into the dates; places in the table. */
+  readonly unreachable: readonly Shortfall[];
 }
 
 /** Why there is no plan: a name that means no target, or more wishes than hours. */
@@ -36,20 +39,28 @@ export interface NoPlan {
   readonly problem: string;
 }
 
-/** Chooses, then lays the visits; a sentence where the wish cannot be granted, and which constraint to relax. */
+/**
+ * Leaves out the targets that cannot have all their visits in these dates, chooses of the others, then lays the visits; a
+ * sentence where the wish cannot be granted, and which constraint to relax.
+ */
 export function* planSteps(request: PlanRequest): Steps<Plan | NoPlan> {
   const { table, budget, site, from, to, limits } = request;
   const must = placesOf(table, request.must, "has to be in");
   const excluded = placesOf(table, request.excluded, "is excluded");
   const problem = [...must.problems, ...excluded.problems, ...contradictions(table, must.places, excluded.places)];
   if (problem.length > 0) return { about: "names", problem: problem.join(" ") };
-  const wish = { candidates: table.rows, budget, must: must.places, excluded: excluded.places };
+  const everything = { targets: table.rows.map(({ planned }) => planned), site, from, to, limits };
+  const beyond = unreachable(yield* outlookSteps(everything), everything).filter(
+    ({ target }) => !must.places.has(target),
+  );
+  const left = new Set([...excluded.places, ...beyond.map(({ target }) => target)]);
+  const wish = { candidates: table.rows, budget, must: must.places, excluded: left };
   const choice: Choice | Infeasible = yield* chooseSteps(wish);
   if (!choice.feasible) return { about: "hours", problem: tellInfeasible(choice, table.rows) };
   const chosen = choice.chosen.map((index) => table.rows[index]!);
   const targets = chosen.map(({ planned }) => planned);
   const schedule = yield* scheduleSteps({ targets, site, from, to, limits });
-  return { table, choice, chosen, schedule };
+  return { table, choice, chosen, schedule, unreachable: beyond };
 }
 
 /** Every row of each name; a name that is in no row is told, and so is one whose row cannot be planned. */

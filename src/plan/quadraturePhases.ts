@@ -10,6 +10,7 @@ import { meanAnomalyAt, meanAnomalyAtTransit } from "../kernel/orbit/radialVeloc
  * Returned  [1], 0 <= phase < 1: 1/4 and 3/4 for a circle
  */
 export function quadraturePhases(eccentricity: number, omega: number): readonly number[] {
+  if (eccentricity === 0) return [0.25, 0.75];
   const transit = meanAnomalyAtTransit(eccentricity, omega);
   const low = meanAnomalyAt(sin(omega), -cos(omega), eccentricity);
   const high = meanAnomalyAt(-sin(omega), cos(omega), eccentricity);

@@ -30,24 +30,45 @@ export interface ScheduleRequest {
   readonly limits: Limits;
 }
 
-/**
- * Lays visits on dates. Night by night, the target with the fewest spare nights comes first, then the one that is worth
- * more, then the one that comes earlier in the table; each visit stands beside what is laid already, nearest to the
- * target's highest point, at the phase that had fewest visits. No limit is ever broken; the same request gives the same
- * schedule. It is no optimum: a visit once laid is not moved for another.
- */
-export function* scheduleSteps({ targets, site, from, to, limits }: ScheduleRequest): Steps<Schedule> {
+/** Every night, and when each target can be visited in it. */
+export interface Outlook {
+  readonly nights: readonly Night[];
+  readonly opportunities: readonly Opportunities[];
+}
+
+/** The first half of a schedule, before anything is laid. */
+export function* outlookSteps({ targets, site, from, to, limits }: ScheduleRequest): Steps<Outlook> {
   const lowest = altitudeOfAirmass(limits.airmass);
   const first = Math.floor(from + 0.5) - 0.5;
   const count = Math.max(0, Math.floor(to + 0.5) - 0.5 - first + 1);
   const nights: Night[] = [];
-  const opportunities: Opportunities[] = targets.map(opportunitiesOf);
+  const opportunities = targets.map(opportunitiesOf);
   for (let index = 0; index < count; index++) {
     const night = nightOf(first + index, site, limits.sunBelow);
     nights.push(night);
     for (const target of opportunities) noteNight(target, night, site, lowest, limits);
     yield { done: index + 1, total: 2 * count };
   }
+  return { nights, opportunities };
+}
+
+/** Targets that cannot have all their visits, even if no other target took their time. */
+export function unreachable({ opportunities }: Outlook, { limits }: ScheduleRequest): Shortfall[] {
+  return opportunities.flatMap((one, index) =>
+    one.nightsInPhase * limits.perNight < one.target.visits ? (shortfallOf(one, index, limits) ?? []) : [],
+  );
+}
+
+/**
+ * Lays visits on dates. Night by night, the target with the fewest spare nights comes first, then the one that is worth
+ * more, then the one that comes earlier in the table; each visit stands beside what is laid already, nearest to the
+ * target's highest point, at the phase that had fewest visits. No limit is ever broken; the same request gives the same
+ * schedule. It is no optimum: a visit once laid is not moved for another.
+ */
+export function* scheduleSteps(request: ScheduleRequest): Steps<Schedule> {
+  const { targets, site, limits } = request;
+  const { nights, opportunities } = yield* outlookSteps(request);
+  const count = nights.length;
   const visits: Visit[] = [];
   for (let index = 0; index < count; index++) {
     visits.push(...new NightPlan(nights[index]!, index, site, limits, opportunities).fill());

@@ -5,7 +5,7 @@ import { hoursText } from "./tellChoice.js";
 /** What was laid, in one sentence. */
 export function tellSchedule({ visits, hours, nights, darkHours, shortfalls }: Schedule, targets: number): string {
   const reached = targets - shortfalls.length;
-  return `${visits.length} visits in ${hoursText(hours)} on ${nights} nights with ${hoursText(darkHours)} of darkness; ${reached} of ${targets} targets have all their visits.`;
+  return `${visits.length} ${visits.length === 1 ? "visit" : "visits"} in ${hoursText(hours)}; ${nightsText(nights)} with ${hoursText(darkHours)} of darkness; ${reached} of ${targets} targets have all their visits.`;
 }
 
 /** A target that has fewer visits than it needs, why, and what would help. */

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { CellError } from "../../src/call/cell.js";
+import { type Cell, CellError } from "../../src/call/cell.js";
 import type { RowArgument } from "../../src/call/cellFunction.js";
 import { cellsOf, columnOf } from "../../src/call/column.js";
 import { argumentOf, call, column, errorFrom, functionNamed, type Given, headerRow, numberFrom } from "./door.js";
@@ -233,4 +233,40 @@ test("the headers of catalogues are read", () => {
   );
   const error = errorFrom("BARYTIME", 2459001.5, 197, -30, -70.7, -29.3, 2400, headers);
   expect(error.message).toContain("the clock of the site is needed");
+});
+
+describe("the uncertainty of an instant is a time that passes", () => {
+  // sigma^2 = sigma_T0^2 + (1000 sigma_P)^2: 0.0002 d, 3.8e-7 d, computed with mpmath.
+  const expected = 4.29418211e-4;
+  const event = (sigma: Cell, headers: string) =>
+    call(
+      "EVENT",
+      "transit",
+      "2462996 BJD_TDB",
+      [[4, 3.8e-7]],
+      [[2459000, sigma]],
+      undefined,
+      undefined,
+      undefined,
+      headers,
+    )[0] as [number, number];
+
+  test.each([
+    [0.0002, "after; P [d]; e_P [d]; T0 [BJD_TDB]; e_T0 [d]"],
+    [0.0002 * 86400, "after; P [d]; e_P [d]; T0 [BJD_TDB]; e_T0 [s]"],
+    [0.0002 * 1440, "after; P [d]; e_P [d]; T0 [BJD_TDB]; e_T0 [min]"],
+    [0.0002, "after; P [d]; e_P [d]; T0 [BJD_TDB]; e_T0 [BJD_TDB]"],
+    [0.0002, "after; P [d]; e_P [d]; T0 [BJD_TDB]; e_T0"],
+    ["0.0002 d", "after; P [d]; e_P [d]; T0 [BJD_TDB]; e_T0"],
+    [0.0002, "after; P [d]; T0 [BJD_TDB]"],
+  ])("%s under %s", (sigma, headers) => {
+    expect(Math.abs(event(sigma, headers)[1] / expected - 1)).toBeLessThan(1e-7);
+  });
+
+  test("so it converts with its instant", () => {
+    expect(call("INTO", [[2459000.5, 1.2]], "T0 [BJD_TDB]; e_T0 [min]", "BJD_TDB-2450000")[0]).toEqual([
+      9000.5,
+      expect.closeTo(1.2 / 1440, 15),
+    ]);
+  });
 });

@@ -3,6 +3,7 @@ import type { Quantity } from "../../functions/quantity.js";
 import type { Limits } from "../../plan/limits.js";
 import type { PlanWish } from "../../plan/planTable.js";
 import { readOption } from "../../plan/readOption.js";
+import { readInstant } from "../../units/readInstant.js";
 import { type CommandLine, optionValue } from "./commandLine.js";
 import { UsageProblem } from "./usageProblem.js";
 
@@ -26,8 +27,8 @@ export function planOptions(line: CommandLine): PlanOptions {
   };
   const given = (name: string) => (line.options.get(name) ?? []).map(([text]) => text!);
   const day = 86400;
-  const from = readNamed("--from", quantity.night, needed("--from", "2027-02-01"));
-  const to = readNamed("--to", quantity.night, needed("--to", "2027-07-31"));
+  const from = readDate("--from", needed("--from", "2027-02-01"));
+  const to = readDate("--to", needed("--to", "2027-07-31"));
   if (to < from) throw new UsageProblem("--to lies before --from; give the first night first.");
   return {
     wish: {
@@ -58,6 +59,14 @@ function readNamed(name: string, one: Quantity, text: string): number {
   const read = readOption({ ...one, name }, text);
   if (typeof read !== "number") throw new UsageProblem(read.problem);
   return read;
+}
+
+/** The ephemeris and the leap seconds reach from 1972 to 2035. */
+function readDate(name: string, text: string): number {
+  const date = /^\d{4}-\d\d-\d\d$/.test(text) ? readInstant(text)?.value : undefined;
+  const { lower, upper } = quantity.night;
+  if (date !== undefined && date >= lower!.at && date < upper!.at - 1) return date;
+  throw new UsageProblem(`${name} is "${text}"; it is a date from 1972-01-01 to 2035-12-30, for example 2027-02-01.`);
 }
 
 function readHours(text: string): number {

@@ -54,7 +54,7 @@ export function upSpans(
   const spans: Span[] = [];
   for (let turn = first; ; turn++) {
     const middle = highest + turn * siderealDay;
-    if (middle - reach >= within.to) return spans;
+    if (!(middle - reach < within.to)) return spans;
     spans.push({ from: Math.max(middle - reach, within.from), to: Math.min(middle + reach, within.to) });
   }
 }

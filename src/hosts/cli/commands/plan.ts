@@ -22,8 +22,8 @@ import { prepareFile } from "../writeFile.js";
 const help = `barycell plan TABLE.csv --hours HOURS --from DATE --to DATE --site SITE --value HEADER [...]
 
 Chooses the targets whose values sum to the most within a number of hours, and lays their visits on dates: in the
-dark, within the airmass limit, near the phases wanted. The choice is exact; the schedule keeps every limit, and is no
-optimum. Columns are recognised by their headers and units: RA, dec, period and reference time (BJD_TDB) with their
+dark, within the airmass limit, near the phases wanted. The choice is exact, of targets whose visits fit into the dates;
+the schedule keeps every limit, and is no optimum. Columns are recognised by their headers and units: RA, dec, period and reference time (BJD_TDB) with their
 uncertainties, visits, exposure, overhead, hours, eccentricity, omega. TABLE.csv may be - for standard input.
 
   --hours HOURS          telescope time there is
@@ -46,7 +46,7 @@ uncertainties, visits, exposure, overhead, hours, eccentricity, omega. TABLE.csv
   --out OUT.csv          write the visits there instead of to standard output
   --summary FILE         write the summary there instead of to standard error
   --json                 write choice, visits and what was left out as JSON
-  --strict               exit 1 if a target lacks visits or a row cannot be planned
+  --strict               exit 1 if a chosen target lacks visits or a row cannot be planned
   --force, --delimiter NAME, --units-row yes|no   as for barycell fill
 
 Exit code 1 also where the targets that have to be in need more hours than there are.
