@@ -1,4 +1,5 @@
 import { benchFill } from "./fill.js";
+import { benchPlan } from "./plan.js";
 import { benchReflex } from "./reflex.js";
 import { benchSheet } from "./sheet.js";
 
@@ -6,6 +7,7 @@ import { benchSheet } from "./sheet.js";
 const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
   fill: benchFill,
+  plan: benchPlan,
   sheet: () => benchSheet((line) => void process.stdout.write(`${line}\n`)),
 };
 

@@ -23,8 +23,9 @@ const help = `barycell plan TABLE.csv --hours HOURS --from DATE --to DATE --site
 
 Chooses the targets whose values sum to the most within a number of hours, and lays their visits on dates: in the
 dark, within the airmass limit, near the phases wanted. The choice is exact, of targets whose visits fit into the dates;
-the schedule keeps every limit, and is no optimum. Columns are recognised by their headers and units: RA, dec, period and reference time (BJD_TDB) with their
-uncertainties, visits, exposure, overhead, hours, eccentricity, omega. TABLE.csv may be - for standard input.
+the schedule keeps every limit, and is no optimum.
+Columns are recognised by their headers and units: RA, dec, period and reference time (BJD_TDB) with uncertainties,
+visits, exposure, overhead, hours, eccentricity, omega. TABLE.csv may be - for standard input.
 
   --hours HOURS          telescope time there is
   --from DATE --to DATE  evenings of the first and of the last night, 2027-02-01
