@@ -2,6 +2,10 @@ import { cubeRoot } from "../cubeRoot.js";
 import { isEccentricity } from "../domain.js";
 
 const piSquared = Math.PI * Math.PI;
+const first = (3 * piSquared) / (piSquared - 6);
+const second = (1.6 * Math.PI) / (piSquared - 6);
+const twelfth = 1 / 12;
+const twentieth = 1 / 20;
 
 /**
  * Eccentric anomaly: the root of Kepler's equation.
@@ -51,7 +55,7 @@ export function solveKepler(meanAnomaly: number, eccentricity: number, out: Floa
 }
 
 function cubicStart(m: number, e: number): number {
-  const alpha = (3 * piSquared + (1.6 * Math.PI * (Math.PI - m)) / (1 + e)) / (piSquared - 6);
+  const alpha = first + (second * (Math.PI - m)) / (1 + e);
   const d = 3 * (1 - e) + alpha * e;
   const q = 2 * alpha * d * (1 - e) - m * m;
   const r = (3 * alpha * d * (d - 1 + e) + m * m) * m;
@@ -104,12 +108,11 @@ function polish(start: number, m: number, e: number, out: Float64Array): void {
   const f = (1 - e) * start + e * lag - m;
   const f1 = 1 - e + e * rise;
   const f2 = (e * (start - lag)) / 2;
-  const f3 = (e * (1 - rise)) / 6;
-  const newton = -f / f1;
-  const halley = -f / (f1 + newton * f2);
-  const x = -f / (f1 + halley * (f2 + halley * f3));
-  const f4 = f2 / -12;
-  const f5 = f3 / -20;
+  const f3 = e * (1 - rise) * l3;
+  // Halley's step leaves a part in a billion; Newton's on the Taylor series the square of that.
+  const x = (-f * f1) / (f1 * f1 - f * f2);
+  const f4 = -f2 * twelfth;
+  const f5 = -f3 * twentieth;
   const value = f + x * (f1 + x * (f2 + x * (f3 + x * (f4 + x * f5))));
   const slope = f1 + x * (2 * f2 + x * (3 * f3 + x * (4 * f4 + x * 5 * f5)));
   const d = x - value / slope;
