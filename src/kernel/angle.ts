@@ -55,6 +55,13 @@ function cosineNear0(z: number): number {
   return 1 - z * (0.5 - z * (c4 - z * (c6 - z * (c8 - z * (c10 - z * (c12 - z * (c14 - z * c16)))))));
 }
 
+const t3 = 1 / 3;
+const t5 = 1 / 5;
+const t7 = 1 / 7;
+const t9 = 1 / 9;
+const t11 = 1 / 11;
+const t13 = 1 / 13;
+
 /** Arc tangents of k/8. */
 const eighths = Float64Array.of(
   0,
@@ -80,15 +87,17 @@ const eighths = Float64Array.of(
  * Source    Taylor's series and the addition theorem
  */
 export function atan2(y: number, x: number): number {
-  const [tall, wide] = [Math.abs(y), Math.abs(x)];
+  const tall = Math.abs(y);
+  const wide = Math.abs(x);
   const steep = tall > wide;
-  const [small, large] = steep ? [wide, tall] : [tall, wide];
+  const small = steep ? wide : tall;
+  const large = steep ? tall : wide;
   if (large === 0) return 0;
   const k = Math.round((small / large) * 8);
   const c = k / 8;
   const u = (small - large * c) / (large + small * c);
   const z = u * u;
-  const rest = u - u * z * (1 / 3 - z * (1 / 5 - z * (1 / 7 - z * (1 / 9 - z * (1 / 11 - z * (1 / 13))))));
+  const rest = u - u * z * (t3 - z * (t5 - z * (t7 - z * (t9 - z * (t11 - z * t13)))));
   const octant = eighths[k]! + rest;
   const quadrant = steep ? quarterTurn - octant : octant;
   const half = x < 0 ? Math.PI - quadrant : quadrant;

@@ -2,6 +2,10 @@ import { cubeRoot } from "../cubeRoot.js";
 import { isEccentricity } from "../domain.js";
 
 const piSquared = Math.PI * Math.PI;
+const first = (3 * piSquared) / (piSquared - 6);
+const second = (1.6 * Math.PI) / (piSquared - 6);
+const twelfth = 1 / 12;
+const twentieth = 1 / 20;
 
 /**
  * Eccentric anomaly: the root of Kepler's equation.
@@ -22,16 +26,36 @@ const piSquared = Math.PI * Math.PI;
  *           Celestial Mechanics, for the step
  */
 export function eccentricAnomaly(meanAnomaly: number, eccentricity: number): number {
+  solveKepler(meanAnomaly, eccentricity, place);
+  return place[0]!;
+}
+
+const place = new Float64Array(3);
+
+/**
+ * `eccentricAnomaly` with what follows from it on the way.
+ *
+ * Returned  out = E [rad], sin E, 1 - cos E, these two to the rounding of E; all NaN outside the domain
+ */
+export function solveKepler(meanAnomaly: number, eccentricity: number, out: Float64Array): void {
   const m = Math.abs(meanAnomaly);
-  const e = eccentricity;
-  if (!(m <= Math.PI && isEccentricity(e))) return Number.NaN;
-  if (e === 0 || m === 0) return meanAnomaly;
-  const anomaly = polished(cubicStart(m, e), m, e);
-  return meanAnomaly < 0 ? -anomaly : anomaly;
+  if (!(m <= Math.PI && isEccentricity(eccentricity))) {
+    out[0] = out[1] = out[2] = Number.NaN;
+    return;
+  }
+  if (m === 0) {
+    out[0] = meanAnomaly;
+    out[1] = out[2] = 0;
+    return;
+  }
+  polish(eccentricity === 0 ? m : cubicStart(m, eccentricity), m, eccentricity, out);
+  if (meanAnomaly >= 0) return;
+  out[0] = -out[0]!;
+  out[1] = -out[1]!;
 }
 
 function cubicStart(m: number, e: number): number {
-  const alpha = (3 * piSquared + (1.6 * Math.PI * (Math.PI - m)) / (1 + e)) / (piSquared - 6);
+  const alpha = first + (second * (Math.PI - m)) / (1 + e);
   const d = 3 * (1 - e) + alpha * e;
   const q = 2 * alpha * d * (1 - e) - m * m;
   const r = (3 * alpha * d * (d - 1 + e) + m * m) * m;
@@ -71,7 +95,7 @@ const v24 = 1 / 6.204484017332394e23;
 const v26 = 1 / 4.0329146112660565e26;
 
 /** The root near `start`: the equation and its derivatives are taken there once, the rest is their Taylor series. */
-function polished(start: number, m: number, e: number): number {
+function polish(start: number, m: number, e: number, out: Float64Array): void {
   const z = start * start;
   const y = z * z;
   // E - sin E and 1 - cos E; even and odd powers apart, so that a processor works on four sums at once.
@@ -84,15 +108,22 @@ function polished(start: number, m: number, e: number): number {
   const f = (1 - e) * start + e * lag - m;
   const f1 = 1 - e + e * rise;
   const f2 = (e * (start - lag)) / 2;
-  const f3 = (e * (1 - rise)) / 6;
-  const newton = -f / f1;
-  const halley = -f / (f1 + newton * f2);
-  const x = -f / (f1 + halley * (f2 + halley * f3));
-  const f4 = f2 / -12;
-  const f5 = f3 / -20;
+  const f3 = e * (1 - rise) * l3;
+  // Halley's step leaves a part in a billion; Newton's on the Taylor series the square of that.
+  const x = (-f * f1) / (f1 * f1 - f * f2);
+  const f4 = -f2 * twelfth;
+  const f5 = -f3 * twentieth;
   const value = f + x * (f1 + x * (f2 + x * (f3 + x * (f4 + x * f5))));
   const slope = f1 + x * (2 * f2 + x * (3 * f3 + x * (4 * f4 + x * 5 * f5)));
-  return start + (x - value / slope);
+  const d = x - value / slope;
+  const d2 = d * d;
+  // Sine and 1 - cosine of start + d; d is small, a hundredth at most.
+  const sineOfD = d * (1 - d2 * (l3 - d2 * (l5 - d2 * l7)));
+  const riseOfD = d2 * (v2 - d2 * (v4 - d2 * v6));
+  const sine = start - lag;
+  out[0] = start + d;
+  out[1] = sine + (sineOfD * (1 - rise) - sine * riseOfD);
+  out[2] = rise + (riseOfD * (1 - rise) + sine * sineOfD);
 }
 
 /** `eccentricAnomaly` of the first `rows` entries, to the same bits. */

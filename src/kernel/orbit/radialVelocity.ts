@@ -1,7 +1,7 @@
 import { atan2, cos, sin } from "../angle.js";
 import { isEccentricity, isMagnitudeOrZero, isVelocity } from "../domain.js";
 import { periodsBetween } from "../time/phase.js";
-import { eccentricAnomaly } from "./eccentricAnomaly.js";
+import { solveKepler } from "./eccentricAnomaly.js";
 
 /** What took place at the reference time, as the number code the kernels take. */
 export const transit = 0;
@@ -16,23 +16,30 @@ const turn = 2 * Math.PI;
  */
 export function meanAnomalyAt(sine: number, cosine: number, eccentricity: number): number {
   const e = eccentricity;
-  const E = atan2(Math.sqrt((1 - e) * (1 + e)) * sine, e + cosine);
-  return E - e * sin(E);
+  const y = Math.sqrt((1 - e) * (1 + e)) * sine;
+  return atan2(y, e + cosine) - (e * y) / (1 + e * cosine);
 }
 
-let lastOmega = Number.NaN;
-let lastEccentricity = Number.NaN;
-let lastMean = Number.NaN;
+/** An orbit as it lies: rows below each other mostly share one. */
+const orbit = { omega: Number.NaN, eccentricity: Number.NaN, sine: Number.NaN, cosine: Number.NaN, mean: Number.NaN };
 
-/** Mean anomaly at transit, where nu + omega = 90 deg; rows below each other mostly share one orbit. */
-export function meanAnomalyAtTransit(eccentricity: number, omega: number): number {
-  if (omega !== lastOmega || eccentricity !== lastEccentricity) {
-    lastMean = meanAnomalyAt(cos(omega), sin(omega), eccentricity);
-    lastOmega = omega;
-    lastEccentricity = eccentricity;
+function orbitOf(eccentricity: number, omega: number): typeof orbit {
+  if (omega !== orbit.omega || eccentricity !== orbit.eccentricity) {
+    orbit.omega = omega;
+    orbit.eccentricity = eccentricity;
+    orbit.sine = sin(omega);
+    orbit.cosine = cos(omega);
+    orbit.mean = meanAnomalyAt(orbit.cosine, orbit.sine, eccentricity);
   }
-  return lastMean;
+  return orbit;
 }
+
+/** Mean anomaly at transit, where nu + omega = 90 deg. */
+export function meanAnomalyAtTransit(eccentricity: number, omega: number): number {
+  return orbitOf(eccentricity, omega).mean;
+}
+
+const place = new Float64Array(3);
 
 /**
  * Radial velocity of a star that one planet moves.
@@ -64,16 +71,16 @@ export function radialVelocity(
 ): number {
   if (!(isMagnitudeOrZero(amplitude) && isEccentricity(eccentricity) && Math.abs(omega) <= 100)) return Number.NaN;
   if (!(isVelocity(systemic) && (event === transit || event === periastron))) return Number.NaN;
-  const start = event === transit ? meanAnomalyAtTransit(eccentricity, omega) / turn : 0;
+  const { sine, cosine, mean } = orbitOf(eccentricity, omega);
   const periods = periodsBetween(time, period, reference);
-  const whole = Math.round(periods);
-  const part = periods - whole + start;
-  const E = eccentricAnomaly((part - Math.round(part)) * turn, eccentricity);
-  const s = Math.sqrt(1 + eccentricity) * sin(E / 2);
-  const c = Math.sqrt(1 - eccentricity) * cos(E / 2);
-  const r = s * s + c * c;
-  const cosine = cos(omega);
-  return systemic + amplitude * (((c - s) * (c + s) * cosine - 2 * s * c * sin(omega)) / r + eccentricity * cosine);
+  const part = periods - Math.round(periods) + (event === transit ? mean / turn : 0);
+  solveKepler((part - Math.round(part)) * turn, eccentricity, place);
+  const rise = place[2]!;
+  // Of the planet's distance 1 - e cos E: cos nu = (cos E - e) / r, sin nu = (1 - e^2)^(1/2) sin E / r.
+  const along = 1 - eccentricity - rise;
+  const across = Math.sqrt((1 - eccentricity) * (1 + eccentricity)) * place[1]!;
+  const distance = 1 - eccentricity + eccentricity * rise;
+  return systemic + amplitude * ((along * cosine - across * sine) / distance + eccentricity * cosine);
 }
 
 /** `radialVelocity` of the first `rows` entries, to the same bits. */

@@ -3,11 +3,15 @@ import { day } from "../constants.js";
 import { drift, firstDay, lastDay, movingTerms, steadyTerms } from "./earthSeries.js";
 
 const unit = 10000;
+const perUnit = 1 / unit;
 
 // A circle in steps: the sine and cosine of an angle are those of the nearest step, turned by the little that remains.
 const steps = 1024;
 const perRadian = steps / (2 * Math.PI);
 const step = (2 * Math.PI) / steps;
+const sixth = 1 / 6;
+const twentyFourth = 1 / 24;
+const hundredTwentieth = 1 / 120;
 const sines = Float64Array.from({ length: steps }, (_, k) => sin(k * step));
 const cosines = Float64Array.from({ length: steps }, (_, k) => cos(k * step));
 
@@ -20,7 +24,7 @@ const cosines = Float64Array.from({ length: steps }, (_, k) => cos(k * step));
  * Returned  out = x, y, z [m], then their rates [m/s]; NaN outside the domain
  * Accuracy  1.4 mm/s and 1.4 km against the series it is fitted to, which itself is 5 mm/s and 13 km from a numerical
  *           ephemeris at most; test/kernel/earth.test.ts
- * Source    fit to epv00 of ERFA, made by earthSeries.py
+ * Source    a fit of our own to epv00 of ERFA (Bretagnon & Francou, VSOP2000), made by earthSeries.py
  */
 export function earthState(tdb: number, out: Float64Array): void {
   if (!(tdb >= firstDay && tdb <= lastDay)) {
@@ -58,14 +62,12 @@ function addMoving(tdb: number, T: number, out: Float64Array): void {
     const k = Math.floor(place + 0.5);
     const r = (place - k) * step;
     const r2 = r * r;
-    const sr = r * (1 - r2 * (1 / 6 - r2 / 120));
-    const cr = 1 - r2 * (0.5 - r2 / 24);
+    const sr = r - r * r2 * (sixth - r2 * hundredTwentieth);
+    const cr = 1 - r2 * (0.5 - r2 * twentyFourth);
     const s0 = sines[k & (steps - 1)]!;
     const c0 = cosines[k & (steps - 1)]!;
     const s = s0 * cr + c0 * sr;
     const c = c0 * cr - s0 * sr;
-    const cu = c / unit;
-    const su = s / unit;
     const ax = moving[at + 1]! + moving[at + 3]! * T;
     const bx = moving[at + 2]! + moving[at + 4]! * T;
     const ay = moving[at + 5]! + moving[at + 7]! * T;
@@ -75,9 +77,9 @@ function addMoving(tdb: number, T: number, out: Float64Array): void {
     x += ax * c + bx * s;
     y += ay * c + by * s;
     z += az * c + bz * s;
-    vx += w * (bx * c - ax * s) + moving[at + 3]! * cu + moving[at + 4]! * su;
-    vy += w * (by * c - ay * s) + moving[at + 7]! * cu + moving[at + 8]! * su;
-    vz += w * (bz * c - az * s) + moving[at + 11]! * cu + moving[at + 12]! * su;
+    vx += w * (bx * c - ax * s) + perUnit * (moving[at + 3]! * c + moving[at + 4]! * s);
+    vy += w * (by * c - ay * s) + perUnit * (moving[at + 7]! * c + moving[at + 8]! * s);
+    vz += w * (bz * c - az * s) + perUnit * (moving[at + 11]! * c + moving[at + 12]! * s);
   }
   addTo(out, x, y, z, vx, vy, vz);
 }
@@ -96,8 +98,8 @@ function addSteady(tdb: number, out: Float64Array): void {
     const k = Math.floor(place + 0.5);
     const r = (place - k) * step;
     const r2 = r * r;
-    const sr = r * (1 - r2 * (1 / 6 - r2 / 120));
-    const cr = 1 - r2 * (0.5 - r2 / 24);
+    const sr = r - r * r2 * (sixth - r2 * hundredTwentieth);
+    const cr = 1 - r2 * (0.5 - r2 * twentyFourth);
     const s0 = sines[k & (steps - 1)]!;
     const c0 = cosines[k & (steps - 1)]!;
     const s = s0 * cr + c0 * sr;
