@@ -1,3 +1,4 @@
+import { quote } from "../call/explain.js";
 import type { TableColumn } from "../table/checkTable.js";
 import { recogniseColumn } from "../table/recogniseColumn.js";
 import { nearest } from "../units/nearest.js";
@@ -71,10 +72,15 @@ function placeOf(table: readonly TableColumn[], header: string): number | undefi
   return alike.length === 1 ? alike[0] : undefined;
 }
 
+/** As many as a message has room for. */
+const mostHeaders = 5;
+
 function unknownHeader(table: readonly TableColumn[], header: string): string {
   const headers = table.map((column) => column.header);
   const near = nearest(header, headers);
-  return `no column is headed "${header}"; ${near ? `did you mean "${near}"?` : `there are ${headers.map((one) => `"${one}"`).join(", ")}.`}`;
+  const there = headers.slice(0, mostHeaders).map((one) => quote(one));
+  const more = headers.length > mostHeaders ? ` and ${headers.length - mostHeaders} more` : "";
+  return `no column is headed ${quote(header)}; ${near ? `did you mean ${quote(near)}?` : `there are ${there.join(", ")}${more}.`}`;
 }
 
 const nameWords = /^(target|name|star|planet|object|host|system|id)\b/i;
