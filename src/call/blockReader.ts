@@ -73,6 +73,12 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
       return;
     }
     if (frames) frames[row] = undefined;
+    if (quantity.zeroIsBlank && cell === 0 && header.unit) {
+      base[row] = Number.NaN;
+      report.value(row, { about: "zero for blank", input: input.name, unit: header.unit });
+      if (sigmaColumns.length > 0) setSigma(row, 0, 0, sigmaColumns.length);
+      return;
+    }
     const reading = readCell(input.name, cell, header, quantity);
     if (reading instanceof CellError || "about" in reading) {
       base[row] = Number.NaN;
@@ -149,7 +155,8 @@ export function quantityReader(cells: InputColumns, input: QuantityInput, size: 
         if (!isWithin(range, base[row]!)) readOther(row, cellAt(column!, from + row), from + row, report);
       }
     }
-    for (let row = 0; assumed && row < rows; row++) if (numbers[from + row] === 0) assume(row);
+    if (!assumed && !quantity.zeroIsBlank) return;
+    for (let row = 0; row < rows; row++) if (numbers[from + row] === 0) readOther(row, 0, from + row, report);
   }
 
   function read(from: number, rows: number, report: Report): void {

@@ -60,6 +60,7 @@ export type CallProblem =
       readonly bound: Bound;
       readonly side: "lower" | "upper";
     }
+  | { readonly about: "zero for blank"; readonly input: string; readonly unit: Unit }
   | { readonly about: "zero or blank"; readonly input: string; readonly bound: Bound }
   | {
       readonly about: "beyond numbers";

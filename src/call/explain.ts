@@ -41,6 +41,8 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
       return `${problem.input} is ${problem.value}; it must be ${boundPhrase(problem)}, because ${problem.bound.reason}; for example ${exampleOf(definition, problem.input)}.`;
     case "zero or blank":
       return `${problem.input} is 0 or blank; it must be above 0, because ${problem.bound.reason}; for example ${exampleOf(definition, problem.input)}.`;
+    case "zero for blank":
+      return `${problem.input} is 0 or blank; ${kindOfInput(definition, problem.input)} is needed, for example ${exampleOf(definition, problem.input)}; for a true 0 type "0 ${problem.unit.text}".`;
     case "beyond numbers":
       return problem.asked
         ? `${problem.input} is ${problem.value}, which no number can hold in ${problem.asked.text}; ask for another unit.`

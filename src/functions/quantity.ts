@@ -23,6 +23,11 @@ export interface Quantity {
   readonly sexagesimal?: "hours" | "degrees";
   /** An instant that the computation takes in this frame, "JD_UTC"; without one, it is in that of the other instants. */
   readonly frame?: string;
+  /**
+   * A cell that holds the number 0 is taken for a blank one, which a worksheet may hand over so, and refused: its range
+   * includes 0, and a true 0 is typed with its unit.
+   */
+  readonly zeroIsBlank?: true;
   readonly lower: Bound | undefined;
   readonly upper: Bound | undefined;
   /** Unit of its columns, in which examples are given. */

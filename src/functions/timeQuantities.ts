@@ -12,6 +12,7 @@ export const time: Quantity = {
   name: "time",
   meaning: "instant of an observation",
   kind: "instant",
+  zeroIsBlank: true,
   lower: atLeast(longAgo, "1800-01-01", noSuchDate),
   upper: below(farOff, "2200-01-01", noSuchDate),
   unit: "BJD_TDB",

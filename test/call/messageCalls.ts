@@ -314,6 +314,12 @@ export const messageCalls: readonly MessageCall[] = [
     ["BARYTIME", "2459001.5 JD_UTC", 197, "-30:00:00", ...target.slice(2), siteHeaders("", "deg", "dec [h:m:s]")],
   ),
   ...about(
+    "zero for blank",
+    ["PHASE", 9001.5, "4 d", 0, "BJD_TDB-2450000; ; BJD_TDB-2450000"],
+    ["BARYTIME", "2459001.5 JD_UTC", 0, "-30 deg", ...target.slice(2), siteHeaders("", "RA [h]")],
+    ["BARYTIME", "2459001.5 JD_UTC", "197 deg", "-30 deg", "1 deg", "2 deg", [[0], [0]], "; ; ; ; ; m"],
+  ),
+  ...about(
     "needed",
     ["RVAT", "2459001.5 BJD_TDB", "4 d", "50 m/s", "2459000.5 BJD_TDB", 0.3],
     ["RVAT", "2459001.5 BJD_TDB", "4 d", "50 m/s", "2459000.5 BJD_TDB", 0.3, 0, undefined, undefined, "; ; ; ; ; deg"],

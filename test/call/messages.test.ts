@@ -36,6 +36,7 @@ const topics: Record<CallProblem["about"], true> = {
   "no unit stated": true,
   "unknown name": true,
   count: true,
+  "zero for blank": true,
   "count of columns": true,
   needed: true,
   "two frames": true,

@@ -221,6 +221,12 @@ describe("an omega that is blank", () => {
   });
 });
 
+test("a true 0 is typed with its unit", () => {
+  const greenwich = ["2018-06-10T01:30:00", "285.5 deg", "0 deg", "0 deg", "51.5 deg", "0 m"] as const;
+  expect(numberFrom("BARYTIME", ...greenwich)).toBeGreaterThan(2458279.5);
+  expect(numberFrom("PHASE", "2450001 BJD_TDB", "4 d", "0 BJD_TDB-2450000")).toBe(0.25);
+});
+
 test("the headers of catalogues are read", () => {
   const headers = headerRow(
     "A$1",

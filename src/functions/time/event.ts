@@ -30,7 +30,7 @@ export const event: NumberDefinition = {
         { word: "periastron", meaning: "star and planet are closest" },
       ],
     },
-    required(quantity.time, "after"),
+    required({ ...quantity.time, meaning: "instant after which to look" }, "after"),
     required(quantity.period),
     required(quantity.referenceTime),
     orbitEccentricity,
