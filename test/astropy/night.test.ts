@@ -4,9 +4,10 @@ import { expect, test } from "vitest";
 import { altitude } from "../../src/kernel/night/altitude.js";
 import { moonDistance } from "../../src/kernel/night/moonDistance.js";
 import { moonLit } from "../../src/kernel/night/moonLit.js";
+import { howToInstall, provideAstropy } from "./provideAstropy.js";
 
-const python = "/usr/bin/python3";
-const isThere = spawnSync(python, ["-c", "import astropy"]).status === 0;
+const python = provideAstropy();
+if (!python) process.stderr.write(`test/astropy/night is skipped: it ${howToInstall}\n`);
 const deg = Math.PI / 180;
 
 /** Semesters ahead, which the committed tables do not reach. */
@@ -20,7 +21,7 @@ test.skipIf(!isThere)(
   "nights from 2027 to 2031 are those of astropy, or this test is skipped where it is missing",
   () => {
     const script = fileURLToPath(new URL("night.py", import.meta.url));
-    const { stdout, stderr, status } = spawnSync(python, [script], {
+    const { stdout, stderr, status } = spawnSync(python!, [script], {
       input: asked.map((row) => row.join(" ")).join("\n"),
       encoding: "utf8",
     });
