@@ -60,6 +60,7 @@ export type CallProblem =
       readonly bound: Bound;
       readonly side: "lower" | "upper";
     }
+  | { readonly about: "zero for blank"; readonly input: string; readonly unit: Unit }
   | { readonly about: "zero or blank"; readonly input: string; readonly bound: Bound }
   | {
       readonly about: "beyond numbers";
@@ -96,5 +97,37 @@ export type CallProblem =
   | { readonly about: "result unit"; readonly header: string; readonly unit: UnitProblem }
   | { readonly about: "result kind"; readonly header: string; readonly unit: Unit; readonly wanted: Unit }
   | { readonly about: "several rows"; readonly rows: number }
+  | { readonly about: "count"; readonly input: string; readonly value: string; readonly most: number }
+  | { readonly about: "count of columns"; readonly input: string; readonly count: number; readonly rows: number }
+  | {
+      readonly about: "needed";
+      readonly input: string;
+      readonly by: string;
+      readonly because: string;
+    }
+  | {
+      readonly about: "two frames";
+      readonly input: string;
+      readonly frame: string;
+      readonly other: string;
+      readonly otherFrame: string;
+    }
+  | { readonly about: "no clock"; readonly input: string; readonly frame: string; readonly wanted: string }
+  | {
+      readonly about: "zero of date";
+      readonly input: string;
+      readonly value: string;
+      readonly header: HeaderCell | undefined;
+      readonly unit: Unit;
+      /** The unit in which the number is a date of our time. */
+      readonly meant: string;
+    }
+  | {
+      readonly about: "hours or degrees";
+      readonly input: string;
+      readonly text: string;
+      readonly header: HeaderCell;
+      readonly headerUnit: Unit;
+    }
   | { readonly about: "no unit stated"; readonly text: string }
   | { readonly about: "unknown name"; readonly text: string; readonly nearest: string | undefined };

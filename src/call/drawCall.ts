@@ -57,7 +57,7 @@ function drawnInput(
   normal: () => number,
 ): DrawnInput {
   const { reading } = told;
-  if (input.takes === "word" || reading === undefined)
+  if (input.takes !== "quantity" || reading === undefined)
     return { range: undefined, draw: constant(fixedValue(input, told)) };
   const { unit, value, upper = 0, lower = 0 } = reading;
   const base = toBase(unit, value);

@@ -7,6 +7,7 @@ import { type Block, cellAt } from "./column.js";
 import { noHeader } from "./headerUnit.js";
 import type { CallInputs } from "./inputColumns.js";
 import { type CellReading, readCell, valueText } from "./readCell.js";
+import { readSigma } from "./readSigma.js";
 import { ResultColumns } from "./resultColumns.js";
 import { knownUnit } from "./resultUnit.js";
 
@@ -66,11 +67,9 @@ function eachQuantity(
     const sigmas =
       reading.upper !== undefined
         ? []
-        : columns.slice(1).map((column, index) => {
-            const own = headers[index + 1]!;
-            const header = own.unit || own.problem ? own : { ...own, unit: reading.unit };
-            return readCell(`uncertainty of ${input.name}`, cellAt(column, row), header, reading.unit.kind);
-          });
+        : columns
+            .slice(1)
+            .map((column, index) => readSigma(input.name, cellAt(column, row), headers[index + 1]!, reading.unit));
     const bad = sigmas.find((sigma) => sigma instanceof CellError || "about" in sigma);
     if (bad && definition.form === "conversion")
       results.failSigma(row, error(bad as CallProblem | CellError), columns.length - 1);

@@ -1,9 +1,10 @@
 import type { NumberDefinition, QuantityInput } from "../functions/definition.js";
 import { baseSlope, fromBase, type Unit } from "../units/unit.js";
-import { type BlockReader, blockRows, quantityReader, type Report, wordReader } from "./blockReader.js";
+import { type BlockReader, blockRows, placeReader, quantityReader, type Report, wordReader } from "./blockReader.js";
 import type { CallProblem } from "./callProblem.js";
 import { CellError } from "./cell.js";
 import { cellProblem } from "./cellProblem.js";
+import { checkTogether } from "./checkTogether.js";
 import { type Block, cellAt } from "./column.js";
 import { shorten } from "./explain.js";
 import type { CallInputs } from "./inputColumns.js";
@@ -19,9 +20,13 @@ export function evaluateNumber(definition: NumberDefinition, call: CallInputs, u
   const readers = call.inputs.map((cells) =>
     cells.input.takes === "word"
       ? wordReader(cells, cells.input, size)
-      : quantityReader(cells, cells.input as QuantityInput, size),
+      : cells.input.takes === "count"
+        ? placeReader(call.spilled, size)
+        : quantityReader(cells, cells.input as QuantityInput, size),
   );
-  const bases = readers.map((reader) => reader.base);
+  const inputColumns = readers.map((reader) => reader.base);
+  const settled = definition.settle && new Float64Array(size);
+  const bases = settled ? [...inputColumns, settled] : inputColumns;
   const results = new ResultColumns(rows, call.filledDown);
   const scratch = new Float64Array(size);
   const isBase = unit.times === 1 && unit.over === 1 && unit.plus === 0 && !unit.logarithm;
@@ -31,6 +36,8 @@ export function evaluateNumber(definition: NumberDefinition, call: CallInputs, u
     const count = Math.min(blockRows, rows - from);
     const report = reportTo(results, definition, from);
     for (const reader of readers) reader.read(from, count, report);
+    checkTogether(definition, readers, unit, count, report);
+    if (settled) definition.settle!(count, settled, ...inputColumns);
     const out = results.numbers.subarray(from, from + count);
     const values = isBase ? out : scratch;
     definition.compute(count, values, ...bases);
@@ -96,6 +103,8 @@ function noResult(definition: NumberDefinition, call: CallInputs, row: number): 
 class BlockUncertainty {
   private readonly scratch;
   private readonly slope: Float64Array;
+  private readonly exact: Float64Array;
+  private readonly scale: Float64Array;
   private readonly above: Float64Array;
   private readonly below: Float64Array;
   private readonly sides: Uint8Array;
@@ -108,6 +117,8 @@ class BlockUncertainty {
   ) {
     this.scratch = slopeScratch(size);
     this.slope = new Float64Array(size);
+    this.exact = new Float64Array(definition.beforeRounding ? size : 0);
+    this.scale = new Float64Array(size);
     this.above = new Float64Array(size);
     this.below = new Float64Array(size);
     this.sides = new Uint8Array(size);
@@ -115,13 +126,20 @@ class BlockUncertainty {
 
   propagate(values: Float64Array, rows: number, unit: Unit, results: ResultColumns, from: number): void {
     const { above, below, sides, slope } = this;
+    const { beforeRounding, compute } = this.definition;
+    const law = beforeRounding ?? compute;
+    if (beforeRounding) beforeRounding(rows, this.exact, ...this.bases);
+    const exact = beforeRounding ? this.exact : values;
     above.fill(0);
     below.fill(0);
     sides.fill(0);
     this.definition.inputs.forEach((input, index) => {
       const reader = this.readers[index]!;
       if (!reader.uncertain || input.takes !== "quantity") return;
-      slopes(this.definition.compute, input.quantity, index, this.bases, values, rows, this.scratch, slope);
+      const scale = this.definition.scales?.[input.name];
+      if (scale) scale(rows, this.scale, ...this.bases);
+      const given = scale && this.scale;
+      slopes(law, input.quantity, index, this.bases, exact, rows, this.scratch, slope, given);
       for (let row = 0; row < rows; row++) {
         if (reader.sides[row] === 0) continue;
         const up = slope[row]! * reader.upper[row]!;

@@ -4,7 +4,7 @@ import type { Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
 import type { UnitProblem } from "../units/problem.js";
 import { readHeader } from "../units/readHeader.js";
-import type { Unit } from "../units/unit.js";
+import { toBase, type Unit } from "../units/unit.js";
 import type { CallProblem, HeaderCell, UnitPlace } from "./callProblem.js";
 
 /** Some worksheet hosts cut a message here. */
@@ -41,6 +41,8 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
       return `${problem.input} is ${problem.value}; it must be ${boundPhrase(problem)}, because ${problem.bound.reason}; for example ${exampleOf(definition, problem.input)}.`;
     case "zero or blank":
       return `${problem.input} is 0 or blank; it must be above 0, because ${problem.bound.reason}; for example ${exampleOf(definition, problem.input)}.`;
+    case "zero for blank":
+      return `${problem.input} is 0 or blank; ${kindOfInput(definition, problem.input)} is needed, for example ${exampleOf(definition, problem.input)}; for a true 0 type "0 ${problem.unit.text}".`;
     case "beyond numbers":
       return problem.asked
         ? `${problem.input} is ${problem.value}, which no number can hold in ${problem.asked.text}; ask for another unit.`
@@ -52,7 +54,7 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
     case "lengths":
       return `${problem.input} has ${rowCount(problem.rows)} and ${problem.other} has ${problem.otherRows}; columns of one call need the same number of rows, or one row each.`;
     case "shape":
-      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes one column${mayHaveUncertainty(definition, problem.input) ? ", two with its uncertainty, or three with upper and lower uncertainty" : ""}.`;
+      return `${problem.input} is ${problem.rows} x ${problem.columns} cells; it takes ${isCount(definition, problem.input) ? "one cell" : "one column"}${columnsRemedy(definition, problem.input)}.`;
     case "header of another column":
       return `${problem.input} was given the header ${headerText(problem.header)}, but its own column is headed ${headerText(problem.own)}; give inputs and headers in the same order.`;
     case "header count":
@@ -69,6 +71,20 @@ function sentenceOf(definition: Definition, problem: CallProblem): string {
       return resultKindSentence(problem);
     case "several rows":
       return `one row of this column gives ${problem.rows} rows of results; give each input one cell a row.`;
+    case "count":
+      return `${problem.input} is ${problem.value}; it must be a whole number from 1 to ${problem.most}, for example 5.`;
+    case "count of columns":
+      return `${problem.input} is ${problem.count} for a column of ${rowCount(problem.rows)}; a column has one result in each row, so leave ${problem.input} out, or give each input one cell.`;
+    case "needed":
+      return `${problem.input} is 0 or missing, but ${problem.by} is not 0; ${problem.because}, for example ${exampleOf(definition, problem.input)}${zeroRemedy(definition, problem.input)}.`;
+    case "two frames":
+      return `${problem.input} is in ${problem.frame} and ${problem.other} in ${problem.otherFrame}; times of two scales do not mix: bring both into one${byBarytime(problem)}.`;
+    case "no clock":
+      return `${problem.input} is in ${problem.frame}; the clock of the site is needed, ${problem.wanted} (JD_TAI, JD_TT and JD_TDB are converted), for example ${exampleOf(definition, problem.input)}.`;
+    case "zero of date":
+      return `${problem.input} is ${problem.value}, ${Math.abs(yearOf(problem)) > 1e4 ? "far outside history" : `the year ${yearOf(problem)}`}; it looks like ${problem.meant}: ${problem.header ? `write the header ${headerWith(problem.header.text, problem.meant)}` : `write ${problem.meant} after it`}.`;
+    case "hours or degrees":
+      return `${problem.input} is ${quote(problem.text)}, ${problem.headerUnit.text === "hourangle" ? "degrees" : "hours"}, but its header ${headerText(problem.header)} says ${problem.headerUnit.text}; ${problem.headerUnit.text === "hourangle" ? `write the header ${headerWith(problem.header.text, "deg")}` : `write the header ${headerWith(problem.header.text, "h")}`}, or letters: 12h30m00s, 12d30m00s.`;
     case "no unit stated":
       return `${quote(problem.text)} states no unit; write it in square brackets, for example "Period [d]", or after a number, "4.23 d".`;
     case "unknown name":
@@ -182,6 +198,22 @@ function boundPhrase(problem: Extract<CallProblem, { about: "bound" }>): string 
   return `${word} ${bound.text}`;
 }
 
+/** A blank may arrive as the number 0, so a 0 that is meant says its unit. */
+function zeroRemedy(definition: Definition, input: string): string {
+  const quantity = quantityOf(definition, input);
+  const allowed = quantity && (quantity.lower === undefined || quantity.lower.at < 0);
+  return allowed ? `; for a true 0 type "0 ${quantity.unit}"` : "";
+}
+
+function byBarytime({ frame, otherFrame }: Extract<CallProblem, { about: "two frames" }>): string {
+  const frames = [frame, otherFrame];
+  return frames.includes("JD_UTC") && frames.includes("BJD_TDB") ? "; BARYTIME turns JD_UTC into BJD_TDB" : "";
+}
+
+function yearOf({ value, unit }: Extract<CallProblem, { about: "zero of date" }>): number {
+  return Math.floor(2000 + toBase(unit, Number.parseFloat(value)) / 365.2425);
+}
+
 function remedy(definition: Definition, input: string): string {
   return input.startsWith("uncertainty")
     ? "type 0 if it is exact"
@@ -190,19 +222,36 @@ function remedy(definition: Definition, input: string): string {
 
 function kindOfInput(definition: Definition, input: string): string {
   const quantity = quantityOf(definition, input);
+  const words = wordsOf(definition, input);
+  if (words) return "one of its words";
   return quantity ? kindPhrase(quantity.kind) : takesQuantity(definition) ? "a quantity" : "a text";
 }
 
 function exampleOf(definition: Definition, input: string): string {
   const quantity = quantityOf(definition, input);
+  const words = wordsOf(definition, input);
+  if (words) return anyOf(words.map((word) => `"${word}"`));
   if (!quantity) return quote(definition.examples[0].cells[0]!);
   return quantity.unit === "1" ? `${quantity.example}` : `${quantity.example} ${quantity.unit}`;
 }
 
-function quantityOf(definition: Definition, input: string): Quantity | undefined {
+function inputNamed(definition: Definition, input: string): Input | undefined {
   const name = input.replace(/^uncertainty of /, "");
-  const found = (definition.inputs as readonly Input[]).find((candidate) => candidate.name === name);
+  return (definition.inputs as readonly Input[]).find((candidate) => candidate.name === name);
+}
+
+function quantityOf(definition: Definition, input: string): Quantity | undefined {
+  const found = inputNamed(definition, input);
   return found?.takes === "quantity" ? found.quantity : undefined;
+}
+
+function wordsOf(definition: Definition, input: string): readonly string[] | undefined {
+  const found = (definition.inputs as readonly Input[]).find(({ name }) => name === input);
+  return found?.takes === "word" ? found.words.map(({ word }) => word) : undefined;
+}
+
+function isCount(definition: Definition, input: string): boolean {
+  return (definition.inputs as readonly Input[]).some(({ name, takes }) => name === input && takes === "count");
 }
 
 function defaultUnit(definition: Definition): string | undefined {
@@ -213,8 +262,11 @@ function argumentList(definition: Definition): string {
   return argumentNames(definition).join(", ");
 }
 
-function mayHaveUncertainty(definition: Definition, input: string): boolean {
-  return quantityOf(definition, input) !== undefined || takesQuantity(definition);
+function columnsRemedy(definition: Definition, input: string): string {
+  const found = inputNamed(definition, input);
+  if (found?.takes === "quantity" && found.alone) return "; give each as an argument of its own: B2, C2, D2";
+  const mayHaveUncertainty = found?.takes === "quantity" || takesQuantity(definition);
+  return mayHaveUncertainty ? ", two with its uncertainty, or three with upper and lower uncertainty" : "";
 }
 
 /** Whether its one input is a quantity of any kind, not a text. */

@@ -1,4 +1,5 @@
 import { readHeader } from "../units/readHeader.js";
+import { hourOfAngle } from "../units/readSexagesimal.js";
 import type { Unit } from "../units/unit.js";
 import type { CallProblem, HeaderCell } from "./callProblem.js";
 
@@ -9,9 +10,15 @@ export interface HeaderUnit {
   readonly problem: CallProblem | undefined;
 }
 
+/** An hour of right ascension where an hour of time was read. */
+export function angleOf<U extends Unit | undefined>(unit: U): U | Unit {
+  return unit?.text === "h" ? hourOfAngle : unit;
+}
+
 export const noHeader: HeaderUnit = { header: undefined, unit: undefined, problem: undefined };
 
-export function headerUnit(input: string, header: HeaderCell | undefined): HeaderUnit {
+/** `hours`: an angle that is counted in hours, for which `h` is no hour of time. */
+export function headerUnit(input: string, header: HeaderCell | undefined, hours = false): HeaderUnit {
   if (!header) return noHeader;
   if (header.isNumber) return { header, unit: undefined, problem: undefined };
   const reading = readHeader(header.text);
@@ -21,5 +28,8 @@ export function headerUnit(input: string, header: HeaderCell | undefined): Heade
     at: { place: "header", header },
     unit: reading.problem,
   };
-  return { header, unit: reading.unit, problem };
+  if (!hours) return { header, unit: reading.unit, problem };
+  // "RA" alone heads a column of right ascensions rather than one of ronnaamperes.
+  const unit = header.text.trim() === "RA" ? undefined : angleOf(reading.unit);
+  return { header, unit, problem };
 }

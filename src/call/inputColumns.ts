@@ -3,9 +3,12 @@ import type { Definition, Input } from "../functions/definition.js";
 import { columnOfAddress } from "./address.js";
 import { assignHeaders, type HeaderAssignment } from "./assignHeaders.js";
 import type { CallProblem, HeaderCell } from "./callProblem.js";
-import type { Column } from "./column.js";
+import { CellError } from "./cell.js";
+import { type Column, cellAt } from "./column.js";
+import { quote } from "./explain.js";
 import { type HeaderUnit, headerUnit, noHeader } from "./headerUnit.js";
 import { fits } from "./readCell.js";
+import { fitsSigma } from "./readSigma.js";
 
 /** The cells one input was given, with what their headers say; no columns where the input was left out. */
 export interface InputColumns {
@@ -22,6 +25,8 @@ export interface CallInputs {
   readonly rows: number;
   /** One call filled down over the rows, not one call with columns. */
   readonly filledDown: boolean;
+  /** The rows are as many results as were asked for of the same inputs. */
+  readonly spilled: boolean;
   readonly inputs: readonly InputColumns[];
 }
 
@@ -38,25 +43,33 @@ export function callInputs(
   given: readonly (GivenCells | undefined)[],
   headers: readonly HeaderCell[],
   filledDown: boolean,
-): CallInputs | CallProblem {
+): CallInputs | CallProblem | CellError {
   const inputs: readonly Input[] = definition.inputs;
   for (let index = 0; index < inputs.length; index++) {
     const input = inputs[index]!;
     const cells = given[index];
     if (!cells) {
       if (!isOptional(input)) return { about: "missing", input: input.name };
-    } else if (cells.columns.length > (takesHeader(input) ? 3 : 1) || cells.columns.length === 0) {
+    } else if (cells.columns.length > mostColumns(input) || cells.columns.length === 0) {
       return { about: "shape", input: input.name, rows: cells.rows, columns: cells.columns.length };
     }
   }
   const lengths = inputs.map((_, index) => given[index]?.rows ?? 1);
   const longest = lengths.findIndex((rows) => rows !== 1);
-  const rows = longest < 0 ? 1 : lengths[longest]!;
-  const unequal = lengths.findIndex((length) => length !== 1 && length !== rows);
+  const ownRows = longest < 0 ? 1 : lengths[longest]!;
+  const unequal = lengths.findIndex((length) => length !== 1 && length !== ownRows);
   if (unequal >= 0) {
     const [input, other] = [inputs[unequal]!.name, inputs[longest]!.name];
-    return { about: "lengths", input, rows: lengths[unequal]!, other, otherRows: rows };
+    return { about: "lengths", input, rows: lengths[unequal]!, other, otherRows: ownRows };
   }
+  const count = resultCount(inputs, given);
+  if (typeof count !== "number") return count;
+  if (count > 1 && filledDown) return { about: "several rows", rows: count };
+  if (count > 1 && ownRows > 1) {
+    const { name } = inputs.find(({ takes }) => takes === "count")!;
+    return { about: "count of columns", input: name, count, rows: ownRows };
+  }
+  const rows = count > 1 ? count : ownRows;
   const headed = inputs.filter(takesHeader);
   const widths = headed.map((input) => given[inputs.indexOf(input)]?.columns.length ?? 0);
   const ways = assignHeaders(headers, widths);
@@ -72,6 +85,7 @@ export function callInputs(
   return {
     rows,
     filledDown,
+    spilled: count > 1,
     inputs: inputs.map((input, index) => {
       const cells = given[index];
       const own = takesHeader(input) ? assigned[headed.indexOf(input)]! : [];
@@ -80,11 +94,32 @@ export function callInputs(
       return {
         input,
         columns,
-        headers: names.map((name, column) => (own[column] ? headerUnit(name, own[column]) : noHeader)),
+        headers: names.map((name, column) =>
+          own[column] ? headerUnit(name, own[column], countsHours(input)) : noHeader,
+        ),
         single: lengths[index] === 1,
       };
     }),
   };
+}
+
+/** How many results are asked for; 1 where the function gives one. */
+function resultCount(
+  inputs: readonly Input[],
+  given: readonly (GivenCells | undefined)[],
+): number | CallProblem | CellError {
+  const index = inputs.findIndex(({ takes }) => takes === "count");
+  const input = inputs[index];
+  const cells = given[index];
+  if (input?.takes !== "count" || !cells) return 1;
+  if (cells.rows !== 1) return { about: "shape", input: input.name, rows: cells.rows, columns: cells.columns.length };
+  const cell = cellAt(cells.columns[0]!, 0);
+  if (cell instanceof CellError) return cell;
+  if (cell === null || cell === "" || cell === 0) return 1;
+  const count = typeof cell === "string" && cell.trim() !== "" ? Number(cell) : cell;
+  if (typeof count === "number" && Number.isInteger(count) && count >= 1 && count <= input.most) return count;
+  const value = typeof cell === "string" ? quote(cell) : String(cell).toUpperCase();
+  return { about: "count", input: input.name, value, most: input.most };
 }
 
 /**
@@ -110,11 +145,20 @@ function headerOfAnotherColumn(
 /** Whether every unit that is stated is of the kind of its input; headers of omitted inputs do not count. */
 function agrees(way: HeaderAssignment, inputs: readonly Input[], widths: readonly number[]): boolean {
   return inputs.every((input, index) =>
-    way[index]!.slice(0, widths[index]).every((header) => {
-      const unit = header && headerUnit(input.name, header).unit;
-      return !unit || fits(unit, input.takes === "quantity" ? input.quantity.kind : undefined);
+    way[index]!.slice(0, widths[index]).every((header, column) => {
+      const unit = header && headerUnit(input.name, header, countsHours(input)).unit;
+      const kind = input.takes === "quantity" ? input.quantity.kind : undefined;
+      return !unit || fits(unit, kind) || (column > 0 && fitsSigma(unit, kind));
     }),
   );
+}
+
+function mostColumns(input: Input): number {
+  return takesHeader(input) && !(input.takes === "quantity" && input.alone) ? 3 : 1;
+}
+
+function countsHours(input: Input): boolean {
+  return input.takes === "quantity" && input.quantity.sexagesimal === "hours";
 }
 
 function takesHeader(input: Input): boolean {

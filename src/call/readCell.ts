@@ -1,11 +1,13 @@
+import type { Quantity } from "../functions/quantity.js";
 import { isPlainNumberKind, type Kind } from "../units/kind.js";
 import { isProblem } from "../units/problem.js";
 import { readQuantity } from "../units/readQuantity.js";
+import { hourOfAngle, readSexagesimal } from "../units/readSexagesimal.js";
 import { convertible, one, type Unit } from "../units/unit.js";
 import type { CallProblem, UnitPlace } from "./callProblem.js";
 import { type Cell, CellError } from "./cell.js";
 import { quote } from "./explain.js";
-import type { HeaderUnit } from "./headerUnit.js";
+import { angleOf, type HeaderUnit } from "./headerUnit.js";
 
 /** A cell read as a quantity; numbers in `unit`. */
 export interface CellReading {
@@ -13,14 +15,19 @@ export interface CellReading {
   readonly upper: number | undefined;
   readonly lower: number | undefined;
   readonly unit: Unit;
+  /** The value as it was written, where that has more digits than one double holds. */
+  readonly digits?: string;
 }
 
-/** `wanted` is the kind that is needed, undefined where any will do. */
+/** What a cell is to hold: its kind, and whether an angle may be written in sixtieths. */
+export type Wanted = Pick<Quantity, "kind" | "sexagesimal">;
+
+/** `wanted` is undefined where a quantity of any kind will do. */
 export function readCell(
   input: string,
   cell: Cell,
   header: HeaderUnit,
-  wanted: Kind | undefined,
+  wanted: Wanted | undefined,
 ): CellReading | CallProblem | CellError {
   if (cell instanceof CellError) return cell;
   if (cell === null) return { about: "blank", input };
@@ -28,9 +35,10 @@ export function readCell(
     return { about: "not a number", input, value: `${cell ? "TRUE" : "FALSE"}, a logical value`, hint: undefined };
   }
   if (typeof cell === "number") {
-    return withHeaderUnit(input, { value: cell, upper: undefined, lower: undefined }, header, wanted);
+    return withHeaderUnit(input, { value: cell, upper: undefined, lower: undefined }, header, wanted?.kind);
   }
-  const quantity = readQuantity(cell);
+  const angle = wanted?.sexagesimal && readSexagesimal(cell, wanted.sexagesimal);
+  const quantity = angle ? { ...angle, upper: undefined, lower: undefined } : readQuantity(cell);
   if (isProblem(quantity)) {
     if (quantity.problem === "not a number") {
       const value = cell.trim() === "" ? "an empty text" : quote(cell);
@@ -38,10 +46,18 @@ export function readCell(
     }
     return { about: "unit", input, at: { place: "text", text: cell }, unit: quantity };
   }
-  const { unit } = quantity;
-  if (!unit) return withHeaderUnit(input, quantity, header, wanted);
+  const unit = wanted?.sexagesimal === "hours" ? angleOf(quantity.unit) : quantity.unit;
+  if (!unit) return withHeaderUnit(input, quantity, header, wanted?.kind);
   const at: UnitPlace = { place: "text", text: cell };
-  if (!fits(unit, wanted)) return { about: "wrong kind", input, value: quote(cell), unit, wanted: wanted!, at };
+  if (!fits(unit, wanted?.kind)) {
+    return { about: "wrong kind", input, value: quote(cell), unit, wanted: wanted!.kind, at };
+  }
+  if (angle && !angle.stated && header.header && header.unit?.kind === "angle") {
+    const asHours = header.unit.text === hourOfAngle.text;
+    if (asHours !== (unit === hourOfAngle)) {
+      return { about: "hours or degrees", input, text: cell, header: header.header, headerUnit: header.unit };
+    }
+  }
   if (header.header && header.unit && !convertible(unit, header.unit) && !isPlainNumberKind(unit.kind)) {
     return { about: "disagreement", input, text: cell, unit, header: header.header, headerUnit: header.unit };
   }

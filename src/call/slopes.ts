@@ -46,7 +46,10 @@ const leastChange = 1e-6;
 /** A difference of this many roundings of the result is no difference. */
 const roundings = 64 * Number.EPSILON;
 
-/** Fills `out` with the derivatives by input `index` in the first `rows` rows; `values` are the results there. */
+/**
+ * Fills `out` with the derivatives by input `index` in the first `rows` rows; `values` are the results there. `scale` says
+ * how far the input may move before the result bends, where that is known better than from its size.
+ */
 export function slopes(
   compute: Compute,
   quantity: Quantity,
@@ -56,12 +59,13 @@ export function slopes(
   rows: number,
   scratch: SlopeScratch,
   out: Float64Array,
+  scale?: Float64Array,
 ): void {
   const column = columns[index]!;
   const { shifted, steps, results } = scratch;
   for (let row = 0; row < rows; row++) {
     const x = column[row]!;
-    steps[row] = relativeStep * scaleOf(quantity, x);
+    steps[row] = relativeStep * (scale ? scale[row]! : scaleOf(quantity, x));
     scratch.stencils[row] = stencilAt(quantity, x, steps[row]!);
   }
   const shiftedColumns = columns.with(index, shifted);
@@ -72,18 +76,30 @@ export function slopes(
   }
   const [a, b, c, d] = results;
   for (let row = 0; row < rows; row++) {
-    const slope = slopeFrom(scratch.stencils[row]!, a[row]!, b[row]!, c[row]!, d[row]!, values[row]!, steps[row]!);
-    out[row] = Number.isNaN(slope)
-      ? refinedSlope(compute, quantity, index, columns, values[row]!, row, steps[row]!)
-      : slope;
+    const least = scale ? 0 : leastChange;
+    const form = scratch.stencils[row]!;
+    const slope = slopeFrom(form, a[row]!, b[row]!, c[row]!, d[row]!, values[row]!, steps[row]!, least);
+    out[row] =
+      Number.isNaN(slope) && !scale
+        ? refinedSlope(compute, quantity, index, columns, values[row]!, row, steps[row]!)
+        : slope;
   }
 }
 
 /** NaN where the differences are too small to mean anything, or leave the range. */
-function slopeFrom(form: number, a: number, b: number, c: number, d: number, value: number, h: number): number {
+function slopeFrom(
+  form: number,
+  a: number,
+  b: number,
+  c: number,
+  d: number,
+  value: number,
+  h: number,
+  least = leastChange,
+): number {
   const size = Math.abs(value);
   const change = Math.max(Math.abs(a - value), Math.abs(b - value), Math.abs(c - value), Math.abs(d - value));
-  if (!(change >= leastChange * size)) return Number.NaN;
+  if (!(change >= least * size)) return Number.NaN;
   const { weights, centre } = stencils[form]!;
   const sum = weights[0] * a + weights[1] * b + weights[2] * c + weights[3] * d + centre * value;
   if (Math.abs(sum) <= roundings * size) return 0;

@@ -1,6 +1,7 @@
 import type { Definition, Input } from "../functions/definition.js";
 import { kinds } from "../units/kind.js";
-import { baseSlope, one, toBase, type Unit } from "../units/unit.js";
+import { symbolOf } from "../units/quantityText.js";
+import { baseSlope, one, toBaseOf, type Unit } from "../units/unit.js";
 import { type Cell, CellError } from "./cell.js";
 import type { Argument } from "./cellFunction.js";
 import { cellFunctionOf } from "./cellFunctionOf.js";
@@ -9,6 +10,8 @@ import { headerCells } from "./headerCells.js";
 import { noHeader } from "./headerUnit.js";
 import { callInputs, type InputColumns } from "./inputColumns.js";
 import { type CellReading, readCell } from "./readCell.js";
+import { readSigma } from "./readSigma.js";
+import { orderedCall } from "./repeatedCall.js";
 
 /** One call of one row told in full: what went in, by which formula, what came out, and whose doubt it carries. */
 export interface CallStory {
@@ -38,11 +41,12 @@ export interface ToldInput {
 }
 
 /** `row` counts within the call where its inputs are columns. */
-export function tellCall(definition: Definition, parameters: readonly Argument[], row = 0): CallStory {
+export function tellCall(called: Definition, given: readonly Argument[], row = 0): CallStory {
+  const { definition, parameters } = orderedCall(called, given);
   const count = definition.inputs.length;
   const ofRow = parameters.map((parameter, index) => (index < count ? rowOf(parameter, row) : parameter));
-  const called = cellFunctionOf(definition);
-  const [value, upper, lower] = called.once(ofRow).columns;
+  const cellFunction = cellFunctionOf(definition);
+  const [value, upper, lower] = cellFunction.once(ofRow).columns;
   const result = cellAt(value!, 0);
   const told = inputsOf(definition, ofRow);
   const shares = result instanceof CellError ? [] : sharesOf(definition, told, ofRow);
@@ -52,7 +56,7 @@ export function tellCall(definition: Definition, parameters: readonly Argument[]
     result,
     upper: upper ? cellAt(upper, 0) : null,
     lower: lower ? cellAt(lower, 0) : upper ? cellAt(upper, 0) : null,
-    unit: typeof result === "number" ? called.unitOf?.(ofRow) : undefined,
+    unit: typeof result === "number" ? cellFunction.unitOf?.(ofRow) : undefined,
   };
 }
 
@@ -78,7 +82,8 @@ function inputsOf(definition: Definition, parameters: readonly Argument[]): read
   const headers = definition.form === "lookup" ? [] : headerCells(parameters[inputs.length]);
   const call = callInputs(definition, given, headers, false);
   // Without a way to share out the headers the cells can still be shown.
-  if ("about" in call) return inputs.map((input, index) => unread(input, given[index]?.columns[0]));
+  if (call instanceof CellError || "about" in call)
+    return inputs.map((input, index) => unread(input, given[index]?.columns[0]));
   return call.inputs.map(told);
 }
 
@@ -92,21 +97,19 @@ function told({ input, columns, headers }: InputColumns): Untold {
   const cells = unread(input, columns[0]);
   const [own = noHeader, ...beside] = headers;
   const header = own.header && { text: own.header.text, address: own.header.address };
-  const wanted = input.takes === "quantity" ? input.quantity.kind : undefined;
+  const wanted = input.takes === "quantity" ? input.quantity : undefined;
   const isBlank = cells.cell === null || cells.cell === "";
   if (isBlank && fallbackOf(input) === undefined) return { ...cells, header };
-  if (input.takes === "word" || input.takes === "text") return cells;
+  if (input.takes === "word" || input.takes === "text" || input.takes === "count") return cells;
   const reading = isBlank ? undefined : readCell(input.name, cells.cell, own, wanted);
   if (!reading || reading instanceof CellError || "about" in reading) {
     // A blank stands for a circular orbit only where the fallback is 0; any other blank is an error of the call.
     const assumed = isBlank && input.takes === "quantity" && input.fallback === 0 ? input.fallbackText : cells.assumed;
     return { ...cells, header, assumed };
   }
-  const value = toBase(reading.unit, reading.value);
+  const value = toBaseOf(reading.unit, reading.value, reading.digits);
   const sigmas = columns.slice(1).map((column, index) => {
-    const header = beside[index] ?? noHeader;
-    const unit = header.unit ?? reading.unit;
-    const sigma = readCell(input.name, cellAt(column, 0), { ...header, unit }, wanted);
+    const sigma = readSigma(input.name, cellAt(column, 0), beside[index] ?? noHeader, reading.unit);
     return sigma instanceof CellError || "about" in sigma
       ? undefined
       : (Math.abs(sigma.value) * baseSlope(sigma.unit, value)) / baseSlope(reading.unit, value);
@@ -117,7 +120,8 @@ function told({ input, columns, headers }: InputColumns): Untold {
 
 function fallbackOf(input: Input): string | undefined {
   if (input.takes === "quantity") return input.fallbackText;
-  return input.takes === "word" ? input.words[0]!.word : undefined;
+  if (input.takes === "count") return "1";
+  return input.takes === "word" && !input.required ? input.words[0]!.word : undefined;
 }
 
 /** How the base unit is written for a reader; a mass is carried as G times the mass. */
@@ -148,7 +152,7 @@ function sharesOf(definition: Definition, inputs: readonly Untold[], parameters:
 function textOf({ reading }: Untold, withUncertainty: boolean): string {
   const { value, upper, lower, unit } = reading!;
   const sigma = withUncertainty ? ` +${upper} -${lower}` : "";
-  return `${value}${sigma}${unit.text === one.text ? "" : ` ${unit.text}`}`;
+  return `${value}${sigma}${unit.text === one.text ? "" : ` ${symbolOf(unit)}`}`;
 }
 
 function varianceOf(definition: Definition, parameters: readonly Argument[]): number | undefined {

@@ -34,7 +34,10 @@ export function describeFunction(definition: Definition): string[] {
 export function resultText(definition: Definition): string {
   switch (definition.form) {
     case "number": {
-      const { quantity, unit } = definition.result;
+      const { quantity, unit, as } = definition.result;
+      if (as !== undefined) {
+        return `${quantity.meaning}; ${kindPhrase(quantity.kind)}, in the unit of ${as} unless the result header says otherwise`;
+      }
       return `${quantity.meaning}; ${kindPhrase(quantity.kind)}${unit === "1" ? "" : `, in ${unit} unless the result header says otherwise`}`;
     }
     case "conversion":

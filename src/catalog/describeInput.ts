@@ -1,3 +1,4 @@
+import { isRepeating } from "../functions/argumentNames.js";
 import type { Input } from "../functions/definition.js";
 import type { Bound, Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
@@ -7,13 +8,19 @@ export function describeInput(input: Input): string {
   switch (input.takes) {
     case "quantity": {
       const { quantity, fallbackText } = input;
-      const leftOut = fallbackText === undefined ? "" : `; left out: ${fallbackText}`;
-      return `${quantity.meaning}; ${kindPhrase(quantity.kind)}${rangeText(quantity)}${leftOut}`;
+      const needed = input.needed
+        ? `, if ${input.needed.by.join(" and ")} ${input.needed.by.length > 1 ? "are" : "is"} 0`
+        : "";
+      const leftOut = fallbackText === undefined ? "" : `; left out: ${fallbackText}${needed}`;
+      const more = isRepeating(input) ? "; as many as there are" : "";
+      return `${quantity.meaning}; ${kindPhrase(quantity.kind)}${rangeText(quantity)}${leftOut}${more}`;
     }
     case "any quantity":
       return "a number with a unit of any kind";
     case "word":
-      return `${input.words.map(({ word, meaning }) => `${word} (${meaning})`).join(", ")}; left out: ${input.words[0]!.word}`;
+      return `${input.words.map(({ word, meaning }) => `${word} (${meaning})`).join(", ")}${input.required ? "" : `; left out: ${input.words[0]!.word}`}`;
+    case "count":
+      return `${input.meaning}; a whole number from 1 to ${input.most}; left out: 1`;
     case "text":
       return input.meaning;
   }

@@ -24,6 +24,8 @@ export function describeUnits(): string[] {
     ...kinds,
     "Instants: JD, MJD, BJD or HJD with a time scale, less an offset if need be",
     `  ${"JD_UTC".padEnd(width)}also BJD_TDB, MJD_UTC, HJD_UTC, BJD_TDB-2450000; scales UTC UT1 TAI TT TDB TCB; ISO 8601 texts are UTC`,
+    `  ${"date serial".padEnd(width)}the number behind a date of the worksheet, UTC`,
+    "Angles may be written 13:08:00, 13h08m00s or -30d15m00s; h means hours of angle for a right ascension",
     "",
     "Products and powers: m.s**-1, m/s, km s-1, kg/m**3, 10**3kg; logarithms: log(cm/s**2), [cm/s2], dex, ln(m)",
     "",

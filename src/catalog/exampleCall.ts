@@ -27,7 +27,7 @@ export function exampleCall(definition: Definition, example: Example): ExampleCa
 /** The arguments in their places; empty where one is left out before the result's unit. */
 function argumentTexts(definition: Definition, { cells, result }: Example): readonly string[] {
   if (result === undefined) return cells;
-  const places = definition.inputs.length + (takesHeaders(definition) ? 1 : 0);
+  const places = Math.max(definition.inputs.length, cells.length) + (takesHeaders(definition) ? 1 : 0);
   return [...cells, ...new Array<string>(places - cells.length).fill(""), result];
 }
 

@@ -1,6 +1,6 @@
 /**
  * The formula of a definition as MathML, undefined where it is told in words. The plain notation: juxtaposed factors,
- * `/`, `^`, `+`, `-`, `=`, round brackets, `sin`, names of Greek letters; what follows ";", or a comma and words, explains
+ * `/`, `^`, `+`, `-`, `=`, round brackets, `sin`, `cos`, `tan`, names of Greek letters, `_` for what stands below; what follows ";", or a comma and words, explains
  * the symbols and is left out.
  */
 export function formulaMath(formula: string): string | undefined {
@@ -17,16 +17,43 @@ interface Reader {
   at: number;
 }
 
-const greek: Readonly<Record<string, string>> = { pi: "\u03c0", lambda: "\u03bb", sigma: "\u03c3", omega: "\u03c9" };
+const greek: Readonly<Record<string, string>> = {
+  delta: "\u03b4",
+  eta: "\u03b7",
+  gamma: "\u03b3",
+  lambda: "\u03bb",
+  nu: "\u03bd",
+  omega: "\u03c9",
+  phi: "\u03c6",
+  pi: "\u03c0",
+  sigma: "\u03c3",
+};
 
 /** Symbols of more than one letter; any other word means that the formula is told in words. */
 const symbols: Readonly<Record<string, string>> = {
   dlambda: "<mi>\u0394\u03bb</mi>",
   dx: "<mi>\u0394x</mi>",
-  lambda_air: `<msub><mi>\u03bb</mi><mi mathvariant="normal">air</mi></msub>`,
-  lambda_vac: `<msub><mi>\u03bb</mi><mi mathvariant="normal">vac</mi></msub>`,
-  a_star: `<msub><mi>a</mi><mo>\u2217</mo></msub>`,
 };
+
+const namedFunctions = new Set(["sin", "cos", "tan"]);
+
+/** A letter, Latin or Greek, alone or with what stands below it: `P`, `sigma_K`, `t_0`, `a_star`. */
+function symbolOf(token: string): string | undefined {
+  const [letter = "", below] = token.split("_");
+  const base =
+    symbols[token] ??
+    (/^[A-Za-z]$/.test(letter) || letter in greek ? `<mi>${greek[letter] ?? letter}</mi>` : undefined);
+  if (below === undefined || base === undefined) return base;
+  const under =
+    below === "star"
+      ? "<mo>\u2217</mo>"
+      : /^\d+$/.test(below)
+        ? `<mn>${below}</mn>`
+        : below.length === 1
+          ? `<mi>${below}</mi>`
+          : `<mi mathvariant="normal">${below}</mi>`;
+  return `<msub>${base}${under}</msub>`;
+}
 
 /** The clauses up to the first that is none of symbols: ", solved exactly for m". */
 function equationsIn(formula: string): string {
@@ -36,9 +63,9 @@ function equationsIn(formula: string): string {
 }
 
 function tokensOf(text: string): readonly string[] | undefined {
-  const tokens = text.match(/[A-Za-z_]+|\d+(?:\.\d+)?|\S/g) ?? [];
+  const tokens = text.match(/[A-Za-z]+(?:_[A-Za-z0-9]+)?|\d+(?:\.\d+)?|\S/g) ?? [];
   const isKnown = (token: string) =>
-    /^[\d.]+$|^[-+/^()=,]$|^[A-Za-z]$/.test(token) || token === "sin" || token in greek || token in symbols;
+    /^\d+(?:\.\d+)?$|^[-+/^()=,]$/.test(token) || namedFunctions.has(token) || symbolOf(token) !== undefined;
   return tokens.every(isKnown) ? tokens : undefined;
 }
 
@@ -55,7 +82,9 @@ function equations(reader: Reader): string | undefined {
 }
 
 function sum(reader: Reader): string | undefined {
-  let math = quotient(reader);
+  const isNegative = peek(reader) === "-" && take(reader) === "-";
+  const first = quotient(reader);
+  let math = first && `${isNegative ? "<mo>\u2212</mo>" : ""}${first}`;
   while (math !== undefined && (peek(reader) === "+" || peek(reader) === "-")) {
     const sign = take(reader) === "-" ? "\u2212" : "+";
     const right = quotient(reader);
@@ -110,12 +139,10 @@ function primary(reader: Reader): string | undefined {
     return inside !== undefined && take(reader) === ")" ? `${open}${inside}${close}` : undefined;
   }
   if (/^[\d.]+$/.test(token)) return `<mn>${token}</mn>`;
-  if (token === "sin") {
-    const argument = power(reader);
-    return argument && `<mrow><mi>sin</mi><mo>\u2061</mo>${argument}</mrow>`;
-  }
+  if (namedFunctions.has(token)) return applied(token, reader);
   if (!/^[A-Za-z]/.test(token)) return undefined;
-  const symbol = symbols[token] ?? `<mi>${greek[token] ?? token}</mi>`;
+  const symbol = symbolOf(token);
+  if (symbol === undefined) return undefined;
   const isApplied = (token === "n" || token === "f") && peek(reader) === "(";
   const argument = isApplied ? primary(reader) : "";
   return argument === undefined
@@ -123,6 +150,18 @@ function primary(reader: Reader): string | undefined {
     : argument === ""
       ? symbol
       : `<mrow>${symbol}<mo>\u2061</mo>${argument}</mrow>`;
+}
+
+/** `sin i`, `cos (nu + omega)`, `sin^2 omega`. */
+function applied(name: string, reader: Reader): string | undefined {
+  let head: string | undefined = `<mi>${name}</mi>`;
+  if (peek(reader) === "^") {
+    take(reader);
+    const exponent = primary(reader);
+    head = exponent && `<msup>${head}<mrow>${bare(exponent)}</mrow></msup>`;
+  }
+  const argument = head && power(reader);
+  return argument && `<mrow>${head}<mo>\u2061</mo>${argument}</mrow>`;
 }
 
 const open = "<mrow><mo>(</mo>";

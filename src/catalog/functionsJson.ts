@@ -1,5 +1,5 @@
-import { argumentNames } from "../functions/argumentNames.js";
-import type { Definition, Input } from "../functions/definition.js";
+import { argumentNames, isRepeating } from "../functions/argumentNames.js";
+import type { Definition, Input, WordInput } from "../functions/definition.js";
 import { definitions } from "../functions/definitions.js";
 import type { Kind } from "../units/kind.js";
 import { resultText } from "./describeFunction.js";
@@ -30,6 +30,7 @@ export interface HostParameter {
   readonly type: "any";
   readonly dimensionality: "matrix";
   readonly optional?: true;
+  readonly repeating?: true;
   readonly customEnumId?: string;
 }
 
@@ -61,14 +62,28 @@ function hostFunction(definition: Definition, helpAddress: string): HostFunction
   };
 }
 
-/** A host wants every argument after one that may be left out to be so too; the call says what it misses. */
+/**
+ * A host wants every argument after one that may be left out to be so too; the call says what it misses. Where an input
+ * repeats, nothing can follow it: headers and result header are more of the same argument to the host.
+ */
 function parameters(definition: Definition): HostParameter[] {
+  const inputs: readonly Input[] = definition.inputs;
+  if (isRepeating(inputs.at(-1))) {
+    return inputs.map((input) => ({
+      name: input.name.replaceAll(" ", "_"),
+      description: `${capital(describeInput(input))}. Then the header cells, then the header cell of the result, where they are given.`,
+      type: "any",
+      dimensionality: "matrix",
+      ...(isRepeating(input) ? { repeating: true } : {}),
+    }));
+  }
   const names = argumentNames(definition);
   const required = names.findIndex((name) => name.startsWith("["));
   return names.map((written, index): HostParameter => {
     const input: Input | undefined = definition.inputs[index];
     const name = written.replace(/[[\]]/g, "");
-    const choiceId = input?.takes === "word" ? wordsId(name) : input ? undefined : resultChoices(definition, name);
+    const choiceId =
+      input?.takes === "word" ? wordsId(definition, input) : input ? undefined : resultChoices(definition, name);
     return {
       name: name.replaceAll(" ", "_"),
       description: description(definition, input, name),
@@ -95,8 +110,11 @@ function exampleUnit(definition: Definition): string {
   return definition.form === "number" ? definition.result.unit : "km/s";
 }
 
-function wordsId(name: string): string {
-  return `BARY.${name}`;
+/** Inputs of one name share their choices, unless these differ between functions. */
+function wordsId(definition: Definition, { name, words }: WordInput): string {
+  const others = definitions.flatMap(({ inputs }) => inputs as readonly Input[]);
+  const differ = others.some((other) => other.takes === "word" && other.name === name && other.words !== words);
+  return differ ? `BARY.${definition.name}.${name}` : `BARY.${name}`;
 }
 
 function unitsId(kind: Kind | undefined): string {
@@ -115,7 +133,7 @@ function choices(): HostChoices[] {
   for (const definition of definitions) {
     for (const input of definition.inputs as readonly Input[]) {
       if (input.takes !== "word") continue;
-      const id = wordsId(input.name);
+      const id = wordsId(definition, input);
       words.set(
         id,
         hostChoices(

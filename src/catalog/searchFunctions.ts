@@ -86,7 +86,7 @@ function indexOf(definition: Definition): Index {
   for (const input of definition.inputs as readonly Input[]) {
     add(input.name, weights.input);
     if (input.takes === "quantity") add(wordsAbout(input.quantity), weights.input);
-    if (input.takes === "text") add(input.meaning, weights.remark);
+    if (input.takes === "text" || input.takes === "count") add(input.meaning, weights.remark);
     if (input.takes === "word")
       add(input.words.map(({ word, meaning }) => `${word} ${meaning}`).join(" "), weights.remark);
   }

@@ -14,6 +14,7 @@ export interface UsualUnit {
 const besides: Readonly<Record<Kind, readonly string[]>> = {
   speed: ["cm/s"],
   length: ["km", "um", "nm"],
+  instant: ["BJD_TDB-2450000", "JD_UTC", "MJD_UTC"],
 };
 
 /** Rows of the unit table that are read but not worth offering: second names, and years nobody asks for. */

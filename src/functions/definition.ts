@@ -14,6 +14,15 @@ export interface QuantityInput {
   readonly fallback: number | undefined;
   /** What the fallback means, for the help: "90 deg". */
   readonly fallbackText: string | undefined;
+  /** The last input of its function, given once or more; the computation receives a column for each. */
+  readonly repeats?: true;
+  /** It has no uncertainty in the cells beside it, which could be taken for more of its kind; a text may state one. */
+  readonly alone?: true;
+  /**
+   * The fallback holds only while those other inputs are 0; where one is not, this input must be given. Here a blank cell
+   * and 0 are the same, since a worksheet may hand one over as the other.
+   */
+  readonly needed?: { readonly by: readonly string[]; readonly because: string };
 }
 
 /** A number in any unit of any kind. */
@@ -22,10 +31,14 @@ export interface AnyQuantityInput {
   readonly name: string;
 }
 
-/** One of a few words; the computation receives the word's place in the list. The first is the fallback. */
+/**
+ * One of a few words; the computation receives the word's place in the list. The first is the fallback where the input
+ * is not required.
+ */
 export interface WordInput {
   readonly takes: "word";
   readonly name: string;
+  readonly required?: true;
   readonly words: readonly { readonly word: string; readonly meaning: string }[];
 }
 
@@ -36,7 +49,15 @@ export interface TextInput {
   readonly meaning: string;
 }
 
-export type Input = QuantityInput | AnyQuantityInput | WordInput | TextInput;
+/** How many results to give below each other, 1 where left out; the computation receives the place of each, from 1. */
+export interface CountInput {
+  readonly takes: "count";
+  readonly name: string;
+  readonly meaning: string;
+  readonly most: number;
+}
+
+export type Input = QuantityInput | AnyQuantityInput | WordInput | TextInput | CountInput;
 
 /** A call as typed, and what the world outside says it gives. */
 export interface Example {
@@ -62,9 +83,26 @@ interface Common {
 /** Quantities in, one quantity out. */
 export interface NumberDefinition extends Common {
   readonly form: "number";
-  readonly inputs: readonly (QuantityInput | WordInput)[];
-  readonly result: { readonly quantity: Quantity; readonly unit: string };
+  readonly inputs: readonly (QuantityInput | WordInput | CountInput)[];
+  readonly result: {
+    readonly quantity: Quantity;
+    readonly unit: string;
+    /** The input, an instant, in whose own unit the result is given instead. */
+    readonly as?: string;
+  };
   readonly compute: Compute;
+  /** The same before the result is made whole: what uncertainties follow, since steps have no slope. */
+  readonly beforeRounding?: Compute;
+  /**
+   * A whole number that the values decide and their uncertainties leave as it is, such as the turns that have passed. It is
+   * computed once and stands last among the columns of `compute`.
+   */
+  readonly settle?: Compute;
+  /**
+   * By name of an input: how far it may move before the result bends, in base units, where that is not the size of the
+   * value. Derivatives are taken within a small part of it.
+   */
+  readonly scales?: Readonly<Record<string, Compute>>;
   /** Why values inside their ranges may have no result together, and what to do: ends a sentence. */
   readonly unanswered?: string;
 }
@@ -106,4 +144,19 @@ export function required(quantity: Quantity, name: string = quantity.name): Quan
 
 export function optional(quantity: Quantity, fallback: number, fallbackText: string): QuantityInput {
   return { takes: "quantity", name: quantity.name, quantity, fallback, fallbackText };
+}
+
+export function repeating(quantity: Quantity): QuantityInput {
+  return { ...required(quantity), repeats: true, alone: true };
+}
+
+/** An input that may be left out only while others are 0. */
+export function neededBy(
+  by: readonly string[],
+  because: string,
+  quantity: Quantity,
+  fallback: number,
+  fallbackText: string,
+): QuantityInput {
+  return { ...optional(quantity, fallback, fallbackText), needed: { by, because } };
 }

@@ -1,10 +1,24 @@
 import type { Definition } from "./definition.js";
+import { airmass } from "./night/airmass.js";
+import { altitude } from "./night/altitude.js";
+import { hoursUp } from "./night/hoursUp.js";
+import { moonLit } from "./night/moonLit.js";
+import { moonSep } from "./night/moonSep.js";
 import { axis } from "./orbit/axis.js";
 import { period } from "./orbit/period.js";
 import { planetSpeed } from "./orbit/planetSpeed.js";
 import { starAxis } from "./orbit/starAxis.js";
 import { starSpeed } from "./orbit/starSpeed.js";
 import { totalMass } from "./orbit/totalMass.js";
+import { electrons } from "./plan/electrons.js";
+import { exposure } from "./plan/exposure.js";
+import { hours } from "./plan/hours.js";
+import { massVisits } from "./plan/massVisits.js";
+import { noiseSum } from "./plan/noiseSum.js";
+import { qNoise } from "./plan/qNoise.js";
+import { rvNoise } from "./plan/rvNoise.js";
+import { significance } from "./plan/significance.js";
+import { visits } from "./plan/visits.js";
 import { massFunction } from "./reflex/massFunction.js";
 import { minMass } from "./reflex/minMass.js";
 import { planetMass } from "./reflex/planetMass.js";
@@ -18,6 +32,12 @@ import { pixelSpeed } from "./shift/pixelSpeed.js";
 import { shift } from "./shift/shift.js";
 import { shiftSpeed } from "./shift/shiftSpeed.js";
 import { vacuum } from "./shift/vacuum.js";
+import { anomaly } from "./time/anomaly.js";
+import { barySpeed } from "./time/barySpeed.js";
+import { baryTime } from "./time/baryTime.js";
+import { event } from "./time/event.js";
+import { phase } from "./time/phase.js";
+import { rvAt } from "./time/rvAt.js";
 import { constant } from "./units/constant.js";
 import { into } from "./units/into.js";
 import { tag } from "./units/tag.js";
@@ -48,4 +68,24 @@ export const definitions: readonly Definition[] = [
   pixelSpeed,
   vacuum,
   air,
+  anomaly,
+  rvAt,
+  phase,
+  event,
+  barySpeed,
+  baryTime,
+  altitude,
+  airmass,
+  hoursUp,
+  moonSep,
+  moonLit,
+  rvNoise,
+  exposure,
+  qNoise,
+  electrons,
+  noiseSum,
+  visits,
+  massVisits,
+  significance,
+  hours,
 ];

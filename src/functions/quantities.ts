@@ -1,3 +1,6 @@
+export * from "./nightQuantities.js";
+export * from "./planQuantities.js";
+
 import {
   astronomicalUnit,
   day,
@@ -8,6 +11,9 @@ import {
   terrestrialMassParameter,
 } from "../kernel/constants.js";
 import { above, atLeast, atMost, below, type Quantity } from "./quantity.js";
+
+export * from "./skyQuantities.js";
+export * from "./timeQuantities.js";
 
 const positive = (reason: string) => above(0, "0", reason);
 const hasMass = positive("a body has mass");

@@ -16,6 +16,18 @@ export interface Quantity {
   readonly name: string;
   readonly meaning: string;
   readonly kind: Kind;
+  /**
+   * An angle that may be written `13:08:00`, in hours or in degrees. One in hours is in hours, too, under a header in `h`,
+   * which for anything else is an hour of time.
+   */
+  readonly sexagesimal?: "hours" | "degrees";
+  /** An instant that the computation takes in this frame, "JD_UTC"; without one, it is in that of the other instants. */
+  readonly frame?: string;
+  /**
+   * A cell that holds the number 0 is taken for a blank one, which a worksheet may hand over so, and refused: its range
+   * includes 0, and a true 0 is typed with its unit.
+   */
+  readonly zeroIsBlank?: true;
   readonly lower: Bound | undefined;
   readonly upper: Bound | undefined;
   /** Unit of its columns, in which examples are given. */

@@ -32,3 +32,13 @@ export function isVelocity(value: number): boolean {
   const speed = Math.abs(value);
   return speed < speedOfLight && isMagnitudeOrZero(speed);
 }
+
+/** [mag] An apparent magnitude that a star can have: the Sun's is -26.7. */
+export function isApparentMagnitude(value: number): boolean {
+  return value >= -30 && value <= 40;
+}
+
+/** [1] A part of a whole that is not nothing. */
+export function isPart(value: number): boolean {
+  return isMagnitude(value) && value <= 1;
+}

@@ -5,7 +5,7 @@ import { isWithin, openRange } from "../call/range.js";
 import { readCell } from "../call/readCell.js";
 import * as quantities from "../functions/quantities.js";
 import type { Quantity } from "../functions/quantity.js";
-import { conjunctionAnomaly, starVelocity } from "../kernel/starVelocity.js";
+import { periastron, radialVelocity, transit } from "../kernel/orbit/radialVelocity.js";
 import { fromBase, toBase, type Unit } from "../units/unit.js";
 import { recogniseColumn } from "./recogniseColumn.js";
 
@@ -42,13 +42,15 @@ export function orbitCurve(row: readonly RowCell[]): OrbitCurve {
   const found = amplitudeOf(row, assumed);
   if ("message" in found) return { is: "missing", message: found.message };
   const eccentricity = valueOfQuantity(row, quantities.eccentricity) ?? fallback(0, "a circular orbit", assumed);
-  const argument = argumentOf(row) ?? fallback(Math.PI / 2, "argument of periastron 90 deg", assumed);
+  const argument =
+    valueOfQuantity(row, quantities.omega) ?? fallback(Math.PI / 2, "argument of periastron 90 deg", assumed);
   const reference = referenceOf(row);
   if (!reference) assumed.push("phases from the passage in front of the star");
-  const start = reference?.isPeriastron ? 0 : conjunctionAnomaly(eccentricity, argument);
+  const event = reference?.isPeriastron ? periastron : transit;
   const phases = Float64Array.from({ length: points + 1 }, (_, index) => index / points);
+  // A period of a day, so that a phase is a time; the velocity is in the unit of the amplitude.
   const velocities = phases.map((phase) =>
-    starVelocity(found.amplitude, eccentricity, argument, start + 2 * Math.PI * phase),
+    radialVelocity(phase, day, found.amplitude, 0, eccentricity, argument, 0, event),
   );
   const period = valueOfQuantity(row, quantities.period);
   return {
@@ -107,7 +109,7 @@ function reading(row: readonly RowCell[], quantity: Quantity): BaseReading | und
       quantity.name,
       cell,
       { header: undefined, unit: recognised.unit, problem: undefined },
-      quantity.kind,
+      quantity,
     );
     if (read instanceof CellError || "about" in read) continue;
     const base = toBase(read.unit, read.value);
@@ -125,29 +127,8 @@ function valueOfQuantity(row: readonly RowCell[], quantity: Quantity): number | 
   return reading(row, quantity)?.base;
 }
 
-const argumentNames =
-  /^(?:omega|\u03c9|w|peri|arg(?:ument)?[ _]?(?:of)?[ _]?peri\w*|longitude of periastron)(?:[ _]?(?:star|\*|1))?$/i;
-const periastronNames = /peri|^t_?p$/i;
-const referenceNames = /^t_?(?:0|c|p|conj|tra|transit|ref)|transit|conjunction|peri|epoch/i;
-
-function argumentOf(row: readonly RowCell[]): number | undefined {
-  for (const { header, cell } of row) {
-    const { name, unit, isUncertainty } = recogniseColumn(header);
-    if (isUncertainty || unit?.kind !== "angle" || !argumentNames.test(name.trim())) continue;
-    if (typeof cell === "number") return toBase(unit, cell);
-  }
-  return undefined;
-}
-
 function referenceOf(row: readonly RowCell[]) {
-  for (const { header, cell } of row) {
-    const { name, unit, isUncertainty } = recogniseColumn(header);
-    if (isUncertainty || unit?.kind !== "instant" || typeof cell !== "number" || !referenceNames.test(name)) continue;
-    return {
-      day: toBase(unit, cell) + julianDateOfJ2000,
-      frame: unit.frame ?? "",
-      isPeriastron: periastronNames.test(name),
-    };
-  }
-  return undefined;
+  const transit = reading(row, quantities.referenceTime);
+  const found = transit ?? reading(row, quantities.periastronTime);
+  return found && { day: found.base + julianDateOfJ2000, frame: found.unit.frame ?? "", isPeriastron: !transit };
 }

@@ -1,3 +1,4 @@
+import { angleOf } from "../call/headerUnit.js";
 import * as quantities from "../functions/quantities.js";
 import type { Quantity } from "../functions/quantity.js";
 import { isProblem, type UnitProblem } from "../units/problem.js";
@@ -34,7 +35,10 @@ export function recogniseColumn(header: string, unitCell?: string): RecognisedCo
   const problem = reading.problem ?? (below && isProblem(below) ? below : undefined);
   const name = reading.name || header.trim();
   const bare = name.replace(uncertaintyWords, " ").trim();
-  return { name, unit, problem, quantity: quantityNamed(bare, unit), isUncertainty: bare !== name.trim() };
+  const quantity = quantityNamed(bare, unit);
+  // An hour of right ascension is no hour of time.
+  const own = quantity?.sexagesimal === "hours" ? angleOf(unit) : unit;
+  return { name, unit: own, problem, quantity, isUncertainty: bare !== name.trim() };
 }
 
 interface NamedQuantity {
@@ -49,18 +53,24 @@ const named: readonly NamedQuantity[] = Object.values(quantities).flatMap((quant
 /** The quantity whose name stands in a header, the longest name first; one of the unit's kind before any other. */
 function quantityNamed(name: string, unit: Unit | undefined): Quantity | undefined {
   const words = plainWords(name);
-  const fits = ({ quantity }: NamedQuantity) => unit === undefined || quantity.kind === unit.kind;
+  const fits = ({ quantity }: NamedQuantity) =>
+    unit === undefined || quantity.kind === (quantity.sexagesimal === "hours" ? angleOf(unit).kind : unit.kind);
   const whole = named.filter((candidate) => candidate.words === words);
   const within = aboutAnother.test(name)
     ? []
     : named
-        .filter((candidate) => !isSymbol(candidate.words) && ` ${words} `.includes(` ${candidate.words} `))
+        .filter((candidate) => !isVague(candidate.words) && ` ${words} `.includes(` ${candidate.words} `))
         .sort((a, b) => b.words.length - a.words.length);
   const candidates = [...whole, ...within];
   const fitting = candidates.find(fits);
   if (fitting) return fitting.quantity;
   // One letter means many things: "K [mag]" is a brightness and no semi-amplitude with a slip in its unit.
-  return candidates.find((candidate) => !isSymbol(candidate.words))?.quantity;
+  return candidates.find((candidate) => !isVague(candidate.words))?.quantity;
+}
+
+/** A name that heads a column only where it stands alone: an exposure time is no instant. */
+function isVague(name: string): boolean {
+  return isSymbol(name) || name === "time";
 }
 
 export function isSymbol(name: string): boolean {

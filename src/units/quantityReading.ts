@@ -6,4 +6,6 @@ export interface QuantityReading {
   readonly upper: number | undefined;
   readonly lower: number | undefined;
   readonly unit: Unit | undefined;
+  /** The value as it was written, where that has more digits than one double holds. */
+  readonly digits?: string;
 }

@@ -19,6 +19,9 @@ const form = new RegExp(
 const squared = /^\[([^[\]]*)\]$/;
 const uncertaintyAfterUnit = new RegExp(`^([^\u00b1]*?)\\s*${plusMinus}\\s*(${number})[^\u00b1]*$`, "s");
 
+/** Any decimal of fifteen digits comes back from a double. */
+const mostDigits = 15;
+
 /**
  * Reads a quantity text: `4.23 d`, `0.47 \u00b1 0.02 jupiterMass`, `4.2308(2) d` (the digits in brackets are the
  * uncertainty of the last digits), `0.47 +- 0.02`, `0.47 +0.03 -0.02 jupiterMass`, an ISO 8601 instant.
@@ -47,7 +50,8 @@ export function readQuantity(text: string): QuantityReading | QuantityProblem {
   if (![read, ...sigmas].every((part) => part === undefined || Number.isFinite(part))) {
     return { problem: "not a number", text, hint: undefined };
   }
-  return { value: read, upper: absolute(sigmas[0]), lower: absolute(sigmas[1]), unit };
+  const reading = { value: read, upper: absolute(sigmas[0]), lower: absolute(sigmas[1]), unit };
+  return value!.length > mostDigits && !exponent ? { ...reading, digits: value! } : reading;
 }
 
 /** 4,23 is a decimal comma; 1,234 may also be a thousand and more. */

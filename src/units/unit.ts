@@ -27,6 +27,18 @@ export function toBase(unit: Unit, value: number): number {
   return (value * unit.times) / unit.over + unit.plus;
 }
 
+const longDate = /^\d{1,8}\.\d+$/;
+
+/**
+ * `toBase` of a number as it was written. A Julian date in one double is good to 40 microseconds; the days and their part
+ * read one by one give the days from J2000.0 to a tenth of a microsecond.
+ */
+export function toBaseOf(unit: Unit, value: number, digits: string | undefined): number {
+  if (digits === undefined || unit.kind !== "instant" || !longDate.test(digits)) return toBase(unit, value);
+  const point = digits.indexOf(".");
+  return Number(digits.slice(0, point)) + unit.plus + Number(digits.slice(point));
+}
+
 export function fromBase(unit: Unit, value: number): number {
   const linear = ((value - unit.plus) * unit.over) / unit.times;
   if (unit.logarithm === "log10") return Math.log10(linear);

@@ -114,14 +114,18 @@ export const unitTable: readonly UnitRow[] = [
 
   row("deg", "degree", Math.PI / 180, "rad", {
     ...prefixed,
-    spellings: ["\u00b0"],
+    spellings: ["\u00b0", "d:m:s", "dms"],
     words: ["degree", "degrees", "degs"],
   }),
   row("rad", "radian", 1, "rad", { ...prefixed, words: ["radian", "radians"] }),
   row("arcmin", "minute of arc", Math.PI, "rad", { over: 10800, ...prefixed, spellings: ["\u2032"] }),
   row("arcsec", "second of arc", Math.PI, "rad", { over: 648000, ...prefixed, spellings: ["\u2033"] }),
   row("mas", "thousandth of a second of arc", Math.PI, "rad", { over: 648000000 }),
-  row("hourangle", "hour of right ascension, 15 deg", Math.PI, "rad", { over: 12, source: practice }),
+  row("hourangle", "hour of right ascension, 15 deg", Math.PI, "rad", {
+    over: 12,
+    spellings: ["h:m:s", "hms"],
+    source: practice,
+  }),
   row("sr", "steradian", 1, "rad^2", prefixed),
 
   row("1", "plain number", 1, "", { spellings: ["-", "--"], words: ["dimensionless", "none", "unitless"] }),

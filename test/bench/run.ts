@@ -1,12 +1,16 @@
 import { benchFill } from "./fill.js";
 import { benchPage } from "./page.js";
+import { benchPlan } from "./plan.js";
 import { benchReflex } from "./reflex.js";
 import { benchSheet } from "./sheet.js";
+import { benchTime } from "./time.js";
 
 /** `npm run bench [part]`: timings that compare two things in one run; they never decide a test. */
 const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
+  time: benchTime,
   fill: benchFill,
+  plan: benchPlan,
   sheet: () => benchSheet(print),
   page: () => benchPage(print),
 };

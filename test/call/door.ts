@@ -3,6 +3,7 @@ import { CellError } from "../../src/call/cell.js";
 import type { Argument, CellFunction } from "../../src/call/cellFunction.js";
 import { findCellFunction } from "../../src/call/cellFunctions.js";
 import { blockOf, cellsOf } from "../../src/call/column.js";
+import type { Input } from "../../src/functions/definition.js";
 import type { Quantity } from "../../src/functions/quantity.js";
 
 /** What a test hands over for one argument: a cell, a rectangle of rows, a rectangle that stands at an address, or nothing. */
@@ -42,6 +43,12 @@ export function functionNamed(name: string): CellFunction {
 /** The example value of a quantity as text that carries its unit. */
 export function exampleText({ example, unit }: Quantity): string {
   return unit === "1" ? String(example) : `${example} ${unit}`;
+}
+
+/** What a test gives for an input of which any good value will do: its example, and nothing where it may be left out. */
+export function exampleOf(input: Input): Given {
+  if (input.takes === "quantity") return exampleText(input.quantity);
+  return input.takes === "word" && input.required ? input.words[0]!.word : undefined;
 }
 
 /** All cells that a call gives, row by row. */

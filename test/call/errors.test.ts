@@ -9,6 +9,7 @@ function goodCall(name: string): { readonly values: Cell[]; readonly definition:
   const values = definition.inputs.map((input): Cell => {
     if (input.takes === "word") return input.words[0]!.word;
     if (input.takes === "quantity") return exampleText(input.quantity);
+    if (input.takes === "count") return 1;
     return definition.examples[0].cells[0]!;
   });
   return { values, definition };

@@ -3,7 +3,7 @@ import { CellError } from "../../src/call/cell.js";
 import type { QuantityInput } from "../../src/functions/definition.js";
 import { definitions } from "../../src/functions/definitions.js";
 import { isPlainNumberKind } from "../../src/units/kind.js";
-import { call, column, errorFrom, exampleText, type Given, headerRow, numberFrom } from "./door.js";
+import { call, column, errorFrom, exampleOf, type Given, headerRow, numberFrom } from "./door.js";
 
 /** The semi-amplitude of 1 jupiterMass around 1 solMass in a year of 365.25 d; computed: mpmath, 60 digits, from IAU 2015 B3. */
 const amplitudeOfOne = 28.4324740778828;
@@ -166,7 +166,7 @@ describe("no silent default", () => {
 
   test.each(dimensional)("$name: a bare $input is refused", ({ definition, name, input }) => {
     const values: Given[] = definition.inputs.map((one) =>
-      one.takes !== "quantity" ? undefined : one.name === input ? one.quantity.example : exampleText(one.quantity),
+      one.takes === "quantity" && one.name === input ? one.quantity.example : exampleOf(one),
     );
     const error = errorFrom(name, ...values);
     expect(error.code).toBe("#VALUE!");

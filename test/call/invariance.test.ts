@@ -6,9 +6,9 @@ import { definitions } from "../../src/functions/definitions.js";
 import { isProblem } from "../../src/units/problem.js";
 import { quantityText } from "../../src/units/quantityText.js";
 import { readUnit } from "../../src/units/readUnit.js";
-import { one, type Unit } from "../../src/units/unit.js";
+import { one, toBase, type Unit } from "../../src/units/unit.js";
 import { unitTable } from "../../src/units/unitTable.js";
-import { exampleText, type Given, numberFrom } from "./door.js";
+import { exampleOf, type Given, numberFrom } from "./door.js";
 
 Decimal.set({ precision: 60 });
 
@@ -25,7 +25,12 @@ for (const text of [...symbols, ...compounds, "10**27kg", "2.5d", "10**-3"]) {
 }
 
 const numeric = definitions.filter((definition): definition is NumberDefinition => definition.form === "number");
-const inputs = numeric.flatMap((definition) =>
+// An instant has a zero of its own, a small part of a period is a large part of its orbit, and what the sky shows changes by
+// no power law: test/call/times.test.ts, test/kernel/night.test.ts.
+const takesInstant = ({ inputs }: NumberDefinition) =>
+  inputs.some((input) => input.takes === "quantity" && input.quantity.kind === "instant");
+const proportional = numeric.filter((one) => !takesInstant(one));
+const inputs = proportional.flatMap((definition) =>
   definition.inputs.flatMap((input, index) =>
     input.takes === "quantity" ? [{ name: definition.name, definition, input, index, label: input.name }] : [],
   ),
@@ -49,12 +54,13 @@ describe("the same quantity in any unit gives the same result", () => {
     const own = readUnit(input.quantity.unit) as Unit;
     const values = (value: number, unit: Unit): Given[] =>
       definition.inputs.map((one, at): Given => {
-        if (one.takes === "word") return undefined;
-        if (at !== index) return exampleText(one.quantity);
+        if (at !== index) return exampleOf(one);
         return quantityText({ value, upper: undefined, lower: undefined, unit });
       });
     fc.assert(
-      fc.property(fc.constantFrom(...known.get(input.quantity.kind)!), factorFor(input), (unit, factor) => {
+      fc.property(fc.constantFrom(...known.get(input.quantity.kind)!), factorFor(input), (unit, drawn) => {
+        // Far from its example an uncertain star puts the mass out of reach.
+        const factor = name === "MASSVISITS" ? drawn ** 0.05 : drawn;
         const value = input.quantity.example * factor;
         const result = numberFrom(name, ...values(value, own));
         const again = numberFrom(name, ...values(converted(value, own, unit), unit));
@@ -72,10 +78,11 @@ describe("the same quantity in any unit gives the same result", () => {
   });
 
   test.each(numeric)("$name: the result in any unit", ({ name, inputs, result }) => {
-    const values = inputs.map((one): Given => (one.takes === "word" ? undefined : exampleText(one.quantity)));
+    const values = inputs.map(exampleOf);
     const own = readUnit(result.unit) as Unit;
     const plain = numberFrom(name, ...values);
-    for (const unit of known.get(result.quantity.kind)!) {
+    // Instants in another zero, as conversions in test/units/readInstant.test.ts.
+    for (const unit of known.get(result.quantity.kind) ?? []) {
       const asked = numberFrom(name, ...values, undefined, unit.text);
       expect(Math.abs(converted(asked, unit, own) / plain - 1), unit.text).toBeLessThanOrEqual(3 * ulp);
     }
@@ -83,7 +90,7 @@ describe("the same quantity in any unit gives the same result", () => {
 
   test("asked for in its own unit, the result is the same to the last bit", () => {
     for (const { name, inputs, result } of numeric) {
-      const values = inputs.map((one): Given => (one.takes === "word" ? undefined : exampleText(one.quantity)));
+      const values = inputs.map(exampleOf);
       expect(numberFrom(name, ...values, undefined, result.unit)).toBe(numberFrom(name, ...values));
     }
   });
@@ -91,8 +98,14 @@ describe("the same quantity in any unit gives the same result", () => {
 
 /** Factors that leave the example inside its range, and a tenth of a percent beyond as well. */
 function factorFor({ quantity }: QuantityInput): fc.Arbitrary<number> {
-  const bounded = quantity.upper !== undefined && quantity.kind !== "speed";
-  return fc.double({ min: bounded ? 0.5 : 0.01, max: bounded ? 1.9 : 100, noNaN: true });
+  const example = toBase(readUnit(quantity.unit) as Unit, quantity.example);
+  if (quantity.upper === undefined || quantity.kind === "speed") {
+    const least = (quantity.lower?.at ?? 0) / example;
+    return fc.double({ min: Math.max(0.01, least * 1.002), max: 100, noNaN: true });
+  }
+  const ends = [0.5, 1.9, ...[quantity.lower, quantity.upper].map((bound) => (bound ? bound.at / example : 0.5))];
+  const [least, most] = [Math.max(ends[0]!, ends[2]! * 1.002), Math.min(ends[1]!, ends[3]! / 1.002)];
+  return fc.double({ min: least, max: most, noNaN: true });
 }
 
 test("a number without a unit is the unit 1", () => {

@@ -21,6 +21,11 @@ const noUnits = headerRow("B$1", "Period", "Star mass [solMass]", "Planet mass [
 const long =
   "a note about the star that somebody typed into the column of its masses, and which is far longer than a cell shows";
 
+/** A star and a site: RA, dec, longitude, latitude, height; then what may be left out. */
+const target = ["197 deg", "-30 deg", "-70.7345 deg", "-29.2584 deg", "2400 m"] as const;
+const siteHeaders = (...cells: readonly string[]) => headerRow("A$1", ...[...cells, "", "", "", "", ""].slice(0, 6));
+const nothing = [undefined, undefined, undefined, undefined] as const;
+
 /** Every sentence of a call that has no answer, branch by branch. */
 export const messageCalls: readonly MessageCall[] = [
   ...about(
@@ -39,9 +44,12 @@ export const messageCalls: readonly MessageCall[] = [
     ["INTO"],
     ["UNITOF"],
     ["CONSTANT"],
+    ["ELECTRONS", "9 mag", undefined, "3.6 m"],
+    ["NOISESUM", "3 m/s", undefined, "4 m/s"],
   ),
   ...about(
     "blank",
+    ["ELECTRONS", "9 mag", null, "3.6 m", 0.05, "900 s", "90 nm"],
     ["REFLEX", "4.23 d", null, "0.47 jupiterMass"],
     ["PIXELSHIFT", "1 m/s", 115000, null],
     ["SHIFTSPEED", null],
@@ -51,6 +59,8 @@ export const messageCalls: readonly MessageCall[] = [
     ["UNITOF", null],
     ["CONSTANT", null],
     ["AXIS", [[4.23, null]], "1.1 solMass", undefined, "d; solMass"],
+    ["EVENT", null, "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB"],
+    ["ANOMALY", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", null],
   ),
   ...about(
     "no unit",
@@ -129,6 +139,26 @@ export const messageCalls: readonly MessageCall[] = [
     ["VACUUM", "2.6 um"],
     ["MINMASS", "300000 km/s", "4.23 d", "1.1 solMass"],
     ["REFLEX", -4.23, 1.1, 0.47, undefined, undefined, threeHeaders],
+    ["BARYTIME", "2459001.5 JD_UTC", "197 deg", "95 deg", ...target.slice(2)],
+    ["BARYTIME", "2459001.5 JD_UTC", 197, "-30 deg", ...target.slice(2), siteHeaders("", "RA [h]")],
+    ["BARYTIME", "2459001.5 JD_UTC", "197 deg", "-30 deg", "-70.7345 deg", "95 deg", "2400 m"],
+    ["BARYTIME", "1971-12-31", ...target],
+    ["BARYTIME", "2036-01-01", ...target],
+    ["BARYSPEED", "2466200.5 JD_TT", ...target],
+    ["BARYSPEED", "2459001.5 JD_UTC", ...target, 0, 0, "35 arcsec", null, "; ; ; ; ; ; mas/yr; mas/yr; ; "],
+    ["PHASE", "1e7 BJD_TDB", "4 d", "2459000.5 BJD_TDB"],
+    ["QNOISE", 1e4, -5],
+    ["HOURSUP", "2027-06-21", "0 deg", "60 deg", "18.5 deg", "69.6 deg", "95 deg"],
+    ["HOURSUP", "2027-06-21", "0 deg", "60 deg", "18.5 deg", "69.6 deg", "30 deg", "18 deg"],
+    ["MOONLIT", "1950-01-01"],
+    ["HOURS", 24, "900 s", "-300 s"],
+    ["HOURS", 24, "900 s", "300 s", "120 %"],
+    ["HOURS", 0.5, "900 s", "300 s"],
+    ["SIGNIFICANCE", "2.5 m/s", "3 m/s", 1],
+    ["NOISESUM", "3 m/s", "-4 m/s"],
+    ["RVNOISE", "45 mag", "900 s", "0.9 m/s", "6 mag", "60 s"],
+    ["ELECTRONS", "9 mag", "V", "3.6 m", 1.5, "900 s", "90 nm"],
+    ["ELECTRONS", "9 mag", "V", "3.6 m", 0.05, "900 s", "90 nm", undefined, "0.1 mag", 0.5],
   ),
   ...about(
     "zero or blank",
@@ -137,6 +167,10 @@ export const messageCalls: readonly MessageCall[] = [
     ["REFLEX", "4.23 d", "1.1 solMass", "0.47 jupiterMass", 0, "0 deg"],
     ["MINMASS", "0 m/s", "4.23 d", "1.1 solMass"],
     ["PIXELSPEED", 1, 0, 3.2],
+    ["VISITS", "0 m/s", "3 m/s", 5],
+    ["HOURS", 24, "900 s", "300 s", 0],
+    ["QNOISE", 0, 2.5e9],
+    ["ELECTRONS", "9 mag", "V", "0 m", 0.05, "900 s", "90 nm"],
   ),
   ...about(
     "beyond numbers",
@@ -157,6 +191,9 @@ export const messageCalls: readonly MessageCall[] = [
     ["AIR", "500 nm", "Edlen1953"],
     ["AIR", "500 nm", "Ciddor96"],
     ["SHIFT", "1 m/s", 2],
+    ["EVENT", "eclipse", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB"],
+    ["VISITS", "2.5 m/s", "3 m/s", 5, "quadratures"],
+    ["ELECTRONS", "9 mag", "g", "3.6 m", 0.05, "900 s", "90 nm"],
   ),
   ...about(
     "lengths",
@@ -167,7 +204,9 @@ export const messageCalls: readonly MessageCall[] = [
     "shape",
     ["AXIS", [[1, 2, 3, 4]], "1 solMass"],
     ["UNITOF", [["K [m/s]", "P [d]"]]],
+    ["NOISESUM", [[3, 4]], "m/s"],
     ["SHIFT", "1 m/s", [["linear", "linear"]]],
+    ["EVENT", "transit", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", undefined, undefined, [[1], [2]]],
   ),
   ...about("header of another column", [
     "REFLEX",
@@ -194,6 +233,13 @@ export const messageCalls: readonly MessageCall[] = [
     ["REFLEX", 1e-10, 100, 1e5, undefined, undefined, threeHeaders],
     ["AXIS", "1e60 yr", "1.1 solMass"],
     ["PLANETMASS", "84.67 m/s", "3.52 d", "1.119 solMass", "1e-60 deg"],
+    ["RVNOISE", "9 mag", "900 s", "0.9 m/s", "6 mag", "60 s", "8.2 m"],
+    ["ELECTRONS", "9 mag", "V", "3.6 m", 0.05, "900 s", "90 nm", "4 m"],
+    ["ELECTRONS", "9 mag", "V", "3.6 m", 0.05, "900 s", "90 nm", undefined, "0.1 mag"],
+    ["VISITS", "2.5 m/s", "3 m/s", 5, undefined, 0.3],
+    ["MASSVISITS", "2.5 m/s", "3 m/s", "1 solMass", "0.05 solMass", 40],
+    ["AIRMASS", "2027-02-01T04:00:00", "0 deg", "-90 deg", "0 deg", "45 deg"],
+    ["HOURSUP", "2027-06-21", "0 deg", "60 deg", "18.5 deg", "69.6 deg"],
   ),
   ...about(
     "result unit missing",
@@ -223,6 +269,8 @@ export const messageCalls: readonly MessageCall[] = [
     ["INTO", "2455000 JD_UTC", undefined, "BJD_TDB"],
     ["INTO", "2455000 JD_UTC", undefined, "d"],
     ["CONSTANT", "c", "kg"],
+    ["EVENT", "transit", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", undefined, undefined, 1, undefined, "JD_UTC"],
+    ["BARYTIME", "2459001.5 JD_UTC", ...target, undefined, "Time [JD_UTC]"],
   ),
   {
     about: "several rows",
@@ -230,7 +278,70 @@ export const messageCalls: readonly MessageCall[] = [
     given: [[["1 d"], ["2 d"], ["3 d"]], "1 solMass"],
     filledDown: 1,
   },
+  {
+    about: "several rows",
+    function: "EVENT",
+    given: ["transit", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", undefined, undefined, 3],
+    filledDown: 2,
+  },
   ...about("no unit stated", ["UNITOF", "Period"], ["UNITOF", 4.23], ["UNITOF", "4.23"], ["UNITOF", ""]),
+  ...about(
+    "two frames",
+    ["PHASE", "2459001.5 BJD_TDB", "4 d", "2459000.5 JD_UTC"],
+    ["RVAT", 59001.5, 4, 50, 9000.5, undefined, undefined, undefined, undefined, "MJD_UTC; d; m/s; BJD_TDB-2450000"],
+    ["EVENT", "transit", "2024-03-01", "3 d", "2459000.5 BJD_TDB"],
+    ["EVENT", "transit", "2459100 BJD_TDB", "3 d", [["2459000.5 BJD_TDB"], ["2459000.5 HJD_UTC"]]],
+    ["ANOMALY", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TT", 0.1],
+  ),
+  ...about(
+    "no clock",
+    ["BARYTIME", "2459001.5 BJD_TDB", ...target],
+    ["BARYSPEED", "2459001.5 HJD_UTC", ...target],
+    ["BARYSPEED", "2459001.5 JD_UT1", ...target],
+  ),
+  ...about(
+    "zero of date",
+    ["BARYSPEED", 2455260.75, ...target, ...nothing, siteHeaders("Time [MJD_UTC]")],
+    ["BARYSPEED", 55260.25, ...target, ...nothing, siteHeaders("JD [JD_UTC]")],
+    ["BARYSPEED", "55260.25 JD_UTC", ...target],
+    ["PHASE", 9001.5, "4 d", "2459000.5 BJD_TDB", headerRow("A$1", "BJD [BJD_TDB]", "", "")],
+    ["PHASE", 2459001.5, "4 d", "2459000.5 BJD_TDB", headerRow("A$1", "BJD_TDB-2450000", "", "")],
+    ["BARYTIME", 59001.5, ...target, siteHeaders("Date [date serial]")],
+  ),
+  ...about(
+    "hours or degrees",
+    ["BARYTIME", "2459001.5 JD_UTC", "13:08:00", ...target.slice(1), siteHeaders("Time", "RA [deg]")],
+    ["BARYTIME", "2459001.5 JD_UTC", 197, "-30:00:00", ...target.slice(2), siteHeaders("", "deg", "dec [h:m:s]")],
+  ),
+  ...about(
+    "zero for blank",
+    ["PHASE", 9001.5, "4 d", 0, "BJD_TDB-2450000; ; BJD_TDB-2450000"],
+    ["BARYTIME", "2459001.5 JD_UTC", 0, "-30 deg", ...target.slice(2), siteHeaders("", "RA [h]")],
+    ["BARYTIME", "2459001.5 JD_UTC", "197 deg", "-30 deg", "1 deg", "2 deg", [[0], [0]], "; ; ; ; ; m"],
+  ),
+  ...about(
+    "needed",
+    ["RVAT", "2459001.5 BJD_TDB", "4 d", "50 m/s", "2459000.5 BJD_TDB", 0.3],
+    ["RVAT", "2459001.5 BJD_TDB", "4 d", "50 m/s", "2459000.5 BJD_TDB", 0.3, 0, undefined, undefined, "; ; ; ; ; deg"],
+    ["EVENT", "occultation", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", [[0], [0.1]], null],
+    ["BARYSPEED", "2459001.5 JD_UTC", ...target, "120 mas/yr"],
+  ),
+  ...about(
+    "count",
+    ["EVENT", "transit", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", undefined, undefined, 2.5],
+    ["EVENT", "transit", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", undefined, undefined, "many"],
+    ["EVENT", "transit", "2459001.5 BJD_TDB", "4 d", "2459000.5 BJD_TDB", undefined, undefined, 1e6],
+  ),
+  ...about("count of columns", [
+    "EVENT",
+    "transit",
+    "2459001.5 BJD_TDB",
+    [["4 d"], ["5 d"]],
+    "2459000.5 BJD_TDB",
+    undefined,
+    undefined,
+    3,
+  ]),
   ...about("unknown name", ["CONSTANT", "GMsun"], ["CONSTANT", "alpha"], ["CONSTANT", 3], ["CONSTANT", "C"]),
   ...about("passed on", [
     "REFLEX",

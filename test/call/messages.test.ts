@@ -35,6 +35,14 @@ const topics: Record<CallProblem["about"], true> = {
   "several rows": true,
   "no unit stated": true,
   "unknown name": true,
+  count: true,
+  "zero for blank": true,
+  "count of columns": true,
+  needed: true,
+  "two frames": true,
+  "no clock": true,
+  "zero of date": true,
+  "hours or degrees": true,
 };
 
 describe("the sentences", () => {

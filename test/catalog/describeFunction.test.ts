@@ -43,7 +43,9 @@ describe.each(definitions.map((definition) => [definition.name, definition] as c
     const called = lines[0]!
       .slice(lines[0]!.indexOf("(") + 1, -1)
       .split(", ")
-      .map((word) => word.replace(/[[\]]/g, ""));
+      .map((word) => word.replace(/[[\]]/g, ""))
+      // An input that repeats has one line.
+      .filter((word) => !word.endsWith("..."));
     const told = section("Inputs").map((line) => /^ {2}(\S+(?: \S+)*) {2,}\S/.exec(line)?.[1]);
     expect(told).toEqual(called);
   });

@@ -52,6 +52,7 @@ describe("functions.json", () => {
       if (definition.form !== "number") continue;
       const { kind } = definition.result.quantity;
       const result = json.functions.find(({ id }) => id === definition.name)!.parameters.at(-1)!;
+      if (result.repeating) continue;
       const { values } = json.enums.find(({ id }) => id === result.customEnumId)!;
       const units = values.map(({ stringValue }) => readUnit(stringValue));
       for (const unit of units) expect(isProblem(unit) || unit.kind).toBe(kind);
@@ -65,6 +66,13 @@ describe("functions.json", () => {
       "linear",
     ]);
     expect(json.functions.find(({ id }) => id === "AIR")!.parameters[1]!.customEnumId).toBe("BARY.formula");
+  });
+
+  test("leaves headers and result to an argument that repeats", () => {
+    const [noise, ...more] = json.functions.find(({ id }) => id === "NOISESUM")!.parameters;
+    expect(more).toEqual([]);
+    expect(noise).toMatchObject({ name: "noise", repeating: true, type: "any", dimensionality: "matrix" });
+    expect(noise!.description).toContain("Then the header cells");
   });
 
   test("leads to a paragraph of help that is there", async () => {
@@ -96,6 +104,15 @@ describe("the checks of functions.json find", () => {
     [{ id: "ABC1", name: "ABC1" }, "ABC1: id is a cell address"],
     [{ id: "BARY.INTO", name: "BARY.INTO" }, "BARY.INTO: id is not 3 to 64 capital letters and digits"],
     [{ id: "TAG", name: "TAG" }, "two functions TAG"],
+    [
+      {
+        parameters: [
+          { ...json.functions[0]!.parameters[0]!, repeating: true as const },
+          json.functions[0]!.parameters[1]!,
+        ],
+      },
+      "INTO: an argument that repeats is not the last",
+    ],
     [{ name: "Into" }, "INTO: name is not its id"],
     [{ description: "x".repeat(1025) }, "INTO: description is not 1 to 1024 characters"],
     [{ helpUrl: "http://localhost/help.html" }, "INTO: help is not at an https address"],

@@ -22,6 +22,9 @@ export function functionsJsonProblems({ functions, enums }: FunctionsJson): stri
         ...(flags.lastIndexOf(false) < flags.indexOf(true) || !flags.includes(true)
           ? []
           : [about("an argument that is needed follows one that may be left out")]),
+        ...(parameters.slice(0, -1).some(({ repeating }) => repeating)
+          ? [about("an argument that repeats is not the last")]
+          : []),
         ...twice(parameters.map((parameter) => parameter.name)).map((double) => about(`two arguments ${double}`)),
         ...parameters.flatMap((parameter) => [
           ...(/^[A-Za-z]\w{0,63}$/.test(parameter.name) ? [] : [about(`argument ${parameter.name} is no name`)]),

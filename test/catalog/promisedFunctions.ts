@@ -2,7 +2,8 @@ import type { FunctionsJson, HostParameter } from "../../src/catalog/functionsJs
 
 /** One line a function: its name and its arguments in order, as worksheets that are saved rely on them. */
 export function callLines({ functions }: FunctionsJson): string[] {
-  const written = ({ name, optional }: HostParameter) => (optional ? `[${name}]` : name);
+  const written = ({ name, optional, repeating }: HostParameter) =>
+    repeating ? `${name} ...` : optional ? `[${name}]` : name;
   return functions.map(({ id, parameters }) => `${id}(${parameters.map(written).join(", ")})`);
 }
 

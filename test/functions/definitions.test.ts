@@ -16,7 +16,11 @@ const named = definitions.map((definition) => ({ name: definition.name, definiti
 
 /** An input as the table of functions writes it: a question mark where it may be left out. */
 function written(input: Input): string {
-  const optional = input.takes === "word" || (input.takes === "quantity" && input.fallback !== undefined);
+  const optional =
+    (input.takes === "word" && !input.required) ||
+    (input.takes === "quantity" && input.fallback !== undefined) ||
+    input.takes === "count";
+  if (input.takes === "quantity" && input.repeats) return `${input.name} ...`;
   return optional ? `${input.name}?` : input.name;
 }
 
@@ -46,7 +50,8 @@ describe("names and arguments are promises", () => {
     expect(cellFunction.leastArguments).toBe(inputs.filter((input) => !written(input).endsWith("?")).length);
     // Then headers and result header: TAG has no result header, UNITOF neither, CONSTANT no headers.
     const more = form === "number" || form === "conversion" ? 2 : name === "UNITOF" ? 0 : 1;
-    expect(cellFunction.mostArguments).toBe(inputs.length + more);
+    const most = name === "NOISESUM" ? Number.POSITIVE_INFINITY : inputs.length + more;
+    expect(cellFunction.mostArguments).toBe(most);
   });
 });
 
@@ -71,9 +76,11 @@ describe.each(named)("$name", ({ definition }) => {
       } else if (input.takes === "word") {
         expect(input.words.length).toBeGreaterThan(1);
         for (const { word, meaning } of input.words) {
-          expect(word).toMatch(/^[A-Za-z][A-Za-z0-9]+$/);
+          expect(word).toMatch(/^[A-Za-z][A-Za-z0-9]*(-[a-z]+)?$/);
           expect(meaning).not.toBe("");
         }
+      } else if (input.takes === "count") {
+        expect(input.meaning).not.toBe("");
       }
     }
     if (definition.form === "number") {
@@ -99,7 +106,7 @@ describe.each(named)("$name", ({ definition }) => {
 });
 
 function exampleCell({ name, inputs, form }: Definition, cells: readonly string[], result: string | undefined) {
-  const given: Given[] = inputs.map((_, index) => cells[index]);
+  const given: Given[] = Array.from({ length: Math.max(inputs.length, cells.length) }, (_, index) => cells[index]);
   const before = form === "lookup" ? [] : [undefined];
   const [[cell]] = call(name, ...given, ...(result === undefined ? [] : [...before, result])) as [[unknown]];
   if (cell instanceof CellError) throw new Error(cell.message);

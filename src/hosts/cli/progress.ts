@@ -2,7 +2,7 @@ import type { Terminal } from "./terminal.js";
 
 /** Tells on standard error how far a long piece of work has come; silent while it is short. */
 export interface Progress {
-  show(doing: string, rows: number): void;
+  show(doing: string, count: number, counted?: string): void;
   /** Clears the line that `show` rewrites. */
   end(): void;
 }
@@ -14,11 +14,11 @@ export function progressOn(terminal: Terminal): Progress {
   let next = performance.now() + quietFor;
   let shown = 0;
   return {
-    show(doing, rows) {
+    show(doing, count, counted = "rows") {
       const now = performance.now();
       if (now < next) return;
       next = now + pause;
-      const text = `${doing}: ${rows.toLocaleString("en")} rows`;
+      const text = `${doing}: ${count.toLocaleString("en")} ${counted}`;
       terminal.note(terminal.isScreen ? `\r${text.padEnd(shown)}` : `${text}\n`);
       shown = text.length;
     },

@@ -7,6 +7,7 @@ import { demo } from "./commands/demo.js";
 import { explain } from "./commands/explain.js";
 import { fill } from "./commands/fill.js";
 import { functions } from "./commands/functions.js";
+import { plan } from "./commands/plan.js";
 import { units } from "./commands/units.js";
 import { exitCode } from "./exitCode.js";
 import { IoProblem } from "./ioProblem.js";
@@ -14,7 +15,7 @@ import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 import { version } from "./version.js";
 
-const commands: readonly Command[] = [bench, calc, fill, functions, explain, units, demo];
+const commands: readonly Command[] = [bench, calc, fill, plan, functions, explain, units, demo];
 
 const help = `barycell: unit-safe functions for radial-velocity target tables
 

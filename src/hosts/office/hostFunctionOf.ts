@@ -1,7 +1,7 @@
 import { CellError } from "../../call/cell.js";
 import type { ArgumentCells } from "../../call/cellFunction.js";
 import { cellFunctionOf } from "../../call/cellFunctionOf.js";
-import { argumentNames } from "../../functions/argumentNames.js";
+import { argumentNames, isRepeating } from "../../functions/argumentNames.js";
 import type { Definition } from "../../functions/definition.js";
 import { argumentOfHost, hostOfResult, ownMistake } from "./boundary.js";
 import { hostError } from "./hostError.js";
@@ -11,10 +11,11 @@ import { hostCall } from "./invocation.js";
 export function hostFunctionOf(definition: Definition): (...handedOver: unknown[]) => unknown[][] {
   const { name } = definition;
   const { once } = cellFunctionOf(definition);
+  const isRepeated = isRepeating(definition.inputs.at(-1));
   const inputs = argumentNames(definition).map((input) => input.replace(/[[\]]/g, ""));
 
   return (...handedOver) => {
-    const { values, addresses } = hostCall(handedOver);
+    const { values, addresses } = hostCall(isRepeated ? spread(handedOver) : handedOver);
     const given = values.map((value, index) =>
       argumentOfHost(value, inputs[index] ?? `argument ${index + 1}`, name, addresses[index]),
     );
@@ -31,4 +32,14 @@ export function hostFunctionOf(definition: Definition): (...handedOver: unknown[
       throw hostError("#VALUE!", ownMistake(name, `it stopped with ${mistake}`).message);
     }
   }
+}
+
+/** The host hands over an argument that repeats as one list of ranges; what is no such list stays as it is. */
+function spread(handedOver: readonly unknown[]): readonly unknown[] {
+  return handedOver.flatMap((value) => (isListOfRanges(value) ? value : [value]));
+}
+
+function isListOfRanges(value: unknown): value is readonly unknown[] {
+  const isRange = (one: unknown) => Array.isArray(one) && one.every(Array.isArray);
+  return Array.isArray(value) && value.some(isRange) && value.every((one) => one === null || isRange(one));
 }

@@ -2,7 +2,8 @@
 interface Invocation {
   readonly functionName?: string;
   readonly address?: string | null;
-  readonly parameterAddresses?: readonly (string | null)[] | null;
+  /** Those of an argument that repeats stand in a list of their own. */
+  readonly parameterAddresses?: readonly (string | null | readonly (string | null)[])[] | null;
 }
 
 /** The arguments of one call as the host hands them over, and where each starts, as far as the host tells. */
@@ -15,7 +16,7 @@ export interface HostCall {
 export function hostCall(handedOver: readonly unknown[]): HostCall {
   const last = handedOver.at(-1);
   if (!isInvocation(last)) return { values: handedOver, addresses: [] };
-  const addresses = (last.parameterAddresses ?? []).map(firstCell);
+  const addresses = (last.parameterAddresses ?? []).flat().map(firstCell);
   const sheets = new Set(addresses.filter((address) => address !== undefined).map(sheetOf));
   // A message is short, and the sheet says nothing where there is only one.
   const short = sheets.size === 1 ? addresses.map((address) => address && withoutSheet(address)) : addresses;

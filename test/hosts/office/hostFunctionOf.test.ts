@@ -1,5 +1,6 @@
 import { describe, expect, test } from "vitest";
 import type { NumberDefinition } from "../../../src/functions/definition.js";
+import { noiseSum } from "../../../src/functions/plan/noiseSum.js";
 import { reflex } from "../../../src/functions/reflex/reflex.js";
 import { hostFunctionOf } from "../../../src/hosts/office/hostFunctionOf.js";
 import type { HostError } from "./standInHost.js";
@@ -43,6 +44,20 @@ describe("a call by the host", () => {
       );
     },
   );
+
+  test("takes an argument that repeats as the list of ranges that the host makes of it", () => {
+    const sum = hostFunctionOf(noiseSum);
+    const terms = [[[3]], [[4]]];
+    expect(
+      sum([...terms, [["Photon [m/s]", "Floor [m/s]"]], [["Total [cm/s]"]]], { functionName: "NOISESUM" }),
+    ).toEqual([[500]]);
+    expect(sum([[["3 m/s"]]], { functionName: "NOISESUM" })).toEqual([[3]]);
+    expect(sum([[["3 m/s"]], null, [["cm/s"]]], { functionName: "NOISESUM" })).toEqual([[300]]);
+    const parameterAddresses = [["T!B2", "T!C2", "T!B1:C1"]];
+    expect(
+      messageOf(() => sum([...terms, [["Photon [m/s]", "Floor"]]], { functionName: "NOISESUM", parameterAddresses })),
+    ).toContain('noise 2 is 4 with no unit; write the unit in its header C1 ("Floor [m/s]")');
+  });
 
   test("says so where a function of ours stops", () => {
     const broken: NumberDefinition = {

@@ -6,6 +6,8 @@ export interface BenchClient {
   readonly bench: Remote<Bench>;
   /** Ends the worker and starts another one; calls that were waiting fail. */
   restart(): void;
+  /** Ends the worker for good. */
+  end(): void;
 }
 
 interface Waiting {
@@ -21,6 +23,7 @@ export function createBenchClient(
 ): BenchClient {
   const waiting = new Map<number, Waiting>();
   let last = 0;
+  let hasEnded = false;
   let worker = start();
 
   function start(): Worker {
@@ -46,6 +49,7 @@ export function createBenchClient(
   }
 
   function call(method: keyof Bench, given: readonly unknown[]): Promise<unknown> {
+    if (hasEnded) return Promise.reject(new Error("The calculation was stopped."));
     last += 1;
     const message: CallMessage = { id: last, method, given };
     return new Promise((resolve, reject) => {
@@ -60,13 +64,21 @@ export function createBenchClient(
       method === "then" ? undefined : (...given: unknown[]) => call(method as keyof Bench, given),
   });
 
+  function stop(): void {
+    worker.terminate();
+    for (const { reject } of waiting.values()) reject(new Error("The calculation broke down meanwhile."));
+    waiting.clear();
+  }
+
   return {
     bench,
     restart() {
-      worker.terminate();
-      for (const { reject } of waiting.values()) reject(new Error("The worker was started anew."));
-      waiting.clear();
+      stop();
       worker = start();
+    },
+    end() {
+      hasEnded = true;
+      stop();
     },
   };
 }

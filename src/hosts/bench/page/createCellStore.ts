@@ -30,7 +30,10 @@ export function createCellStore(bench: Remote<Bench>): FilledCellStore {
   let visible: Int32Array | undefined;
 
   const sheetState = () => state?.sheets[sheet];
-  const isFiltered = () => (sheetState()?.filter.length ?? 0) > 0;
+  /** Below them come the blank ones, which are always in view. */
+  const rowsInUse = () => sheetState()?.rows ?? 0;
+  /** Rows may be kept from view by conditions, or because others were chosen by hand. */
+  const isFiltered = ({ rows, visibleRows } = sheetState() ?? { rows: 0, visibleRows: 0 }) => visibleRows < rows;
 
   function blockAt(viewRow: number, column: number): Block | undefined {
     const [down, right] = [Math.floor(viewRow / blockRows), Math.floor(column / blockColumns)];
@@ -79,15 +82,23 @@ export function createCellStore(bench: Remote<Bench>): FilledCellStore {
       const block = blockAt(viewRow, column);
       return block?.cells[viewRow - block.from]?.[column - block.left];
     },
-    sheetRow: (viewRow) => (isFiltered() ? (visible?.[viewRow] ?? viewRow) : viewRow),
-    viewRow: (sheetRow) => (isFiltered() && visible ? firstAtLeast(visible, sheetRow) : sheetRow),
+    sheetRow(viewRow) {
+      if (!isFiltered() || !visible) return viewRow;
+      return visible[viewRow] ?? rowsInUse() + viewRow - visible.length;
+    },
+    viewRow(sheetRow) {
+      if (!isFiltered() || !visible) return sheetRow;
+      return sheetRow < rowsInUse() ? firstAtLeast(visible, sheetRow) : visible.length + sheetRow - rowsInUse();
+    },
     viewRows: () => sheetState()?.visibleRows ?? 0,
     onArrival(listener) {
       listeners.add(listener);
       return () => listeners.delete(listener);
     },
     refresh(next, shown) {
-      const key = `${next.id}:${shown}:${JSON.stringify(next.sheets[shown]?.filter)}`;
+      const found = next.sheets[shown];
+      const seen = found && isFiltered(found) ? found.visibleRows : "all";
+      const key = `${next.id}:${shown}:${seen}:${JSON.stringify(found?.filter)}`;
       // Cells of another sheet, book or filter are not shown while the right ones are on their way.
       if (key !== filterKey) {
         blocks.clear();

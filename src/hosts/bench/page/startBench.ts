@@ -1,6 +1,7 @@
 import { html, nothing, render, type TemplateResult } from "lit-html";
 import { keepOffline } from "../offline/keepOffline.js";
 import type { BenchEvent } from "../protocol/bench.js";
+import type { BookState } from "../protocol/bookState.js";
 import { type BenchClient, createBenchClient } from "./benchClient.js";
 import { createPage, type OwnedPage, type Voice } from "./createPage.js";
 import type { CreateEditor } from "./editor/editor.js";
@@ -12,6 +13,10 @@ import { historyPanel } from "./panels/history/historyPanel.js";
 import { whyPanel } from "./panels/why/whyPanel.js";
 import { buildSkeleton, type Skeleton } from "./shell/skeleton.js";
 import { startShell } from "./shell/startShell.js";
+
+/** So many breakdowns within so long [ms] are mended by a new worker. */
+const mostBreakdowns = 3;
+const breakdownSpan = 20_000;
 
 const createPanels = [whyPanel, checkPanel, comparePanel, historyPanel, findPanel];
 
@@ -27,23 +32,32 @@ export async function startBench(root: HTMLElement, createGrid: CreateGrid, crea
     (message) => void recover(message),
   );
 
-  /** The worker broke down: another one opens the last whole sheet. */
+  let breakdowns: readonly number[] = [];
+
+  /** The worker broke down: another one opens the last whole sheet, unless that breaks down again and again. */
   async function recover(message: string): Promise<void> {
-    client.restart();
-    try {
-      const state = await client.bench.start();
-      page?.receive(state);
+    const now = performance.now();
+    breakdowns = [...breakdowns.filter((each) => now - each < breakdownSpan), now];
+    if (breakdowns.length > mostBreakdowns) {
+      client.end();
       voice.trouble(
-        `The calculation broke down by a fault of this program (${message}). The book is as it was after its last step.`,
+        `The calculation breaks down again and again by a fault of this program (${message}), so it was stopped. Load the page again; what was kept in this browser is still there.`,
       );
-    } catch {
-      voice.trouble(
-        `This page could not start: ${message} Load it again; what was kept in this browser is still there.`,
-      );
+      return;
     }
+    client.restart();
+    // Whoever waits for the first state asks again.
+    if (!page) return;
+    const state = await client.bench.start().catch(() => undefined);
+    if (!state) return;
+    page.receive(state);
+    voice.trouble(
+      `The calculation broke down by a fault of this program (${message}). The book is as it was after its last step.`,
+    );
   }
 
-  const state = await client.bench.start();
+  const state = await firstState(client, voice);
+  if (!state) return;
   page = createPage(client.bench, state, voice);
   const owned = page;
   const shell = startShell(skeleton, owned, createPanels, createGrid, createEditor);
@@ -57,6 +71,21 @@ export async function startBench(root: HTMLElement, createGrid: CreateGrid, crea
   await keepOffline((takeOver) =>
     voice.offer("A newer version of this page lies ready. What you work on is kept.", "Load it", takeOver),
   );
+}
+
+async function firstState({ bench }: BenchClient, voice: Voice): Promise<BookState | undefined> {
+  for (let attempt = 1; ; attempt++) {
+    try {
+      return await bench.start();
+    } catch (fault) {
+      if (attempt <= mostBreakdowns) continue;
+      const message = fault instanceof Error ? fault.message : String(fault);
+      voice.trouble(
+        `This page could not start: ${message} Load it again; what was kept in this browser is still there.`,
+      );
+      return undefined;
+    }
+  }
 }
 
 function createVoice({ said, trouble }: Skeleton): Voice {

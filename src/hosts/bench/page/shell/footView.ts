@@ -1,6 +1,7 @@
 import { html, nothing, type TemplateResult } from "lit-html";
 import type { Summary } from "../../protocol/answers.js";
 import type { Page } from "../page.js";
+import { isFiltered } from "./isFiltered.js";
 
 export interface Progress {
   readonly what: string;
@@ -22,11 +23,11 @@ export function footView(
   actions: FootActions,
 ): TemplateResult {
   const { problems } = page.state();
-  const { filter, rows, visibleRows } = page.sheetState();
+  const { rows, visibleRows } = page.sheetState();
   return html`<p class="shell-summary number">${summary ? summaryText(summary) : ""}</p>
     ${
-      filter.length > 0
-        ? html`<p>${Math.max(0, visibleRows - 1).toLocaleString("en")} of ${Math.max(0, rows - 1).toLocaleString("en")} rows pass the filter <button type="button" class="quiet" @click=${actions.showAll}>Show all rows</button></p>`
+      isFiltered(page)
+        ? html`<p>${Math.max(0, visibleRows - 1).toLocaleString("en")} of ${Math.max(0, rows - 1).toLocaleString("en")} rows are shown <button type="button" class="quiet" @click=${actions.showAll}>Show all rows</button></p>`
         : nothing
     }
     ${

@@ -1,14 +1,17 @@
 import type { Outcome } from "../../protocol/request.js";
 import type { Page } from "../page.js";
 
-/** Leaves in view the rows that a brush in a plot marked, or else those selected, of the rows that the filter lets through. */
-export function showOnly(page: Page): Promise<Outcome> {
+/** Of the rows seen, leaves those in view that a brush in a plot marked, or else those selected. */
+export async function showOnly(page: Page): Promise<Outcome> {
+  const sheet = page.sheet();
   const { rows, filter } = page.sheetState();
   const { top, bottom } = page.selection().area;
-  const selected = () => {
-    const from = Math.max(1, top);
-    return Array.from({ length: Math.max(0, Math.min(bottom, rows - 1) - from + 1) }, (_, index) => from + index);
-  };
-  const marked = [...page.marked()];
-  return page.bench.filter(page.sheet(), filter, Int32Array.from(marked.length > 0 ? marked : selected()).sort());
+  const marked = page.marked();
+  const seen = (await page.bench.visibleRows(sheet)) ?? Int32Array.from({ length: rows }, (_, row) => row);
+  const isWanted = marked.size > 0 ? (row: number) => marked.has(row) : (row: number) => row >= top && row <= bottom;
+  return page.bench.filter(
+    sheet,
+    filter,
+    seen.filter((row) => row > 0 && isWanted(row)),
+  );
 }

@@ -109,10 +109,11 @@ function wordView(input: WordInput, index: number, build: BuildState, actions: F
       @focus=${() => actions.pick(undefined)}
       @change=${(event: Event) => actions.setInput(index, { text: typed(event) })}
     >
-      ${input.words.map(
-        ({ word, meaning }, at) =>
-          html`<option value=${at === 0 ? "" : word} .selected=${text === (at === 0 ? "" : word)}>${word}: ${meaning}</option>`,
-      )}
+      ${input.required ? html`<option value="" .selected=${text === ""}>choose one</option>` : nothing}
+      ${input.words.map(({ word, meaning }, at) => {
+        const value = at === 0 && !input.required ? "" : word;
+        return html`<option value=${value} .selected=${text === value}>${word}: ${meaning}</option>`;
+      })}
     </select>
   </div>`;
 }

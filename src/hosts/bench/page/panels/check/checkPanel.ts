@@ -53,7 +53,7 @@ function checkView(page: Page, report: TableReport | undefined): TemplateResult 
       errors > 0
         ? html`<h3>Cells that could not be worked out</h3>
           <ul class="panel-findings">
-            ${report.errors.map(
+            ${merged(report.errors).map(
               ({
                 message,
                 count,
@@ -69,6 +69,16 @@ function checkView(page: Page, report: TableReport | undefined): TemplateResult 
     <ul class="panel-columns">
       ${report.columns.map((column) => columnView(page, column))}
     </ul>`;
+}
+
+/** What fails alike in several columns, as a value and its uncertainty do, is told once. */
+function merged(errors: TableReport["errors"]): TableReport["errors"] {
+  const bySentence = new Map<string, TableReport["errors"][number]>();
+  for (const error of errors) {
+    const known = bySentence.get(error.message);
+    bySentence.set(error.message, known ? { ...known, count: known.count + error.count } : error);
+  }
+  return [...bySentence.values()];
 }
 
 function columnView(page: Page, { column, header, understood, contents, findings }: ColumnReport): TemplateResult {

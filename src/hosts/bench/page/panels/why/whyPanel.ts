@@ -1,9 +1,10 @@
+import { addressText } from "../../../../../sheet/book/address.js";
 import type { Distribution, WhyCell } from "../../../protocol/answers.js";
 import { faultText } from "../../createPage.js";
 import type { Page } from "../../page.js";
 import type { Panel } from "../../panel.js";
 import { goTo } from "../goTo.js";
-import { whyView } from "./whyView.js";
+import { type WorkedOut, whyView } from "./whyView.js";
 
 /** Every drawing starts from the same seed, so that the same cell always shows the same distribution. */
 const firstSeed = 1;
@@ -55,7 +56,7 @@ export function whyPanel(page: Page, redraw: () => void): Panel {
     id: "why",
     title: "Why this cell",
     keys: "Alt+W",
-    view: () => whyView(cell, distribution, { draw, goTo: (place) => goTo(page, place) }),
+    view: () => whyView(cell, workedOut(page, cell), distribution, { draw, goTo: (place) => goTo(page, place) }),
     shown() {
       isShown = true;
       ask();
@@ -67,4 +68,16 @@ export function whyPanel(page: Page, redraw: () => void): Panel {
       if (change !== "preferences") ask();
     },
   };
+}
+
+/** The cells that formulas fill in the row of a cell that holds none itself. */
+function workedOut(page: Page, cell: WhyCell | undefined): WorkedOut[] {
+  if (!cell || cell.formula !== undefined || cell.filledFrom || cell.place.row === 0) return [];
+  const { sheet, row } = cell.place;
+  const columns = page.state().sheets[sheet]?.columnStates ?? [];
+  return columns.flatMap(({ name, derived, sigmaOf }, column) =>
+    derived && sigmaOf === undefined && name !== ""
+      ? [{ name, address: addressText(row, column), place: { sheet, row, column } }]
+      : [],
+  );
 }

@@ -9,8 +9,16 @@ export interface WhyActions {
   goTo(place: Place): void;
 }
 
+/** A cell of the same row that a formula fills. */
+export interface WorkedOut {
+  readonly name: string;
+  readonly address: string;
+  readonly place: Place;
+}
+
 export function whyView(
   cell: WhyCell | undefined,
+  workedOut: readonly WorkedOut[],
   distribution: Distribution | "drawing" | undefined,
   actions: WhyActions,
 ): TemplateResult {
@@ -25,7 +33,20 @@ export function whyView(
         ? html`<p class="soft">Filled by the formula in ${link(cell.filledFrom.address, cell.filledFrom.place, actions)}.</p>`
         : nothing
     }
-    ${cell.call ? callView(cell, cell.call, distribution, actions) : readsView(cell, actions)}`;
+    ${cell.call ? callView(cell, cell.call, distribution, actions) : readsView(cell, actions)}
+    ${workedOut.length > 0 ? workedOutView(workedOut, actions) : nothing}`;
+}
+
+/** The way from what was typed to what comes of it, for whoever sees a table the first time. */
+function workedOutView(cells: readonly WorkedOut[], actions: WhyActions): TemplateResult {
+  return html`<h3>Worked out in this row</h3>
+    <p class="soft">Go to one to see why it has its value; type over an input, and what follows from it changes.</p>
+    <ul class="panel-inputs">
+      ${cells.map(
+        ({ name, address, place }) =>
+          html`<li><span class="panel-name">${link(address, place, actions)}</span><span>${name}</span></li>`,
+      )}
+    </ul>`;
 }
 
 function answerView({ value, exact, unit, error, formula, call }: WhyCell): TemplateResult {

@@ -7,7 +7,14 @@ import type { Shell } from "../shell.js";
 export function helpCommands(shell: Shell, all: () => readonly Command[]): Command[] {
   const menu = "Help";
   return [
-    { id: "functions", menu, leavesTyping: true, words: "Functions by question…", keys: "F1", run: () => functionsDialog(shell) },
+    {
+      id: "functions",
+      menu,
+      leavesTyping: true,
+      words: "Functions by question…",
+      keys: "F1",
+      run: () => functionsDialog(shell),
+    },
     { id: "keys", menu, leavesTyping: true, words: "Keys", keys: "Ctrl+/", run: () => keysDialog(shell, all()) },
     { id: "about", menu, leavesTyping: true, words: "About this page", run: () => aboutDialog(shell) },
   ];

@@ -1,6 +1,7 @@
 import type { Command } from "../command.js";
 import { filterDialog } from "../dialogs/filterDialog.js";
 import { sortDialog } from "../dialogs/sortDialog.js";
+import { isFiltered } from "../isFiltered.js";
 import type { Shell } from "../shell.js";
 import { showOnly } from "../showOnly.js";
 
@@ -10,7 +11,7 @@ export function rowCommands(shell: Shell): Command[] {
   const about = ["rows"] as const;
   const area = () => page.selection().area;
   const count = () => area().bottom - area().top + 1;
-  const isFiltered = () => page.sheetState().filter.length > 0;
+  const isWhole = () => !isFiltered(page);
   return [
     { id: "sort", menu, words: "Sort…", keys: "Alt+S", about: ["rows", "columns"], run: () => sortDialog(shell) },
     { id: "filter", menu, words: "Filter…", keys: "Alt+F", about: ["rows", "columns"], run: () => filterDialog(shell) },
@@ -25,7 +26,7 @@ export function rowCommands(shell: Shell): Command[] {
       id: "no-filter",
       menu,
       words: "Show all rows",
-      isPossible: isFiltered,
+      isPossible: () => isFiltered(page),
       run: () => shell.attempt(async () => void page.settle(await page.bench.filter(page.sheet(), []))),
     },
     {
@@ -34,7 +35,7 @@ export function rowCommands(shell: Shell): Command[] {
       words: "Insert above",
       apart: true,
       about,
-      isPossible: () => !isFiltered(),
+      isPossible: isWhole,
       run: () => void page.act({ do: "insert rows", sheet: page.sheet(), at: area().top, count: count() }),
     },
     {
@@ -42,7 +43,7 @@ export function rowCommands(shell: Shell): Command[] {
       menu,
       words: "Insert below",
       about,
-      isPossible: () => !isFiltered(),
+      isPossible: isWhole,
       run: () => void page.act({ do: "insert rows", sheet: page.sheet(), at: area().bottom + 1, count: count() }),
     },
     {
@@ -50,7 +51,7 @@ export function rowCommands(shell: Shell): Command[] {
       menu,
       words: "Delete",
       about,
-      isPossible: () => !isFiltered(),
+      isPossible: isWhole,
       run: () => void page.act({ do: "delete rows", sheet: page.sheet(), at: area().top, count: count() }),
     },
   ];

@@ -1,5 +1,6 @@
 import { html, nothing } from "lit-html";
 import type { FilterCondition } from "../../../protocol/request.js";
+import { isFiltered } from "../isFiltered.js";
 import { headerOf } from "../selected.js";
 import type { Shell } from "../shell.js";
 
@@ -77,7 +78,7 @@ export function filterDialog({ page, dialogs, attempt }: Shell): void {
       ${problem ? html`<p class="shell-problem" role="alert">${problem}</p>` : nothing}
       <div class="shell-actions">
         <button type="button" class="main" @click=${() => apply(conditions)}>Filter</button>
-        ${present.length > 0 ? html`<button type="button" @click=${() => apply([])}>Show all rows</button>` : nothing}
+        ${isFiltered(page) ? html`<button type="button" @click=${() => apply([])}>Show all rows</button>` : nothing}
       </div>
       <p class="soft">A value with a unit, such as 1 m/s, is converted to the unit of the column.</p>`;
   });
