@@ -4,6 +4,7 @@ import { isProblem, type UnitProblem } from "../units/problem.js";
 import { readHeader } from "../units/readHeader.js";
 import { readUnit } from "../units/readUnit.js";
 import type { Unit } from "../units/unit.js";
+import { isErrorUcd, quantityOfUcd } from "./ucds.js";
 
 /** What the header of a column was understood to say. */
 export interface RecognisedColumn {
@@ -24,8 +25,11 @@ const uncertaintyWords =
 const aboutAnother =
   /(?<!\p{L})(?:ratio|half|rms|scatter|flag|ref|reference|limit|source|method|number|count|year|date|quality|grade|class|type|name|id)(?!\p{L})/iu;
 
-/** `unitCell`: the cell of a row of units under the header, where the table has one. */
-export function recogniseColumn(header: string, unitCell?: string): RecognisedColumn {
+/**
+ * `unitCell`: the cell of a row of units under the header, where the table has one. `ucd`: what the file itself says the
+ * column means (IVOA UCD1+); it decides where the name says nothing.
+ */
+export function recogniseColumn(header: string, unitCell?: string, ucd = ""): RecognisedColumn {
   const reading = readHeader(header);
   const below = unitCell === undefined || unitCell.trim() === "" ? undefined : readUnit(unitCell);
   // "K" alone heads a column of semi-amplitudes rather than one of kelvins.
@@ -34,7 +38,8 @@ export function recogniseColumn(header: string, unitCell?: string): RecognisedCo
   const problem = reading.problem ?? (below && isProblem(below) ? below : undefined);
   const name = reading.name || header.trim();
   const bare = name.replace(uncertaintyWords, " ").trim();
-  return { name, unit, problem, quantity: quantityNamed(bare, unit), isUncertainty: bare !== name.trim() };
+  const isUncertainty = bare !== name.trim() || isErrorUcd(ucd);
+  return { name, unit, problem, quantity: quantityNamed(bare, unit) ?? quantityOfUcd(ucd, name, unit), isUncertainty };
 }
 
 interface NamedQuantity {

@@ -1,0 +1,44 @@
+import type { Column } from "../../call/column.js";
+import type { FieldColumn } from "./fieldColumn.js";
+import { headerKeepsUnit, headerOfField } from "./headerOfField.js";
+import type { ColumnNotes } from "./tableFile.js";
+import type { TableFinding } from "./tableFinding.js";
+
+/** A column as a file describes it, with the cells read so far. */
+export interface DescribedColumn {
+  readonly notes: ColumnNotes;
+  readonly cells: FieldColumn;
+}
+
+/** The parts of a table file that its described columns make up. */
+export interface DescribedColumns {
+  readonly header: readonly string[];
+  readonly columns: readonly Column[];
+  readonly notes: readonly ColumnNotes[];
+  readonly findings: readonly TableFinding[];
+}
+
+export function describedColumns(described: readonly DescribedColumn[]): DescribedColumns {
+  const notes = described.map((column) => column.notes);
+  const header = notes.map(headerOfField);
+  const findings = described.flatMap(({ cells, notes: own }, index): TableFinding[] => {
+    const unitAside: TableFinding[] = headerKeepsUnit(header[index]!, own)
+      ? []
+      : [{ kind: "unit-aside", name: own.name, unit: own.unit ?? "" }];
+    return [...unitAside, ...cells.findings(own.name)];
+  });
+  return {
+    header,
+    columns: described.map(({ cells }) => cells.finish()),
+    notes,
+    findings: [...sameNames(header), ...findings],
+  };
+}
+
+function sameNames(header: readonly string[]): TableFinding[] {
+  const places = new Map<string, number[]>();
+  for (const [column, name] of header.entries()) places.set(name, [...(places.get(name) ?? []), column]);
+  return [...places]
+    .filter(([, columns]) => columns.length > 1)
+    .map(([name, columns]) => ({ kind: "duplicate-header", header: name, columns }));
+}
