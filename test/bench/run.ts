@@ -1,11 +1,13 @@
 import { benchFill } from "./fill.js";
 import { benchReflex } from "./reflex.js";
 import { benchSheet } from "./sheet.js";
+import { benchXlsx } from "./xlsx.js";
 
 /** `npm run bench [part]`: timings that compare two things in one run; they never decide a test. */
 const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
   fill: benchFill,
+  xlsx: () => benchXlsx((line) => void process.stdout.write(`${line}\n`)),
   sheet: () => benchSheet((line) => void process.stdout.write(`${line}\n`)),
 };
 

@@ -1,0 +1,105 @@
+import type { Book, ColumnSpan } from "../../sheet/book/book.js";
+import { calculate } from "../../sheet/calculate/calculate.js";
+import type { Watch } from "../../sheet/change.js";
+import type { SheetPresentation, Workbook } from "../../sheet/display/workbook.js";
+import { plainSheet } from "../../sheet/display/workbook.js";
+import type { Functions } from "../../sheet/formula/functions.js";
+import { openZip } from "../zip/openZip.js";
+import { damaged } from "../zip/zipProblem.js";
+import { ownFunctions } from "./ownFunctions.js";
+import { mostCells } from "./read/cellsBuilder.js";
+import { explainCell } from "./read/explainCell.js";
+import { notesOf } from "./read/notesOf.js";
+import { findWorkbookPart, openParts } from "./read/parts.js";
+import { readNames } from "./read/readNames.js";
+import { readSharedStrings } from "./read/readSharedStrings.js";
+import type { SheetReading } from "./read/readSheet.js";
+import { readSheet } from "./read/readSheet.js";
+import { readStyles } from "./read/readStyles.js";
+import { readWorkbookPart } from "./read/readWorkbookPart.js";
+import { refuseOtherKinds } from "./read/refuseOtherKinds.js";
+import type { Steps } from "./steps.js";
+import { inSlices } from "./steps.js";
+import { isOwnFile } from "./write/appPart.js";
+
+/**
+ * Reads a workbook (ECMA-376, .xlsx). Cells hold what the file says their formulas gave; formulas without a value, and
+ * all of them where the file asks for it, are calculated. Throws a FileProblem, with a sentence, for anything that is
+ * no whole workbook; resolves to undefined where it was cancelled.
+ */
+export function readWorkbook(bytes: Uint8Array): Promise<Workbook>;
+export function readWorkbook(bytes: Uint8Array, watch: Watch): Promise<Workbook | undefined>;
+export function readWorkbook(bytes: Uint8Array, watch?: Watch): Promise<Workbook | undefined> {
+  return inSlices(readSteps(bytes, ownFunctions, "as needed"), watch);
+}
+
+/** The same with every formula's value as the file has it, whatever the file asks for. */
+export function readWorkbookAsStored(bytes: Uint8Array): Promise<Workbook> {
+  return inSlices(readSteps(bytes, ownFunctions, "never")) as Promise<Workbook>;
+}
+
+type Calculating = "as needed" | "never";
+
+function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calculating): Steps<Workbook> {
+  refuseOtherKinds(bytes);
+  const directory = openZip(bytes);
+  const parts = openParts(directory);
+  const workbookEntry = findWorkbookPart(parts, directory);
+  const { sheets, names: nameEntries, since1904, recalculates } = readWorkbookPart(parts, workbookEntry);
+  const relationships = parts.relationshipsOf(workbookEntry.name);
+  const partOf = (test: (each: (typeof relationships)[number]) => boolean) => {
+    const target = relationships.find(test)?.target;
+    return target === undefined ? undefined : parts.find(target);
+  };
+  const stringsEntry = partOf(({ type }) => type === "sharedStrings");
+  const stylesEntry = partOf(({ type }) => type === "styles");
+  const entries = sheets.map(({ id, name }) => {
+    const entry = partOf((each) => each.id === id);
+    if (entry === undefined) {
+      throw damaged(`the sheet "${name.slice(0, 31)}" is missing`);
+    }
+    const type = relationships.find((each) => each.id === id)?.type;
+    return { entry, isChart: type !== "worksheet" };
+  });
+
+  const total = entries.reduce((sum, { entry }) => sum + entry.size, stringsEntry?.size ?? 0);
+  const told = function* <T>(steps: Generator<number, T>): Steps<T> {
+    for (let step = steps.next(); ; step = steps.next()) {
+      if (step.done) {
+        return step.value;
+      }
+      yield { done: Math.min(parts.unpacked.bytes, total), total };
+    }
+  };
+  const notes: string[] = [];
+  const names = readNames(nameEntries, functions, notes);
+  const strings = stringsEntry === undefined ? [] : yield* told(readSharedStrings(stringsEntry, parts.unpacked));
+  const styles = stylesEntry === undefined ? [] : readStyles(parts, stylesEntry);
+  const reading = { functions, names, strings, styles, since1904, budget: { left: mostCells } };
+  let book: Book = { names, sheets: [] };
+  const readings: (SheetReading | undefined)[] = [];
+  for (const [sheet, { entry, isChart }] of entries.entries()) {
+    const explain = (row: number, column: number) => explainCell(book, { sheet, row, column });
+    readings.push(isChart ? undefined : yield* told(readSheet(entry, parts.unpacked, reading, explain)));
+  }
+  book = { names, sheets: sheets.map(({ name }, sheet) => ({ name, columns: readings[sheet]?.columns ?? [] })) };
+  notes.push(...notesOf(sheets, readings));
+  const presentations = sheets.map(({ hidden }, sheet): SheetPresentation => ({ ...plainSheet, ...readings[sheet]?.presentation, hidden })); // biome-ignore format: one value
+  if (calculating === "as needed") {
+    const wantsAll = recalculates && !isOwnFile(parts);
+    book = yield* calculate(book, { changed: [], stale: wantsAll ? allFormulas(book) : withoutValue(readings) });
+  }
+  return { book, sheets: presentations, notes };
+}
+
+function withoutValue(readings: readonly (SheetReading | undefined)[]): ColumnSpan[] {
+  return readings.flatMap((reading, sheet) =>
+    [...(reading?.stale ?? [])].flatMap(([column, spans]) => spans.map((span) => ({ ...span, sheet, column }))),
+  );
+}
+
+export function allFormulas(book: Book): ColumnSpan[] {
+  return book.sheets.flatMap(({ columns }, sheet) =>
+    columns.flatMap(({ runs }, column) => runs.map(({ from, to }) => ({ sheet, column, from, to }))),
+  );
+}
