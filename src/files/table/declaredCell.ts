@@ -22,11 +22,7 @@ export function declaredCell(type: DeclaredType, field: string): Cell {
     return Object.hasOwn(logicals, key) ? logicals[key]! : text === "?" ? null : text;
   }
   const number = readNumber(text) ?? (decimal.test(text) ? Number(text.replace(/[dD]/, "e")) : undefined);
-  if (number === undefined) return isNan(text) ? null : text;
+  if (number === undefined) return /^[+-]?nan$/i.test(text) ? null : text;
   if (type === "integer") return Number.isSafeInteger(number) ? number : text;
   return Number.isFinite(number) ? number : text;
-}
-
-export function isNan(text: string): boolean {
-  return /^[+-]?nan$/i.test(text.trim());
 }

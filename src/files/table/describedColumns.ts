@@ -21,17 +21,14 @@ export interface DescribedColumns {
 export function describedColumns(described: readonly DescribedColumn[]): DescribedColumns {
   const notes = described.map((column) => column.notes);
   const header = notes.map(headerOfField);
-  const findings = described.flatMap(({ cells, notes: own }, index): TableFinding[] => {
-    const unitAside: TableFinding[] = headerKeepsUnit(header[index]!, own)
-      ? []
-      : [{ kind: "unit-aside", name: own.name, unit: own.unit ?? "" }];
-    return [...unitAside, ...cells.findings(own.name)];
-  });
+  const unitsAside = notes
+    .filter((own, index) => !headerKeepsUnit(header[index]!, own))
+    .map(({ name, unit = "" }): TableFinding => ({ kind: "unit-aside", name, unit }));
   return {
     header,
     columns: described.map(({ cells }) => cells.finish()),
     notes,
-    findings: [...sameNames(header), ...findings],
+    findings: [...sameNames(header), ...unitsAside],
   };
 }
 

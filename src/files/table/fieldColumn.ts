@@ -1,13 +1,11 @@
 import type { Cell } from "../../call/cell.js";
 import { type Column, cellAt, columnOf } from "../../call/column.js";
 import { ColumnBuilder } from "../cell/columnBuilder.js";
-import { type DeclaredType, declaredCell, isNan } from "./declaredCell.js";
-import type { TableFinding } from "./tableFinding.js";
+import { type DeclaredType, declaredCell } from "./declaredCell.js";
 
 /** A column of declared type that grows field by field. */
 export class FieldColumn {
   private readonly builder = new ColumnBuilder(0);
-  private nans = 0;
   private hasLongIntegers = false;
 
   /** `isNull`: whether a field, as it stands, is one that the file uses for no value. */
@@ -21,9 +19,7 @@ export class FieldColumn {
       this.builder.pushCell(null);
       return;
     }
-    const cell = declaredCell(this.type, field);
-    if (cell === null && this.type === "number" && field !== "" && isNan(field)) this.nans++;
-    this.pushCell(cell);
+    this.pushCell(declaredCell(this.type, field));
   }
 
   pushCell(cell: Cell): void {
@@ -34,13 +30,6 @@ export class FieldColumn {
   finish(): Column {
     const column = this.builder.finish();
     return this.hasLongIntegers ? asTexts(column) : column;
-  }
-
-  findings(name: string): TableFinding[] {
-    const findings: TableFinding[] = [];
-    if (this.hasLongIntegers) findings.push({ kind: "long-integers", name });
-    if (this.nans > 0) findings.push({ kind: "not-a-number", name, count: this.nans });
-    return findings;
   }
 }
 

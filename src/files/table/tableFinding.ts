@@ -8,8 +8,6 @@ export type TableFinding =
   | { readonly kind: "service-error"; readonly text: string }
   | { readonly kind: "overflow" }
   | { readonly kind: "array-column"; readonly name: string; readonly shape: string }
-  | { readonly kind: "long-integers"; readonly name: string }
-  | { readonly kind: "not-a-number"; readonly name: string; readonly count: number }
   | { readonly kind: "unit-aside"; readonly name: string; readonly unit: string }
   | {
       readonly kind: "beyond-limits";
@@ -41,10 +39,6 @@ export function sentenceOfTableFinding(finding: TableFinding): string {
       return "The service that made the file cut the table off (overflow); ask it for more rows if all are needed.";
     case "array-column":
       return `Column ${quoted(finding.name)} holds several values a cell (${finding.shape}); they were read as text.`;
-    case "long-integers":
-      return `Column ${quoted(finding.name)} has integers of more digits than a number keeps; the column was read as text, every digit kept.`;
-    case "not-a-number":
-      return `Column ${quoted(finding.name)} has ${counted(finding.count, "cell")} with nan; ${finding.count === 1 ? "it was" : "they were"} read as blank.`;
     case "unit-aside":
       return `The unit ${quoted(finding.unit)} of column ${quoted(finding.name)} cannot stand in a header; write it in square brackets by hand.`;
     case "beyond-limits":

@@ -2,6 +2,8 @@ import { nearest } from "../../units/nearest.js";
 import type { Command } from "./command.js";
 import { readCommandLine } from "./commandLine.js";
 import { calc } from "./commands/calc.js";
+import { check } from "./commands/check.js";
+import { convert } from "./commands/convert.js";
 import { demo } from "./commands/demo.js";
 import { explain } from "./commands/explain.js";
 import { fill } from "./commands/fill.js";
@@ -13,7 +15,7 @@ import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 import { version } from "./version.js";
 
-const commands: readonly Command[] = [calc, fill, functions, explain, units, demo];
+const commands: readonly Command[] = [calc, fill, convert, check, functions, explain, units, demo];
 
 const help = `barycell: unit-safe functions for radial-velocity target tables
 
@@ -21,8 +23,8 @@ ${commands.map(({ name, summary }) => `  barycell ${name.padEnd(10)} ${summary}`
 
   barycell COMMAND --help tells about one command; barycell --version prints the version.
 
-Exit codes: ${exitCode.done} done; ${exitCode.cellError} a formula or a cell has an error (fill: with --strict); ${exitCode.usage} the command line cannot be
-understood; ${exitCode.file} a file cannot be read or written.
+Exit codes: ${exitCode.done} done; ${exitCode.cellError} a formula or a cell has an error (fill: with --strict), or there is something to look at
+(check); ${exitCode.usage} the command line cannot be understood; ${exitCode.file} a file cannot be read or written.
 `;
 
 /** Runs one command line; resolves to the exit code. */
