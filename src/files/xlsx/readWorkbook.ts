@@ -8,7 +8,7 @@ import { openZip } from "../zip/openZip.js";
 import { damaged } from "../zip/zipProblem.js";
 import { ownFunctions } from "./ownFunctions.js";
 import { mostCells } from "./read/cellsBuilder.js";
-import { explainCell } from "./read/explainCell.js";
+import { explainer } from "./read/explainCell.js";
 import { notesOf } from "./read/notesOf.js";
 import { findWorkbookPart, openParts } from "./read/parts.js";
 import { readNames } from "./read/readNames.js";
@@ -77,9 +77,10 @@ function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calcul
   const styles = stylesEntry === undefined ? [] : readStyles(parts, stylesEntry);
   const reading = { functions, names, strings, styles, since1904, budget: { left: mostCells } };
   let book: Book = { names, sheets: [] };
+  const why = explainer(() => book);
   const readings: (SheetReading | undefined)[] = [];
   for (const [sheet, { entry, isChart }] of entries.entries()) {
-    const explain = (row: number, column: number) => explainCell(book, { sheet, row, column });
+    const explain = (row: number, column: number) => why({ sheet, row, column });
     readings.push(isChart ? undefined : yield* told(readSheet(entry, parts.unpacked, reading, explain)));
   }
   book = { names, sheets: sheets.map(({ name }, sheet) => ({ name, columns: readings[sheet]?.columns ?? [] })) };

@@ -5,7 +5,7 @@ import type { Watch } from "../../sheet/change.js";
 export type Steps<T> = Generator<Progress, T>;
 
 /** Time between two moments in which others may run, so that a wish to cancel can arrive [ms]. */
-const longestSlice = 12;
+const longestSlice = 24;
 
 /** Does the work in slices, between which other work runs; undefined where it was cancelled. */
 export async function inSlices<T>(steps: Steps<T>, watch: Watch = {}): Promise<T | undefined> {

@@ -4,8 +4,8 @@ import type { ZipEntry } from "./openZip.js";
 import type { ZipLimits } from "./zipLimits.js";
 import { damaged, megabytes, tooLarge } from "./zipProblem.js";
 
-/** Packed bytes taken at a time: at the most that deflate can do they unpack to 16 MB. */
-const slice = 1 << 14;
+/** Packed bytes taken at a time: at the most that deflate can do they unpack to 64 MB. */
+const slice = 1 << 16;
 
 /** How many bytes the parts of one file have unpacked to so far. */
 export interface Unpacked {
@@ -32,8 +32,8 @@ export function* unpack(entry: ZipEntry, limits: ZipLimits, unpacked: Unpacked):
 }
 
 function* stored({ packed }: ZipEntry): Generator<Uint8Array> {
-  for (let at = 0; at < packed.length; at += slice * 16) {
-    yield packed.subarray(at, at + slice * 16);
+  for (let at = 0; at < packed.length; at += slice) {
+    yield packed.subarray(at, at + slice);
   }
 }
 

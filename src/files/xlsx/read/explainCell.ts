@@ -6,11 +6,30 @@ import { openSession } from "../../../sheet/calculate/session.js";
 import { evaluateCell } from "../../../sheet/evaluate/evaluateCell.js";
 import { isMatrix } from "../../../sheet/values/operand.js";
 
+/** Errors are passed on from cell to cell; so far they are followed. */
+const longestChain = 64;
+
+/** Finds out why cells hold errors: files hold their codes alone, so a formula is calculated once more when somebody asks. */
+export function explainer(book: () => Book): (place: Place) => string | undefined {
+  const asked: Place[] = [];
+  return (place) => {
+    const isCircle = asked.some(
+      ({ sheet, row, column }) => sheet === place.sheet && row === place.row && column === place.column,
+    );
+    if (isCircle || asked.length >= longestChain) {
+      return undefined;
+    }
+    asked.push(place);
+    const sentence = explainCell(book(), place);
+    asked.pop();
+    return sentence;
+  };
+}
+
 /**
- * The sentence of the error in a cell that a formula filled: files hold its code alone, so the formula is calculated
- * once more when somebody asks. Undefined where there is no formula or it gives no error.
+ * The sentence of the error in a cell that a formula filled; undefined where there is no formula or it gives no error.
  */
-export function explainCell(book: Book, { sheet, row, column }: Place): string | undefined {
+function explainCell(book: Book, { sheet, row, column }: Place): string | undefined {
   const { runs, claims } = columnAt(book, sheet, column);
   const claim = spanAt(claims, row);
   const owner = { row: claim?.row ?? row, column: claim?.column ?? column };

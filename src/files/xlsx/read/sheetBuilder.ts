@@ -193,7 +193,7 @@ function cellOfRaw(
         throw wrong();
       }
       if (typeof number === "string") {
-        return hasFormula ? errorOfText("#NUM!", () => explain(row, column)) : number;
+        return hasFormula ? calculated(Number(number), () => explain(row, column)) : number;
       }
       const isDate = style.format.kind === "date" || style.format.kind === "date-time";
       return reading.since1904 && isDate ? number + daysFrom1900To1904 : number;
@@ -226,6 +226,11 @@ function cellOfRaw(
     default:
       throw wrong();
   }
+}
+
+/** What a formula gave has no digits of its own to lose. */
+function calculated(number: number, explain: () => string | undefined): Cell {
+  return Number.isFinite(number) ? number : errorOfText("#NUM!", explain);
 }
 
 const kinds: Readonly<Record<string, string>> = {

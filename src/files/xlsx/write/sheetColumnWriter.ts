@@ -11,6 +11,7 @@ import { spillSize } from "../../../sheet/book/spillSize.js";
 import { usedLength } from "../../../sheet/book/usedRows.js";
 import type { ColumnPresentation } from "../../../sheet/display/workbook.js";
 import { mostRows } from "../../../sheet/limits.js";
+import { fieldOfCell } from "../../cell/fieldOfCell.js";
 import { rowTemplate, textInRow } from "../formula/rowTemplate.js";
 import type { StoredFormula } from "../formula/storedFormula.js";
 import { storedFormula } from "../formula/storedFormula.js";
@@ -105,7 +106,7 @@ export function sheetColumnWriter(
 function contentOf(cell: Cell, formula: FormulaXml | undefined, strings: StringTable): string {
   const [mark, text] = formula ?? ["", ""];
   if (typeof cell === "number") {
-    return `${mark}>${text}<v>${Object.is(cell, -0) ? "-0" : cell}</v>`;
+    return `${mark}>${text}<v>${fieldOfCell(cell)}</v>`;
   }
   if (typeof cell === "string") {
     return formula === undefined
