@@ -1,6 +1,7 @@
 import { type Document, isMap, isScalar, isSeq, parseDocument } from "yaml";
 import { FileProblem } from "../fileProblem.js";
 import type { DeclaredType } from "../table/declaredCell.js";
+import { checkColumnCount } from "../table/mostColumns.js";
 import type { ColumnNotes } from "../table/tableFile.js";
 
 export interface EcsvColumn {
@@ -35,6 +36,7 @@ export function readEcsvHeader(yaml: string): EcsvHeader {
   if (!Array.isArray(described) || described.length === 0) {
     throw notAsStandard('its header has no list of columns under "datatype"');
   }
+  checkColumnCount(described.length);
   const delimiter = header.delimiter ?? " ";
   if (delimiter !== " " && delimiter !== ",") throw notAsStandard("its delimiter is neither a space nor a comma");
   const meta = pairsOf(header.meta);
@@ -56,12 +58,12 @@ interface PlainHeader {
 function plainOf(yaml: string): PlainHeader {
   let document: Document;
   try {
-    document = parseDocument(yaml, { schema: "failsafe", logLevel: "silent" });
+    document = parseDocument(yaml, { schema: "failsafe", logLevel: "silent", uniqueKeys: false });
   } catch {
     throw notAsStandard("its header is no YAML that can be read");
   }
   const [error] = document.errors;
-  if (error) throw notAsStandard(`its header is no YAML: ${firstWords(error.message)}`);
+  if (error) throw notAsStandard(`its header is no YAML: ${reasonOf(error.message)}`);
   try {
     const part = (key: string) => {
       const node: unknown = document.get(key, true);
@@ -98,7 +100,8 @@ function declaredType(datatype: string): DeclaredType {
 }
 
 /** The pairs of a map, or of an ordered map: a list of maps of one pair each. A Map, so that no name is special. */
-function pairsOf(value: unknown): ReadonlyMap<string, unknown> {
+function pairsOf(value: unknown): ReadonlyMap<unknown, unknown> {
+  if (value instanceof Map) return value;
   if (Array.isArray(value)) return new Map(value.flatMap((part) => [...pairsOf(part)]));
   return new Map(typeof value === "object" && value !== null ? Object.entries(value) : []);
 }
@@ -111,7 +114,8 @@ function listOf(value: unknown): readonly string[] {
   return Array.isArray(value) ? value.filter((part) => typeof part === "string") : [];
 }
 
-function firstWords(message: string): string {
+function reasonOf(message: string): string {
+  if (/call stack/i.test(message)) return "it has brackets within brackets without end";
   return message.split("\n")[0]!.replace(/:$/, "").slice(0, 100);
 }
 

@@ -1,6 +1,7 @@
 import { ColumnBuilder } from "../cell/columnBuilder.js";
 import { isUnitsRow } from "../delimited/isUnitsRow.js";
 import { FileProblem } from "../fileProblem.js";
+import { checkColumnCount } from "../table/mostColumns.js";
 import type { TableFile } from "../table/tableFile.js";
 import type { TableFinding } from "../table/tableFinding.js";
 import type { TableReader } from "../table/tableReader.js";
@@ -70,6 +71,7 @@ export class FixedWidthReader implements TableReader {
         "no-header",
         "The file's first lines do not show where its columns stand; put a rule of dashes under each name.",
       );
+    checkColumnCount(layout.starts.length);
     this.head = undefined;
     this.layout = layout;
     this.columns = layout.starts.map(() => new ColumnBuilder(0));

@@ -29,7 +29,7 @@ export function fixedLayout(lines: readonly string[]): FixedLayout | undefined {
   if (at === 1 || at === 2) {
     const runs = runsOf(lines[at]!);
     if (runs.length < 2 || !namesFit(lines[0]!, runs)) return undefined;
-    const hasBars = lines[at]!.includes("|");
+    const hasBars = `${lines[at]}${lines[0]}`.includes("|");
     return { starts: runs.map(({ from }) => from), hasBars, headLines: at + 1, namesLine: 0, hasRule: true };
   }
   const [names, row] = lines;

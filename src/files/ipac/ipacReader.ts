@@ -2,6 +2,7 @@ import { FileProblem } from "../fileProblem.js";
 import type { DeclaredType } from "../table/declaredCell.js";
 import { type DescribedColumn, describedColumns } from "../table/describedColumns.js";
 import { FieldColumn } from "../table/fieldColumn.js";
+import { checkColumnCount } from "../table/mostColumns.js";
 import type { TableFile } from "../table/tableFile.js";
 import type { TableFinding } from "../table/tableFinding.js";
 import type { TableReader } from "../table/tableReader.js";
@@ -86,6 +87,7 @@ export class IpacReader implements TableReader {
   private describe(): DescribedColumn[] {
     const [names, typeNames, units, nulls] = this.head;
     if (!names) throw problem("it has no line of column names between bars");
+    checkColumnCount(names.length);
     return names.map((name, index) => {
       const nullText = nulls?.[index] || "null";
       const unit = /^(?:-*|null)$/.test(units?.[index] ?? "") ? undefined : units![index];

@@ -1,6 +1,7 @@
 import { FileProblem } from "../fileProblem.js";
 import { type DescribedColumn, describedColumns } from "../table/describedColumns.js";
 import { FieldColumn } from "../table/fieldColumn.js";
+import { checkColumnCount } from "../table/mostColumns.js";
 import type { TableFile } from "../table/tableFile.js";
 import type { TableFinding } from "../table/tableFinding.js";
 import type { TableReader } from "../table/tableReader.js";
@@ -92,6 +93,7 @@ export class MachineReadableReader implements TableReader {
     if (this.rules < 3) return;
     const described = readByteByByte(this.entries);
     if (described.length === 0) throw problem("its byte-by-byte description holds no entry that can be read");
+    checkColumnCount(described.length);
     this.described = [...described];
     this.part = "data";
     this.begin();

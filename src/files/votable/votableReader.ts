@@ -2,6 +2,7 @@ import { SaxesParser } from "saxes";
 import { FileProblem } from "../fileProblem.js";
 import { type DescribedColumn, describedColumns } from "../table/describedColumns.js";
 import { FieldColumn } from "../table/fieldColumn.js";
+import { checkColumnCount } from "../table/mostColumns.js";
 import type { TableFile } from "../table/tableFile.js";
 import type { TableFinding } from "../table/tableFinding.js";
 import type { TableReader } from "../table/tableReader.js";
@@ -11,7 +12,6 @@ import { simpleRow } from "./simpleRow.js";
 import { VotableDescription } from "./votableDescription.js";
 import { declaredTypeOf, isArray, type VotableField } from "./votableField.js";
 
-const lineEnd = /\r\n?/g;
 /** The rest of a plain row is waited for, up to so many characters. */
 const longestAwaited = 1 << 16;
 
@@ -125,7 +125,7 @@ export class VotableReader implements TableReader {
   }
 
   private close(name: string): void {
-    if (name === "TD") this.row.push(this.cell.replace(lineEnd, "\n"));
+    if (name === "TD") this.row.push(this.cell);
     if (name === "TR") {
       if (this.description.isRead) this.takeRow(this.row);
       this.row = [];
@@ -142,6 +142,7 @@ export class VotableReader implements TableReader {
 
   private begin(fields: readonly VotableField[]): void {
     if (fields.length === 0) throw new FileProblem("no-table", "The VOTable's table has no FIELD, so no columns.");
+    checkColumnCount(fields.length);
     this.fields = fields;
     this.columns = fields.map((field) => {
       const { nullText, notes } = field;

@@ -8,6 +8,7 @@ import { demo } from "./commands/demo.js";
 import { explain } from "./commands/explain.js";
 import { fill } from "./commands/fill.js";
 import { functions } from "./commands/functions.js";
+import { recalc } from "./commands/recalc.js";
 import { units } from "./commands/units.js";
 import { exitCode } from "./exitCode.js";
 import { IoProblem } from "./ioProblem.js";
@@ -15,7 +16,7 @@ import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 import { version } from "./version.js";
 
-const commands: readonly Command[] = [calc, fill, convert, check, functions, explain, units, demo];
+const commands: readonly Command[] = [calc, fill, convert, check, recalc, functions, explain, units, demo];
 
 const help = `barycell: unit-safe functions for radial-velocity target tables
 
@@ -24,7 +25,8 @@ ${commands.map(({ name, summary }) => `  barycell ${name.padEnd(10)} ${summary}`
   barycell COMMAND --help tells about one command; barycell --version prints the version.
 
 Exit codes: ${exitCode.done} done; ${exitCode.cellError} a formula or a cell has an error (fill: with --strict), or there is something to look at
-(check); ${exitCode.usage} the command line cannot be understood; ${exitCode.file} a file cannot be read or written.
+(check); ${exitCode.usage} the command line cannot be understood; ${exitCode.file} a file cannot be read or written;
+${exitCode.changed} values of a workbook are not what its formulas give (recalc).
 `;
 
 /** Runs one command line; resolves to the exit code. */

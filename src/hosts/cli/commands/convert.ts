@@ -91,7 +91,5 @@ function readRequest(line: CommandLine): ConvertRequest {
       `--units ${units} does not go with ${asked}, which has a place of its own for units; leave it out.`,
     );
   }
-  if (out === "-" && asked === "xlsx")
-    throw new UsageProblem("a workbook is no text for standard output; name a file.");
   return { path, out, form: asked, units: units === "ecsv" ? undefined : units };
 }
