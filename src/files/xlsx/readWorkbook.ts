@@ -99,8 +99,13 @@ function withoutValue(readings: readonly (SheetReading | undefined)[]): ColumnSp
   );
 }
 
-export function allFormulas(book: Book): ColumnSpan[] {
+/** Formulas that cannot be calculated here keep the values of the program that could. */
+function allFormulas(book: Book): ColumnSpan[] {
   return book.sheets.flatMap(({ columns }, sheet) =>
-    columns.flatMap(({ runs }, column) => runs.map(({ from, to }) => ({ sheet, column, from, to }))),
+    columns.flatMap(({ runs }, column) =>
+      runs
+        .filter(({ formula }) => formula.problem === undefined)
+        .map(({ from, to }) => ({ sheet, column, from, to })),
+    ),
   );
 }

@@ -12,7 +12,7 @@ import { plainColumn, plainSheet } from "../../../src/sheet/display/workbook.js"
 import type { Edit } from "../../../src/sheet/edit/draft.js";
 import { fillFormula } from "../../../src/sheet/edit/fillFormula.js";
 import { defineName } from "../../../src/sheet/edit/names.js";
-import { recalculateAll } from "../../../src/sheet/edit/recalculateAll.js";
+import { recalculate } from "../../../src/sheet/edit/recalculate.js";
 import type { Entry } from "../../../src/sheet/edit/setCells.js";
 import { setCells } from "../../../src/sheet/edit/setCells.js";
 import { mostRows } from "../../../src/sheet/limits.js";
@@ -34,7 +34,7 @@ async function comesBack(book: Book): Promise<void> {
   expect(notes).toEqual([]);
   expect(differences(book, back)).toEqual([]);
   // And calculating it anew changes nothing.
-  expect(differences(book, change(back, [recalculateAll], ownFunctions))).toEqual([]);
+  expect(differences(book, change(back, [recalculate()], ownFunctions))).toEqual([]);
 }
 
 const number = fc.oneof(
