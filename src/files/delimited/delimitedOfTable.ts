@@ -83,8 +83,9 @@ function textLosses({ columns, header }: DescribedTable, index: number): string[
     count++;
   }
   if (count === 0) return [];
+  const [verb, them] = count === 1 ? ["reads", "it"] : ["read", "them"];
   return [
-    `Column "${header[index]!.slice(0, 40)}" has ${counted(count, "text")} that read as another kind of cell in delimited text, first "${first.slice(0, 40)}"; ECSV and VOTable keep them as text.`,
+    `Column "${header[index]!.slice(0, 40)}" has ${counted(count, "text")} that ${verb} as another kind of cell in delimited text, first "${first.slice(0, 40)}"; ECSV and VOTable keep ${them} as text.`,
   ];
 }
 

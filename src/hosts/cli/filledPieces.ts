@@ -9,7 +9,11 @@ import { type TablePieces, tablePieces } from "./tablePieces.js";
  * A table with its added columns. Delimited text keeps its own text unless another form is asked for by the end of the
  * output's name; other tables are written in their own form where that can be.
  */
-export function filledPieces(table: TableFile, added: readonly FilledColumn[], out: string | undefined): TablePieces {
+export async function filledPieces(
+  table: TableFile,
+  added: readonly FilledColumn[],
+  out: string | undefined,
+): Promise<TablePieces> {
   const asked = out === undefined ? undefined : formOfPath(out);
   if (table.delimited && (asked === undefined || asked === "csv" || asked === "tsv")) {
     return { pieces: appendColumns(table.delimited, added, { guardText: guardFormula }), losses: [] };

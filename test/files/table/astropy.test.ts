@@ -116,10 +116,8 @@ describe.skipIf(!isThere)("astropy (its own releases of ECSV 1.0, VOTable 1.4, M
     const units = theirs.map(({ unit }) => unit.replaceAll(" ", ""));
     expect(units).toEqual(["", "d", "jupiterMass", "", "", logarithm]);
     theirs.forEach(({ cells }, index) => {
-      // Its reader of ECSV takes blanks around a text away.
-      const own = rows
-        .map((row) => row[index]!)
-        .map((cell) => (format === "ascii.ecsv" && cell === "  x" ? "x" : cell));
+      // Its readers of texts take blanks around them away.
+      const own = rows.map((row) => row[index]!).map((cell) => (cell === "  x" && name !== "out2.xml" ? "x" : cell));
       sameCells(own, cells);
     });
   });

@@ -2,10 +2,10 @@ import { expect, test } from "vitest";
 import { columnOf } from "../../../src/call/column.js";
 import { writeEcsv } from "../../../src/files/ecsv/writeEcsv.js";
 import { FileProblem } from "../../../src/files/fileProblem.js";
-import { readTableFileNow } from "../../../src/files/table/readTableFile.js";
 import type { TableFile } from "../../../src/files/table/tableFile.js";
 import { sentenceOfTableFinding } from "../../../src/files/table/tableFinding.js";
 import { writeVotable } from "../../../src/files/votable/writeVotable.js";
+import { read } from "./read.js";
 
 const table = {
   header: ["Name", "P [d]", "n", "ok", "t [BJD_TDB]"],
@@ -142,13 +142,13 @@ const mutants = 3000;
 
 test.each(Object.entries(files))("a damaged file is a table or is refused in a sentence: %s", (_, text) => {
   const bytes = new TextEncoder().encode(text);
-  expectGood(readTableFileNow([bytes]));
+  expectGood(read(bytes));
   const random = randomNumbers(text.length);
   let refused = 0;
   for (let run = 0; run < mutants; run++) {
     const file = mutated(bytes, random);
     try {
-      expectGood(readTableFileNow([file]));
+      expectGood(read(file));
     } catch (problem) {
       if (!(problem instanceof FileProblem))
         throw new Error(`mutant ${run}: ${JSON.stringify(Buffer.from(file).toString("latin1"))}`, { cause: problem });
@@ -169,5 +169,5 @@ test("a hundred thousand columns, elements or brackets end in a sentence too", (
     `<VOTABLE><RESOURCE><TABLE><FIELD name="a" datatype="double" arraysize="0"/><DATA><BINARY><STREAM encoding="base64">AAAA</STREAM></BINARY></DATA></TABLE></RESOURCE></VOTABLE>`,
     `# %ECSV 1.0\n# ---\n# datatype:\n# - {name: a, datatype: ${"{a: ".repeat(many)}\na\n`,
   ];
-  for (const text of texts) expect(() => readTableFileNow(text)).toThrow(FileProblem);
+  for (const text of texts) expect(() => read(text)).toThrow(FileProblem);
 });

@@ -1,12 +1,18 @@
 import type { Cell } from "../../../src/call/cell.js";
 import { cellAt } from "../../../src/call/column.js";
 import { FileProblem } from "../../../src/files/fileProblem.js";
-import { type ReadTableFileOptions, readTableFileNow } from "../../../src/files/table/readTableFile.js";
 import type { TableFile } from "../../../src/files/table/tableFile.js";
+import { type TableFileHints, TableFileReading } from "../../../src/files/table/tableFileReading.js";
 import { sentenceOfTableFinding } from "../../../src/files/table/tableFinding.js";
 
-export function read(source: string | Uint8Array, options: ReadTableFileOptions = {}): TableFile {
-  return readTableFileNow(typeof source === "string" ? source : [source], options);
+export function read(source: string | Uint8Array, options: TableFileHints = {}): TableFile {
+  return readPieces([source], options);
+}
+
+export function readPieces(pieces: Iterable<string | Uint8Array>, hints: TableFileHints = {}): TableFile {
+  const reading = new TableFileReading(hints);
+  for (const piece of pieces) reading.push(piece);
+  return reading.finish();
 }
 
 /** The rows of a table, cell by cell. */
@@ -19,7 +25,7 @@ export function sentencesOf({ findings }: TableFile): string[] {
 }
 
 /** Why a file is refused. */
-export function refusal(source: string | Uint8Array, options: ReadTableFileOptions = {}): string {
+export function refusal(source: string | Uint8Array, options: TableFileHints = {}): string {
   try {
     read(source, options);
   } catch (problem) {

@@ -1,7 +1,7 @@
 import { describe, expect, test } from "vitest";
 import { readTableFile } from "../../../src/files/table/readTableFile.js";
 import { sentenceOfTableFinding, type TableFinding } from "../../../src/files/table/tableFinding.js";
-import { read, refusal, rowsOf } from "./read.js";
+import { read, readPieces, refusal, rowsOf } from "./read.js";
 
 describe("the kind of a file is found from its content", () => {
   test.each([
@@ -41,7 +41,7 @@ describe("the kind of a file is found from its content", () => {
         bytes.subarray(index * size, (index + 1) * size),
       );
       expect(() => {
-        read(Buffer.concat(pieces));
+        readPieces(pieces);
       }).toThrow(message);
     }
   });

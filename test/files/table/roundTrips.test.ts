@@ -135,7 +135,7 @@ describe("what a described form cannot hold is told", () => {
     [
       "texts like numbers",
       { header: ["id"], columns: [columnOf(["12", "x"])] },
-      'Column "id" has 1 text that read as another kind of cell in delimited text, first "12"; ECSV and VOTable keep them as text.',
+      'Column "id" has 1 text that reads as another kind of cell in delimited text, first "12"; ECSV and VOTable keep it as text.',
     ],
     [
       "a row of units with one that is not known",

@@ -14,10 +14,10 @@ const help = `barycell convert IN OUT [--to FORM] [--units row|header|ecsv]
 
 Reads a table and writes it in another form, units, descriptions and UCDs with it. What IN is, its content tells, not
 its name: CSV, TSV and other delimited text, ECSV, VOTable (TABLEDATA, BINARY, BINARY2), machine-readable tables with
-a byte-by-byte description, IPAC tables, and fixed-width tables with a rule or bars. What OUT is, its name tells:
-.csv, .tsv, .ecsv, .xml or .vot. Either may be - for standard input or output.
+a byte-by-byte description, IPAC tables, fixed-width tables with a rule or bars, and workbooks (.xlsx). What OUT is, its name tells:
+.csv, .tsv, .ecsv, .xml or .vot, .xlsx. Either may be - for standard input or output.
 
-  --to FORM              ${tableForms.slice(0, -1).join(", ")}; needed where OUT's name does not tell
+  --to FORM              ${tableForms.join(", ")}; needed where OUT's name does not tell
   --units row            in delimited text, units in a row under the header
   --units header         in delimited text, units in the headers: "Period [d]"
   --units ecsv           the same as --to ecsv: units in a described header above the rows
@@ -53,7 +53,7 @@ export const convert: Command = {
     const write = out === "-" ? undefined : await prepareFile(out);
     const progress = progressOn(terminal);
     const table = await readTable(path, layout, terminal, progress).finally(() => progress.end());
-    const { pieces, losses } = tablePieces(table, form, units);
+    const { pieces, losses } = await tablePieces(table, form, units);
     if (write) await write(pieces);
     else for (const piece of pieces) await terminal.out(piece as string);
     for (const finding of table.findings) terminal.note(`${sentenceOfTableFinding(finding)}\n`);

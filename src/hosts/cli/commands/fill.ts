@@ -65,7 +65,7 @@ export const fill: Command = {
     const { table, filled } = await derive(path, layout, requests, terminal);
     const { pieces, losses } =
       show === undefined
-        ? filledPieces(table, filled.added, out)
+        ? await filledPieces(table, filled.added, out)
         : { pieces: previewTable(table, filled.added, show), losses: [] };
     if (write) await write(pieces);
     else for (const piece of pieces) await terminal.out(piece);
