@@ -44,7 +44,10 @@ export function writtenTable(table: DescribedTable): WrittenTable {
       );
     const contents = contentsOf(column);
     losses.push(...contentLosses(name, contents));
-    const type = contents.type ?? (parts.unit === undefined ? "text" : "double");
+    const isMeasured = parts.unit !== undefined || parts.unknownUnit !== undefined;
+    // A measured quantity is no integer, even where all its values happen to be whole.
+    const type =
+      isMeasured && contents.type !== "text" && contents.type !== "logical" ? "double" : (contents.type ?? "text");
     return { ...parts, name, type, column };
   });
   return { columns, losses };

@@ -14,8 +14,8 @@ const help = `barycell convert IN OUT [--to FORM] [--units row|header|ecsv]
 
 Reads a table and writes it in another form, units, descriptions and UCDs with it. What IN is, its content tells, not
 its name: CSV, TSV and other delimited text, ECSV, VOTable (TABLEDATA, BINARY, BINARY2), machine-readable tables with
-a byte-by-byte description, IPAC tables, fixed-width tables with a rule or bars, and workbooks (.xlsx). What OUT is, its name tells:
-.csv, .tsv, .ecsv, .xml or .vot, .xlsx. Either may be - for standard input or output.
+a byte-by-byte description, IPAC tables, fixed-width tables with a rule or bars, workbooks (.xlsx). What OUT is, its
+name tells: .csv, .tsv, .ecsv, .xml or .vot, .xlsx. Either may be - for standard input or output.
 
   --to FORM              ${tableForms.join(", ")}; needed where OUT's name does not tell
   --units row            in delimited text, units in a row under the header

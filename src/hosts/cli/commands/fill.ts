@@ -24,7 +24,7 @@ row of units stands under the header) and is filled down; $ keeps a row or colum
 uncertainties takes the columns beside it too. IN is any file that barycell convert reads, or - for standard input.
 Delimited text stays as it is to the character, with the columns added; of it the delimiter (comma, semicolon, tab,
 bar), quotes, comment lines (#) and a row of units are recognised. Another form comes out where OUT's name ends in it
-(.ecsv, .xml, .tsv ...); a table that came in another form is written in its own where that can be, or as CSV.
+(.ecsv, .xml, .xlsx ...); a table that came in another form is written in its own where that can be, or as CSV.
 
   --set HEADER FORMULA   a column to add, for example --set "K [m/s]" "=BARY.REFLEX(B2,C2,D2,,,B$1:D$1,E$1)"
   --out OUT              write there instead of to standard output
