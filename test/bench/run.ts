@@ -1,4 +1,5 @@
 import { benchFill } from "./fill.js";
+import { benchFormats } from "./formats.js";
 import { benchReflex } from "./reflex.js";
 import { benchSheet } from "./sheet.js";
 import { benchXlsx } from "./xlsx.js";
@@ -8,6 +9,7 @@ const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
   fill: benchFill,
   xlsx: () => benchXlsx((line) => void process.stdout.write(`${line}\n`)),
+  formats: benchFormats,
   sheet: () => benchSheet((line) => void process.stdout.write(`${line}\n`)),
 };
 
