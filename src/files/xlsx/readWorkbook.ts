@@ -20,7 +20,6 @@ import { readWorkbookPart } from "./read/readWorkbookPart.js";
 import { refuseOtherKinds } from "./read/refuseOtherKinds.js";
 import type { Steps } from "./steps.js";
 import { inSlices } from "./steps.js";
-import { isOwnFile } from "./write/appPart.js";
 
 /**
  * Reads a workbook (ECMA-376, .xlsx). Cells hold what the file says their formulas gave; formulas without a value, and
@@ -87,8 +86,7 @@ function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calcul
   notes.push(...notesOf(sheets, readings));
   const presentations = sheets.map(({ hidden }, sheet): SheetPresentation => ({ ...plainSheet, ...readings[sheet]?.presentation, hidden })); // biome-ignore format: one value
   if (calculating === "as needed") {
-    const wantsAll = recalculates && !isOwnFile(parts);
-    book = yield* calculate(book, { changed: [], stale: wantsAll ? allFormulas(book) : withoutValue(readings) });
+    book = yield* calculate(book, { changed: [], stale: recalculates ? allFormulas(book) : withoutValue(readings) });
   }
   return { book, sheets: presentations, notes };
 }
@@ -103,9 +101,7 @@ function withoutValue(readings: readonly (SheetReading | undefined)[]): ColumnSp
 function allFormulas(book: Book): ColumnSpan[] {
   return book.sheets.flatMap(({ columns }, sheet) =>
     columns.flatMap(({ runs }, column) =>
-      runs
-        .filter(({ formula }) => formula.problem === undefined)
-        .map(({ from, to }) => ({ sheet, column, from, to })),
+      runs.filter(({ formula }) => formula.problem === undefined).map(({ from, to }) => ({ sheet, column, from, to })),
     ),
   );
 }

@@ -5,7 +5,6 @@ import { plainSheet } from "../../sheet/display/workbook.js";
 import { zipWriter } from "../zip/zipWriter.js";
 import type { Steps } from "./steps.js";
 import { inSlices } from "./steps.js";
-import { appPart, appPartName } from "./write/appPart.js";
 import { xmlDeclaration } from "./write/spaces.js";
 import { stringTable } from "./write/stringTable.js";
 import { styleTable } from "./write/styleTable.js";
@@ -43,7 +42,6 @@ function* writeSteps(workbook: Workbook): Steps<Uint8Array> {
   part("xl/workbook.xml", workbookPart({ ...workbook, sheets }));
   part("xl/_rels/workbook.xml.rels", workbookRelationshipsPart(sheets.length));
   part("xl/metadata.xml", metadataPart());
-  part(appPartName, appPart());
 
   const total = book.sheets.reduce((sum, _, index) => sum + usedRows(book, index), 0);
   let done = 0;

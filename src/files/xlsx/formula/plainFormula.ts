@@ -47,7 +47,20 @@ function close(out: string[], bracket: Bracket | undefined): void {
     return;
   }
   const content = out.splice(bracket.from);
-  const isWhole = content.length === 1 || /^[\w.]+$/.test(content[0] ?? "");
+  const isWhole = content.length === 1 || endOfBrackets(content) === content.length - 1;
   const text = isWhole ? content.join("") : `(${content.join("")})`;
   out.push(bracket.as === "@" ? `@${text}` : `${text}#`);
+}
+
+/** Where the brackets close that stand first, or first behind the name of a function. */
+function endOfBrackets(content: readonly string[]): number {
+  const start = content[0] === "(" ? 0 : /^[\w.]+$/.test(content[0] ?? "") && content[1] === "(" ? 1 : content.length;
+  let depth = 0;
+  for (let at = start; at < content.length; at++) {
+    depth += content[at] === "(" ? 1 : content[at] === ")" ? -1 : 0;
+    if (depth === 0) {
+      return at;
+    }
+  }
+  return -1;
 }

@@ -2,7 +2,7 @@ import { FileProblem } from "../../fileProblem.js";
 
 type Sign = readonly [bytes: readonly number[], sentence: string];
 
-const saveAs = "save it as a workbook (.xlsx) there and open that file";
+const saveAs = "save it as a workbook (.xlsx) where it was made and open that file";
 
 /** The first bytes of files that are handed over as workbooks and are something else. */
 const signs: readonly Sign[] = [

@@ -3,7 +3,6 @@ import type { Workbook } from "../../../sheet/display/workbook.js";
 import { formulaText } from "../../../sheet/formula/formula.js";
 import { storedText } from "../formula/storedText.js";
 import { escapeAttribute, escapeText } from "../xml/xmlText.js";
-import { appPartName } from "./appPart.js";
 import { contentTypesSpace, mainSpace, officeRelationships, packageRelationships } from "./spaces.js";
 
 const spreadsheet = "application/vnd.openxmlformats-officedocument.spreadsheetml";
@@ -23,16 +22,12 @@ export function contentTypesPart(sheets: number): string {
     override("xl/styles.xml", `${spreadsheet}.styles`),
     override("xl/sharedStrings.xml", `${spreadsheet}.sharedStrings`),
     override("xl/metadata.xml", `${spreadsheet}.sheetMetadata`),
-    override(appPartName, "application/vnd.openxmlformats-officedocument.extended-properties"),
     "</Types>",
   ].join("");
 }
 
 export function packageRelationshipsPart(): string {
-  return relationshipsPart([
-    ["officeDocument", "xl/workbook.xml"],
-    ["extended-properties", appPartName],
-  ]);
+  return relationshipsPart([["officeDocument", "xl/workbook.xml"]]);
 }
 
 export function workbookRelationshipsPart(sheets: number): string {
@@ -52,7 +47,10 @@ function relationshipsPart(targets: readonly (readonly [type: string, target: st
   return `<Relationships xmlns="${packageRelationships}">${lines.join("")}</Relationships>`;
 }
 
-/** The list of sheets and names. It asks for a calculation: a program with the add-in then has values of its own. */
+/**
+ * The list of sheets and names. It does not ask for a calculation, so that a program without the add-in shows the values
+ * that are there; the version of the calculation keeps programs from one of their own accord (common practice, no source).
+ */
 export function workbookPart({ book, sheets }: Workbook): string {
   const firstShown = Math.max(0, sheets.findIndex(({ hidden }) => !hidden)); // biome-ignore format: one value
   const lines = book.sheets.map(({ name }, index) => {
@@ -65,7 +63,7 @@ export function workbookPart({ book, sheets }: Workbook): string {
     `<bookViews><workbookView activeTab="${firstShown}"/></bookViews>`,
     `<sheets>${lines.join("")}</sheets>`,
     definedNames(book),
-    '<calcPr calcId="191029" fullCalcOnLoad="1"/>',
+    '<calcPr calcId="191029"/>',
     "</workbook>",
   ].join("");
 }
