@@ -7,6 +7,7 @@ import type { Workbook } from "../../sheet/display/workbook.js";
 import { type TablePlan, tableOf } from "../../table/tableOf.js";
 import { readHeader } from "../../units/readHeader.js";
 import { FileProblem } from "../fileProblem.js";
+import { sameNames } from "./sameNames.js";
 import type { TableFile } from "./tableFile.js";
 import type { TableFinding } from "./tableFinding.js";
 
@@ -39,7 +40,7 @@ export function tableOfWorkbook({ book, notes }: Workbook, asked: string | undef
       ucd: undefined,
     })),
     remarks: [...above(book, sheet, plan.headerRow), ...notes],
-    findings: [...several, ...(rows === 0 ? [{ kind: "no-rows" } as const] : [])],
+    findings: [...several, ...sameNames(header), ...(rows === 0 ? [{ kind: "no-rows" } as const] : [])],
     delimited: undefined,
   };
 }

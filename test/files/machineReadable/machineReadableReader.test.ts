@@ -64,6 +64,18 @@ describe("a machine-readable table", () => {
     ]);
   });
 
+  test("a rule below the data closes them", () => {
+    const closed = read(`${table}${"-".repeat(80)}\n`);
+    expect(rowsOf(closed)).toEqual(rowsOf(file));
+    expect([closed.remarks, sentencesOf(closed)]).toEqual([file.remarks, sentencesOf(file)]);
+    expect(rowsOf(read(table.replace(/^007[\s\S]*/m, "")))).toEqual([]);
+    const noted = read(table.replace("Note (1)", "(1)"));
+    expect([rowsOf(noted), noted.remarks]).toEqual([
+      rowsOf(file),
+      ["Authors: Nobody A., Noone B.", "(1): From the fit of all data."],
+    ]);
+  });
+
   test("text to the right of the last column is told", () => {
     const line = "007     4.230 0.47 0.02 1 4.45 1.0D-07 more\n";
     expect(sentencesOf(read(table.replace(/007.*\n/, line)))[0]).toBe(
