@@ -13,7 +13,7 @@ Byte-by-byte Description of file: datafile1.txt
    Bytes Format Units    Label   Explanations
 --------------------------------------------------------------------------------
    1-  6 A6     ---      Name    Name of the star
-   8- 13 F6.3   d        Per     ?=-9.999 Orbital period
+   8- 13 F6.3   d        Per     [0/99]?=-9.999 Orbital period
   15- 18 F4.2   jovMass  Mass    ?=--- Minimum mass, as
                                    fitted (1)
   20- 23 F4.2   jovMass  e_Mass  ? Uncertainty in Mass
