@@ -4,6 +4,7 @@ import { readWorkbook, readWorkbookAsStored } from "../../../src/files/xlsx/read
 import { change } from "../../../src/sheet/change.js";
 import type { Workbook } from "../../../src/sheet/display/workbook.js";
 import { recalculate } from "../../../src/sheet/edit/recalculate.js";
+import { setCells } from "../../../src/sheet/edit/setCells.js";
 import { formulaAt, messageAt, valueAt } from "../../sheet/grid.js";
 import type { Parts } from "./packed.js";
 import { packed } from "./packed.js";
@@ -131,6 +132,14 @@ describe("formulas", () => {
     expect(["A1", "B1", "C1", "D1", "E1"].map((each) => valueAt(book, each))).toEqual([1, 2, "#VALUE!", 1, 2]);
     const again = change(book, [recalculate()], ownFunctions);
     expect(["A1", "B1", "C1", "D1", "E1"].map((each) => valueAt(again, each))).toEqual([1, 2, "#VALUE!", 1, 2]);
+  });
+
+  test("that found no room are known to wait for it", async () => {
+    const data = row('<c r="A1" t="e" cm="1"><f t="array" ref="A1">_xlfn.SEQUENCE(1,2)</f><v>#VALUE!</v></c><c r="B1"><v>7</v></c>'); // biome-ignore format: one row
+    const { book } = await read({ data });
+    expect(messageAt(book, "A1")).toMatch(/B1 is in the way/);
+    const cleared = change(book, [setCells({ sheet: 0, row: 0, column: 1 }, [[null]])], ownFunctions);
+    expect(["A1", "B1"].map((each) => valueAt(cleared, each))).toEqual([1, 2]);
   });
 
   test("with an error say why when they are asked", async () => {

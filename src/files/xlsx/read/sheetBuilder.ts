@@ -29,7 +29,7 @@ interface ColumnBuilder {
 export interface BuiltSheet {
   readonly columns: readonly SheetColumn[];
   readonly formats: ReadonlyMap<number, FormatsBuilder>;
-  /** Formulas without a value in the file, by column. */
+  /** Formulas whose value the file does not tell, or not all of it, by column. */
   readonly stale: ReadonlyMap<number, readonly Span[]>;
   readonly hasOtherFormulas: boolean;
 }
@@ -102,7 +102,7 @@ export function sheetBuilder(reading: CellReading, explain: ExplainError): Sheet
         cells.put(row, value);
         count++;
       }
-      if (hasFormula && raw.value === undefined) {
+      if (hasFormula && (raw.value === undefined || mayBeBlocked(raw))) {
         addStale(builder, row);
       }
       builder.formats.put(row, style);
@@ -132,6 +132,11 @@ export function sheetBuilder(reading: CellReading, explain: ExplainError): Sheet
       };
     },
   };
+}
+
+/** No file tells whether an array formula gave an error or found no room; only a calculation finds out. */
+function mayBeBlocked({ type, formulaType, formulaArea }: RawCell): boolean {
+  return type === "e" && formulaType === "array" && !formulaArea.includes(":");
 }
 
 function addStale({ stale }: ColumnBuilder, row: number): void {
