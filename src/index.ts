@@ -3,6 +3,15 @@ export type { Argument, ArgumentCells, CellFunction, RowArgument } from "./call/
 export { cellFunctionOf } from "./call/cellFunctionOf.js";
 export { cellFunctionNames, findCellFunction } from "./call/cellFunctions.js";
 export { type Block, blockOf, type Column, cellAt, cellsOf, columnOf } from "./call/column.js";
+export { type DelimitedForm, delimitedOfTable, type UnitsPlace } from "./files/delimited/delimitedOfTable.js";
+export { type TableToWrite, type WriteOptions, writeDelimited } from "./files/delimited/writeDelimited.js";
+export { writeEcsv } from "./files/ecsv/writeEcsv.js";
+export { FileProblem } from "./files/fileProblem.js";
+export type { DescribedTable } from "./files/table/describedTable.js";
+export { type ReadTableFileOptions, readTableFile } from "./files/table/readTableFile.js";
+export type { ColumnNotes, TableFile } from "./files/table/tableFile.js";
+export { sentenceOfTableFinding, type TableFinding } from "./files/table/tableFinding.js";
+export { writeVotable } from "./files/votable/writeVotable.js";
 export type { Definition } from "./functions/definition.js";
 export { definitions } from "./functions/definitions.js";
 export type { Quantity } from "./functions/quantity.js";

@@ -12,7 +12,9 @@ export type FileProblemKind =
   | "no-table"
   /** A packed file whose parts do not fit together, or that would unpack to more than any table is. */
   | "damaged"
-  | "too-large";
+  | "too-large"
+  /** Under a password. */
+  | "encrypted";
 
 /** Why a file cannot be read as a table; the message is one sentence for the analyst. */
 export class FileProblem extends Error {

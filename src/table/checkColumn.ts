@@ -20,8 +20,8 @@ export interface ColumnCheck {
   readonly findings: readonly ColumnFinding[];
 }
 
-export function checkColumn(header: string, unitCell: string | undefined, column: Column): ColumnCheck {
-  const recognised = recogniseColumn(header, unitCell);
+export function checkColumn(header: string, unitCell: string | undefined, column: Column, ucd?: string): ColumnCheck {
+  const recognised = recogniseColumn(header, unitCell, ucd);
   const { counts, findings } = contentsOf(column, recognised);
   // A column without numbers needs no unit: names, remarks, or quantities that carry their own.
   const ofHeader = counts.numbers > 0 ? headerFindings(recognised) : [];

@@ -5,12 +5,14 @@ export interface TableColumn {
   readonly header: string;
   /** The cell of a row of units under the header, where the table has one. */
   readonly unitCell?: string;
+  /** What the file says that the column means (IVOA UCD1+). */
+  readonly ucd?: string | undefined;
   readonly column: Column;
 }
 
 /** What was understood of each column of a table, and what to look at. */
 export function checkTable(columns: readonly TableColumn[]): readonly ColumnCheck[] {
-  return withNeighbours(columns.map(({ header, unitCell, column }) => checkColumn(header, unitCell, column)));
+  return withNeighbours(columns.map(({ header, unitCell, ucd, column }) => checkColumn(header, unitCell, column, ucd)));
 }
 
 /** Checks of columns side by side, with what only their neighbours show. */

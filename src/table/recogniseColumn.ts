@@ -5,6 +5,7 @@ import { isProblem, type UnitProblem } from "../units/problem.js";
 import { readHeader } from "../units/readHeader.js";
 import { readUnit } from "../units/readUnit.js";
 import type { Unit } from "../units/unit.js";
+import { isErrorUcd, quantityOfUcd } from "./ucds.js";
 
 /** What the header of a column was understood to say. */
 export interface RecognisedColumn {
@@ -25,8 +26,11 @@ const uncertaintyWords =
 const aboutAnother =
   /(?<!\p{L})(?:ratio|half|rms|scatter|flag|ref|reference|limit|source|method|number|count|year|date|quality|grade|class|type|name|id)(?!\p{L})/iu;
 
-/** `unitCell`: the cell of a row of units under the header, where the table has one. */
-export function recogniseColumn(header: string, unitCell?: string): RecognisedColumn {
+/**
+ * `unitCell`: the cell of a row of units under the header, where the table has one. `ucd`: what the file itself says the
+ * column means (IVOA UCD1+); it decides where the name says nothing.
+ */
+export function recogniseColumn(header: string, unitCell?: string, ucd = ""): RecognisedColumn {
   const reading = readHeader(header);
   const below = unitCell === undefined || unitCell.trim() === "" ? undefined : readUnit(unitCell);
   // "K" alone heads a column of semi-amplitudes rather than one of kelvins.
@@ -35,10 +39,11 @@ export function recogniseColumn(header: string, unitCell?: string): RecognisedCo
   const problem = reading.problem ?? (below && isProblem(below) ? below : undefined);
   const name = reading.name || header.trim();
   const bare = name.replace(uncertaintyWords, " ").trim();
-  const quantity = quantityNamed(bare, unit);
+  const quantity = quantityNamed(bare, unit) ?? quantityOfUcd(ucd, name, unit);
   // An hour of right ascension is no hour of time.
   const own = quantity?.sexagesimal === "hours" ? angleOf(unit) : unit;
-  return { name, unit: own, problem, quantity, isUncertainty: bare !== name.trim() };
+  const isUncertainty = bare !== name.trim() || isErrorUcd(ucd);
+  return { name, unit: own, problem, quantity, isUncertainty };
 }
 
 interface NamedQuantity {

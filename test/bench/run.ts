@@ -1,15 +1,19 @@
 import { benchFill } from "./fill.js";
+import { benchFormats } from "./formats.js";
 import { benchPage } from "./page.js";
 import { benchPlan } from "./plan.js";
 import { benchReflex } from "./reflex.js";
 import { benchSheet } from "./sheet.js";
 import { benchTime } from "./time.js";
+import { benchXlsx } from "./xlsx.js";
 
 /** `npm run bench [part]`: timings that compare two things in one run; they never decide a test. */
 const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   reflex: benchReflex,
   time: benchTime,
   fill: benchFill,
+  xlsx: () => benchXlsx(print),
+  formats: benchFormats,
   plan: benchPlan,
   sheet: () => benchSheet(print),
   page: () => benchPage(print),

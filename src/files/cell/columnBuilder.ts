@@ -1,3 +1,4 @@
+import type { Cell } from "../../call/cell.js";
 import type { Column, OtherCell } from "../../call/column.js";
 import { cellOfField } from "./cellOfField.js";
 
@@ -20,8 +21,12 @@ export class ColumnBuilder {
     }
   }
 
+  /** A field of a text that does not say what its columns hold. */
   push(field: string): void {
-    const cell = cellOfField(field);
+    this.pushCell(cellOfField(field));
+  }
+
+  pushCell(cell: Cell): void {
     if (typeof cell === "number") {
       this.add(cell, undefined);
     } else {

@@ -1,4 +1,5 @@
 import { ColumnBuilder } from "../cell/columnBuilder.js";
+import { unguardFormula } from "../cell/guardFormula.js";
 import { FileProblem } from "../fileProblem.js";
 import type { TextEncoding } from "../text/textSource.js";
 import { asidesOf } from "./asidesOf.js";
@@ -116,10 +117,10 @@ export class DelimitedReader {
     }
     this.source.addRecord(start, end, fields.length, trouble === "unclosed");
     if (this.header === undefined) {
-      this.header = fields.map((field) => field.trim());
+      this.header = fields.map((field) => unguardFormula(field.trim()));
       this.widen(fields.length);
     } else if (this.source.records === 2 && this.holdsUnits(fields)) {
-      this.unitsRow = fields.map((field) => field.trim());
+      this.unitsRow = fields.map((field) => unguardFormula(field.trim()));
       this.checkWidth(fields.length, this.header.length);
     } else {
       this.addRow(fields, this.header.length);

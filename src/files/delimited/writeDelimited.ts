@@ -1,6 +1,7 @@
 import { type Column, cellAt } from "../../call/column.js";
 import type { Delimiter, Newline } from "./dialect.js";
-import { type GuardText, guardedField, quoteField, quoteFirstField } from "./fieldWriter.js";
+import { type GuardText, guardedField } from "./fieldWriter.js";
+import { lineOfFields } from "./lineOfFields.js";
 
 /** A table to be written: one header, one column and, where units stand in a row of their own, one unit a column. */
 export interface TableToWrite {
@@ -28,13 +29,13 @@ export function* writeDelimited(table: TableToWrite, options: WriteOptions = {})
   checkShape(table, rows);
   const guarded = (text: string) => guardedField(text, guardText);
   let text = byteOrderMark ? "\uFEFF" : "";
-  text += lineOf(header.map(guarded), delimiter) + newline;
+  text += lineOfFields(header.map(guarded), delimiter) + newline;
   if (unitsRow !== undefined) {
-    text += lineOf(unitsRow.map(guarded), delimiter) + newline;
+    text += lineOfFields(unitsRow.map(guarded), delimiter) + newline;
   }
   for (let row = 0; row < rows; row++) {
     text +=
-      lineOf(
+      lineOfFields(
         columns.map((column) => guardedField(cellAt(column, row), guardText)),
         delimiter,
       ) + newline;
@@ -44,14 +45,6 @@ export function* writeDelimited(table: TableToWrite, options: WriteOptions = {})
     }
   }
   yield text;
-}
-
-/** A line that would be blank has its first field quoted, for blank lines are no records. */
-function lineOf(fields: readonly string[], delimiter: Delimiter): string {
-  const line = fields
-    .map((field, column) => (column === 0 ? quoteFirstField(field) : quoteField(field)))
-    .join(delimiter);
-  return line.trim() === "" ? `""${line}` : line;
 }
 
 function checkShape({ header, unitsRow = header, columns }: TableToWrite, rows: number): void {

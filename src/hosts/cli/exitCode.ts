@@ -7,4 +7,6 @@ export const exitCode = {
   usage: 2,
   /** A file cannot be read or written. */
   file: 3,
+  /** Values that a file holds are not what its formulas give. */
+  changed: 4,
 } as const;

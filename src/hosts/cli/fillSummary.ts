@@ -1,10 +1,10 @@
-import type { DelimitedTable } from "../../files/delimited/delimitedTable.js";
 import { columnLetters } from "../../sheet/book/address.js";
 import type { CellProblem } from "../../sheet/book/listProblems.js";
 import type { FilledColumn, FilledTable } from "./fillTable.js";
+import type { SheetTable } from "./tableBook.js";
 
 /** What to know of the columns added, what was done in one line, then each distinct problem once. */
-export function fillSummary(table: DelimitedTable, { added, problems, doubts }: FilledTable): string {
+export function fillSummary(table: SheetTable, { added, problems, doubts }: FilledTable): string {
   const distinct = mergeProblems(problems);
   const cells = distinct.reduce((sum, { count }) => sum + count, 0);
   const names = added.map(({ header, letters }) => `${letters} "${header}"`).join(", ");
@@ -19,7 +19,7 @@ export function fillSummary(table: DelimitedTable, { added, problems, doubts }: 
     .join("");
 }
 
-function twiceNamed(table: DelimitedTable, added: readonly FilledColumn[]): string[] {
+function twiceNamed(table: SheetTable, added: readonly FilledColumn[]): string[] {
   return added.flatMap(({ header, letters }, index) => {
     const earlier = table.header.indexOf(header);
     const before =

@@ -1,6 +1,5 @@
 import { type Column, sliceColumn } from "../../call/column.js";
 import type { AddedColumn } from "../../files/delimited/appendColumns.js";
-import type { DelimitedTable } from "../../files/delimited/delimitedTable.js";
 import { addressText, columnLetters } from "../../sheet/book/address.js";
 import { type Book, columnAt } from "../../sheet/book/book.js";
 import { type CellProblem, listProblems } from "../../sheet/book/listProblems.js";
@@ -15,7 +14,7 @@ import { checkReferences } from "./checkReferences.js";
 import type { ColumnRequest } from "./columnRequest.js";
 import { headersOfResult } from "./headersOfResult.js";
 import type { Progress } from "./progress.js";
-import { headerRows, tableBook } from "./tableBook.js";
+import { headerRows, type SheetTable, tableBook } from "./tableBook.js";
 import { UsageProblem } from "./usageProblem.js";
 import { functions } from "./worksheet.js";
 
@@ -44,7 +43,7 @@ interface Place {
 }
 
 /** Adds columns to the right of a table, one after the other, each formula filled down over all rows. */
-export function fillTable(table: DelimitedTable, requests: readonly ColumnRequest[], progress: Progress): FilledTable {
+export function fillTable(table: SheetTable, requests: readonly ColumnRequest[], progress: Progress): FilledTable {
   const rows = { from: headerRows(table), to: headerRows(table) + table.rows };
   let book = tableBook(table);
   let column = table.columns.length;

@@ -21,8 +21,8 @@ process.exitCode = await run(process.argv.slice(2), {
     isMidLine = false;
     process.stderr.write(text);
   },
-  async out(text) {
-    if (text !== "") isMidLine = !text.endsWith("\n");
-    if (!process.stdout.write(text)) await once(process.stdout, "drain");
+  async out(piece) {
+    if (piece.length > 0) isMidLine = typeof piece === "string" && !piece.endsWith("\n");
+    if (!process.stdout.write(piece)) await once(process.stdout, "drain");
   },
 });

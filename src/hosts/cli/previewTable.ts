@@ -1,12 +1,12 @@
 import { type Cell, CellError } from "../../call/cell.js";
 import { cellAt } from "../../call/column.js";
-import type { DelimitedTable } from "../../files/delimited/delimitedTable.js";
 import type { FilledColumn } from "./fillTable.js";
+import type { SheetTable } from "./tableBook.js";
 
 const digits = 6;
 
 /** The first rows as an aligned table for the eye: numbers to six significant digits, under their own headers. */
-export function* previewTable(table: DelimitedTable, added: readonly FilledColumn[], most: number): Generator<string> {
+export function* previewTable(table: SheetTable, added: readonly FilledColumn[], most: number): Generator<string> {
   const rows = Math.min(table.rows, most);
   const columns = [
     ...table.columns.map((column, index) => ({ header: table.header[index]!, unit: table.unitsRow?.[index], column })),

@@ -1,24 +1,27 @@
 import { createReadStream } from "node:fs";
-import type { DelimitedTable } from "../../files/delimited/delimitedTable.js";
 import { type Delimiter, delimiters } from "../../files/delimited/dialect.js";
-import { readDelimited } from "../../files/delimited/readDelimited.js";
 import { FileProblem } from "../../files/fileProblem.js";
-import { isProblem } from "../../units/problem.js";
-import { readUnit } from "../../units/readUnit.js";
+import { readTableFile } from "../../files/table/readTableFile.js";
+import type { TableFile } from "../../files/table/tableFile.js";
+import { type CommandLine, optionValue } from "./commandLine.js";
 import { IoProblem, ioProblem } from "./ioProblem.js";
 import type { Progress } from "./progress.js";
 import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 
-/** How a table's text is laid out, where the analyst says so; left out, it is found from the text. */
+/** How a table stands in its file, where the analyst says so; left out, it is found from the content. */
 export interface TableLayout {
   readonly delimiter: Delimiter | undefined;
   readonly unitsRow: boolean | undefined;
+  /** Which table of several: its name, or its number from 1. */
+  readonly table: string | undefined;
 }
 
 const delimiterNames: Readonly<Record<string, Delimiter>> = { comma: ",", tab: "\t", semicolon: ";", bar: "|" };
 
-export function tableLayout(delimiter: string | undefined, unitsRow: string | undefined): TableLayout {
+export function tableLayout(line: CommandLine): TableLayout {
+  const delimiter = optionValue(line, "--delimiter");
+  const unitsRow = optionValue(line, "--units-row");
   const known =
     delimiter === undefined ? undefined : (delimiterNames[delimiter] ?? delimiters.find((own) => own === delimiter));
   if (delimiter !== undefined && known === undefined) {
@@ -27,7 +30,11 @@ export function tableLayout(delimiter: string | undefined, unitsRow: string | un
   if (unitsRow !== undefined && unitsRow !== "yes" && unitsRow !== "no") {
     throw new UsageProblem(`--units-row is "${unitsRow}"; it is yes or no.`);
   }
-  return { delimiter: known, unitsRow: unitsRow === undefined ? undefined : unitsRow === "yes" };
+  return {
+    delimiter: known,
+    unitsRow: unitsRow === undefined ? undefined : unitsRow === "yes",
+    table: optionValue(line, "--table"),
+  };
 }
 
 /** Reads a table from a file, or from standard input for "-". */
@@ -36,13 +43,13 @@ export async function readTable(
   layout: TableLayout,
   terminal: Terminal,
   progress: Progress,
-): Promise<DelimitedTable> {
+): Promise<TableFile> {
   const source = path === "-" ? terminal.input : createReadStream(path, { highWaterMark: 1 << 20 });
   try {
-    return await readDelimited(source, {
-      isUnit: (text) => !isProblem(readUnit(text)),
+    return await readTableFile(source, {
       ...(layout.delimiter === undefined ? {} : { delimiter: layout.delimiter }),
       ...(layout.unitsRow === undefined ? {} : { unitsRow: layout.unitsRow }),
+      ...(layout.table === undefined ? {} : { table: layout.table }),
       progress: ({ rows }) => progress.show(`reading ${path}`, rows),
     });
   } catch (error) {

@@ -3,11 +3,14 @@ import type { Command } from "./command.js";
 import { readCommandLine } from "./commandLine.js";
 import { bench } from "./commands/bench.js";
 import { calc } from "./commands/calc.js";
+import { check } from "./commands/check.js";
+import { convert } from "./commands/convert.js";
 import { demo } from "./commands/demo.js";
 import { explain } from "./commands/explain.js";
 import { fill } from "./commands/fill.js";
 import { functions } from "./commands/functions.js";
 import { plan } from "./commands/plan.js";
+import { recalc } from "./commands/recalc.js";
 import { units } from "./commands/units.js";
 import { exitCode } from "./exitCode.js";
 import { IoProblem } from "./ioProblem.js";
@@ -15,7 +18,7 @@ import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 import { version } from "./version.js";
 
-const commands: readonly Command[] = [bench, calc, fill, plan, functions, explain, units, demo];
+const commands: readonly Command[] = [bench, calc, fill, plan, convert, check, recalc, functions, explain, units, demo];
 
 const help = `barycell: unit-safe functions for radial-velocity target tables
 
@@ -23,8 +26,9 @@ ${commands.map(({ name, summary }) => `  barycell ${name.padEnd(10)} ${summary}`
 
   barycell COMMAND --help tells about one command; barycell --version prints the version.
 
-Exit codes: ${exitCode.done} done; ${exitCode.cellError} a formula or a cell has an error (fill: with --strict); ${exitCode.usage} the command line cannot be
-understood; ${exitCode.file} a file cannot be read or written.
+Exit codes: ${exitCode.done} done; ${exitCode.cellError} a formula or a cell has an error (fill: with --strict), or there is something to look at
+(check); ${exitCode.usage} the command line cannot be understood; ${exitCode.file} a file cannot be read or written;
+${exitCode.changed} values of a workbook are not what its formulas give (recalc).
 `;
 
 /** Runs one command line; resolves to the exit code. */

@@ -3,8 +3,11 @@ import { type FileHandle, open, realpath, rename, rm, stat } from "node:fs/promi
 import { basename, dirname, join, resolve } from "node:path";
 import { IoProblem, ioProblem } from "./ioProblem.js";
 
-/** Writes a text to a file that takes its place only when it is whole, so that what stood there is never half lost. */
-export type WriteFile = (pieces: Iterable<string>) => Promise<void>;
+/** A piece of a file: text, or bytes. */
+export type Piece = string | Uint8Array;
+
+/** Writes a file that takes its place only when it is whole, so that what stood there is never half lost. */
+export type WriteFile = (pieces: Iterable<Piece>) => Promise<void>;
 
 /** Rejects at once where the path cannot be written, before long work is done for it; leaves nothing behind until it writes. */
 export async function prepareFile(path: string): Promise<WriteFile> {
@@ -33,7 +36,7 @@ interface Place {
   readonly standing: Stats | undefined;
 }
 
-async function writeWhole(path: string, { target, draft, standing }: Place, pieces: Iterable<string>): Promise<void> {
+async function writeWhole(path: string, { target, draft, standing }: Place, pieces: Iterable<Piece>): Promise<void> {
   const file = await openDraft(path, draft, standing);
   const interrupted = (signal: NodeJS.Signals) => {
     rmSync(draft, { force: true });
@@ -43,7 +46,7 @@ async function writeWhole(path: string, { target, draft, standing }: Place, piec
   const signals = ["SIGINT", "SIGTERM", "SIGHUP"] as const;
   for (const signal of signals) process.on(signal, interrupted);
   try {
-    for (const piece of pieces) await file.write(piece);
+    for (const piece of pieces) await file.appendFile(piece);
     await file.sync();
     await file.close();
     await rename(draft, target);
@@ -57,11 +60,11 @@ async function writeWhole(path: string, { target, draft, standing }: Place, piec
 }
 
 /** A device or a pipe has nothing to lose, and must not be replaced by a file. */
-async function writeThrough(path: string, target: string, pieces: Iterable<string>): Promise<void> {
+async function writeThrough(path: string, target: string, pieces: Iterable<Piece>): Promise<void> {
   try {
     const file = await open(target, "w");
     try {
-      for (const piece of pieces) await file.write(piece);
+      for (const piece of pieces) await file.appendFile(piece);
     } finally {
       await file.close();
     }

@@ -7,7 +7,19 @@ import { definitions } from "../../../src/functions/definitions.js";
 import { barycell } from "./barycell.js";
 import { expectGolden } from "./golden.js";
 
-const commands = ["bench", "calc", "fill", "plan", "functions", "explain", "units", "demo"];
+const commands = [
+  "bench",
+  "calc",
+  "fill",
+  "plan",
+  "convert",
+  "check",
+  "recalc",
+  "functions",
+  "explain",
+  "units",
+  "demo",
+];
 
 describe.concurrent("--help", () => {
   test("of barycell and of every command is the golden text", async () => {

@@ -1,6 +1,6 @@
-import type { DelimitedTable } from "../../../files/delimited/delimitedTable.js";
-import { sentenceOfFinding } from "../../../files/delimited/sentenceOfFinding.js";
 import { writeDelimited } from "../../../files/delimited/writeDelimited.js";
+import type { TableFile } from "../../../files/table/tableFile.js";
+import { sentenceOfTableFinding } from "../../../files/table/tableFinding.js";
 import { type Plan, planSteps } from "../../../plan/plan.js";
 import { planTable } from "../../../plan/planTable.js";
 import { readSite } from "../../../plan/readSite.js";
@@ -19,13 +19,13 @@ import { readTable, tableLayout } from "../readTable.js";
 import { UsageProblem } from "../usageProblem.js";
 import { prepareFile } from "../writeFile.js";
 
-const help = `barycell plan TABLE.csv --hours HOURS --from DATE --to DATE --site SITE --value HEADER [...]
+const help = `barycell plan TABLE --hours HOURS --from DATE --to DATE --site SITE --value HEADER [...]
 
 Chooses the targets whose values sum to the most within a number of hours, and lays their visits on dates: in the
 dark, within the airmass limit, near the phases wanted. The choice is exact, of targets whose visits fit into the dates;
 the schedule keeps every limit, and is no optimum.
 Columns are recognised by their headers and units: RA, dec, period and reference time (BJD_TDB) with uncertainties,
-visits, exposure, overhead, hours, eccentricity, omega. TABLE.csv may be - for standard input.
+visits, exposure, overhead, hours, eccentricity, omega. TABLE may be - for standard input.
 
   --hours HOURS          telescope time there is
   --from DATE --to DATE  evenings of the first and of the last night, 2027-02-01
@@ -48,7 +48,7 @@ visits, exposure, overhead, hours, eccentricity, omega. TABLE.csv may be - for s
   --summary FILE         write the summary there instead of to standard error
   --json                 write choice, visits and what was left out as JSON
   --strict               exit 1 if a chosen target lacks visits or a row cannot be planned
-  --force, --delimiter NAME, --units-row yes|no   as for barycell fill
+  --force, --delimiter NAME, --units-row yes|no, --table NAME   as for barycell fill
 
 Exit code 1 also where the targets that have to be in need more hours than there are.
 `;
@@ -59,7 +59,7 @@ export const plan: Command = {
   help,
   options: {
     ...Object.fromEntries(
-      "hours from to site value name column must exclude airmass sun moon phases width per-night gap efficiency out summary delimiter units-row"
+      "hours from to site value name column must exclude airmass sun moon phases width per-night gap efficiency out summary delimiter units-row table"
         .split(" ")
         .map((name) => [`--${name}`, 1]),
     ),
@@ -73,7 +73,7 @@ export const plan: Command = {
       throw new UsageProblem("give one table, for example targets.csv, or - for standard input.");
     }
     const options = planOptions(line);
-    const layout = tableLayout(optionValue(line, "--delimiter"), optionValue(line, "--units-row"));
+    const layout = tableLayout(line);
     const [out, summary] = [optionValue(line, "--out"), optionValue(line, "--summary")];
     for (const [name, file] of [
       ["--out", out],
@@ -106,7 +106,7 @@ export const plan: Command = {
       : writeDelimited(visitTable(found));
     if (write) await write(pieces);
     else for (const piece of pieces) await terminal.out(piece);
-    for (const finding of table.findings) terminal.note(`${sentenceOfFinding(finding)}\n`);
+    for (const finding of table.findings) terminal.note(`${sentenceOfTableFinding(finding)}\n`);
     const lines = tellPlan(found).map((text) => `${text}\n`);
     if (tell) await tell(lines);
     else terminal.note(lines.join(""));
@@ -117,7 +117,7 @@ export const plan: Command = {
 
 /** The plan, or why the hours are too few; anything else that is wrong is a matter of the command line. */
 function planned(
-  table: DelimitedTable,
+  table: TableFile,
   { wish, budget, must, excluded, site: siteText, from, to, limits }: ReturnType<typeof planOptions>,
   progress: Progress,
 ): Plan | { readonly problem: string } {

@@ -10,10 +10,11 @@ import { readTokens } from "../text/tokens.js";
 import type { Typing } from "../typing.js";
 import { checked } from "./check.js";
 import { editing } from "./editing.js";
+import type { EditorActions } from "./editorKeys.js";
 import { isPickable } from "./picked.js";
 
 /** Under the text: the call that the caret stands in, what the formula gives or lacks, and the keys that help. */
-export function card(typing: Typing): Extension {
+export function card(typing: Typing, actions: EditorActions): Extension {
   const tooltip: Tooltip = {
     pos: 0,
     create(view) {
@@ -21,7 +22,9 @@ export function card(typing: Typing): Extension {
       dom.className = "editor-card";
       // What it tells is spoken by the status and the description of the text.
       dom.setAttribute("aria-hidden", "true");
-      const draw = (state: EditorState) => render(cardOf(typing, state), dom);
+      // A press on the card leaves the caret where it is.
+      dom.addEventListener("mousedown", (event) => event.preventDefault());
+      const draw = (state: EditorState) => render(cardOf(typing, state, actions), dom);
       draw(view.state);
       return { dom, update: ({ state }) => draw(state), getCoords: () => boxOf(view), resize: false };
     },
@@ -39,13 +42,13 @@ export function hintOf(typing: Typing, state: EditorState): Hint | undefined {
   return hintAt(state.doc.toString(), state.selection.main.head, typing.functions());
 }
 
-function cardOf(typing: Typing, state: EditorState): TemplateResult {
+function cardOf(typing: Typing, state: EditorState, actions: EditorActions): TemplateResult {
   const hint = hintOf(typing, state);
   const isChoosing = completionStatus(state) === "active";
   return html`
     ${hint ? signatureOf(hint) : nothing}
     ${isChoosing ? nothing : messageOf(state)}
-    ${isChoosing ? nothing : keysOf(typing, state, hint)}
+    ${isChoosing ? nothing : keysOf(typing, state, hint, actions)}
   `;
 }
 
@@ -76,12 +79,19 @@ function messageOf(state: EditorState): TemplateResult | typeof nothing {
   return known?.preview === undefined ? nothing : html`<p class="editor-preview">= ${known.preview}</p>`;
 }
 
-function keysOf(typing: Typing, state: EditorState, hint: Hint | undefined): TemplateResult | typeof nothing {
+function keysOf(
+  typing: Typing,
+  state: EditorState,
+  hint: Hint | undefined,
+  actions: EditorActions,
+): TemplateResult | typeof nothing {
   const keys = keysFor(typing, state, hint);
   return keys.length === 0
     ? nothing
-    : html`<p class="editor-keys">${keys.map(([key, does]) => html`<span><kbd>${key}</kbd> ${does}</span>`)}</p>`;
+    : html`<p class="editor-keys">${keys.map(([key, does]) => html`<span><kbd>${key}</kbd> ${key === completesHeaders ? html`<button type="button" class="quiet" tabindex="-1" @click=${actions.completeHeaders}>${does}</button>` : does}</span>`)}</p>`;
 }
+
+const completesHeaders = "Alt+C";
 
 /** The keys of use where the caret stands. */
 export function keysFor(
@@ -96,7 +106,7 @@ export function keysFor(
   const arrows = typing.arrowsPick() ? "arrows move the caret" : "arrows pick cells";
   return [
     ...(onReference ? [["F4 or Ctrl+$", "steps through $"] as const] : []),
-    ...(hint?.entry.own ? [["Alt+C", "completes the headers"] as const] : []),
+    ...(hint?.entry.own ? [[completesHeaders, "completes the headers"] as const] : []),
     ...(isPickable(state) ? [["F2", arrows] as const] : []),
   ];
 }

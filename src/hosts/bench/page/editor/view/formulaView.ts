@@ -98,7 +98,7 @@ function extensionsOf({ typing, actions, tips, updated, label, describedBy }: Vi
     picked,
     checking(typing),
     paintFormula(typing),
-    card(typing),
+    card(typing, actions),
     completion(typing),
     history(),
     oneLine,

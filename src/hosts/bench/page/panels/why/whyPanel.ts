@@ -71,8 +71,8 @@ export function whyPanel(page: Page, redraw: () => void): Panel {
 }
 
 /** The cells that formulas fill in the row of a cell that holds none itself. */
-function workedOut(page: Page, cell: WhyCell | undefined): WorkedOut[] {
-  if (!cell || cell.formula !== undefined || cell.filledFrom || cell.place.row === 0) return [];
+function workedOut(page: Page, cell: WhyCell | undefined): readonly WorkedOut[] | undefined {
+  if (!cell || cell.formula !== undefined || cell.filledFrom || cell.place.row === 0) return undefined;
   const { sheet, row } = cell.place;
   const columns = page.state().sheets[sheet]?.columnStates ?? [];
   return columns.flatMap(({ name, derived, sigmaOf }, column) =>

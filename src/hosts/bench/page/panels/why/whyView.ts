@@ -18,7 +18,7 @@ export interface WorkedOut {
 
 export function whyView(
   cell: WhyCell | undefined,
-  workedOut: readonly WorkedOut[],
+  workedOut: readonly WorkedOut[] | undefined,
   distribution: Distribution | "drawing" | undefined,
   actions: WhyActions,
 ): TemplateResult {
@@ -34,11 +34,14 @@ export function whyView(
         : nothing
     }
     ${cell.call ? callView(cell, cell.call, distribution, actions) : readsView(cell, actions)}
-    ${workedOut.length > 0 ? workedOutView(workedOut, actions) : nothing}`;
+    ${workedOut ? workedOutView(workedOut, actions) : nothing}`;
 }
 
 /** The way from what was typed to what comes of it, for whoever sees a table the first time. */
 function workedOutView(cells: readonly WorkedOut[], actions: WhyActions): TemplateResult {
+  if (cells.length === 0) {
+    return html`<p class="soft">Nothing is worked out in this table yet. Name a free column in row 1, for example K [m/s]; below it type = and what you want to know.</p>`;
+  }
   return html`<h3>Worked out in this row</h3>
     <p class="soft">Go to one to see why it has its value; type over an input, and what follows from it changes.</p>
     <ul class="panel-inputs">
