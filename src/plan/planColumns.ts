@@ -25,14 +25,26 @@ export function planColumns(
   table: readonly TableColumn[],
   wish: ColumnWish,
 ): PlanColumns | { readonly problem: string } {
+  const value = columnHeaded(table, wish.value);
+  const found = inputColumns(table, wish);
+  const problems = [value, found].flatMap((one) => (typeof one === "object" && "problem" in one ? [one.problem] : []));
+  if (typeof value !== "number" || "problem" in found) return { problem: problems.join(" ") };
+  return { ...found, value };
+}
+
+/** The columns that say what is seen, and when; not what it is worth. */
+export function inputColumns(
+  table: readonly TableColumn[],
+  wish: Omit<ColumnWish, "value">,
+): Omit<PlanColumns, "value"> | { readonly problem: string } {
   const recognised = table.map(({ header, unitCell }) => recogniseColumn(header, unitCell));
   const problems: string[] = [];
   const headed = (header: string) => {
-    const place = placeOf(table, header);
-    if (place === undefined) problems.push(unknownHeader(table, header));
-    return place;
+    const place = columnHeaded(table, header);
+    if (typeof place === "number") return place;
+    problems.push(place.problem);
+    return undefined;
   };
-  const value = headed(wish.value);
   const name = wish.name === undefined ? guessName(table) : headed(wish.name);
   const known = Object.entries(planInputs).map(([key, { quantity }]) => ({
     key: key as PlanInput,
@@ -61,7 +73,11 @@ export function planColumns(
     const elsewhere = recognised.findIndex((column) => column.isUncertainty && own(column));
     inputs.set(one.key, [place, ...(beside.length > 0 ? beside : elsewhere >= 0 ? [elsewhere] : [])]);
   }
-  return problems.length > 0 ? { problem: problems.join(" ") } : { name, value: value!, inputs };
+  return problems.length > 0 ? { problem: problems.join(" ") } : { name, inputs };
+}
+
+function columnHeaded(table: readonly TableColumn[], header: string): number | { readonly problem: string } {
+  return placeOf(table, header) ?? { problem: unknownHeader(table, header) };
 }
 
 /** A header as it stands, or with other capitals where that is one column's alone. */

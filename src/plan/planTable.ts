@@ -10,6 +10,7 @@ import { type ColumnWish, type PlanColumns, planColumns } from "./planColumns.js
 import type { PlannedTarget } from "./plannedTarget.js";
 import { type PlanInput, planDefinition, planInputs } from "./planQuantities.js";
 import { quadraturePhases } from "./quadraturePhases.js";
+import { targetName } from "./skyTargets.js";
 
 /** A row of the table that can be planned. */
 export interface PlanRow extends Candidate {
@@ -44,7 +45,7 @@ export function planTable(table: readonly TableColumn[], wish: PlanWish): PlanTa
   const rows: PlanRow[] = [];
   const leftOut: { row: number; name: string; because: string }[] = [];
   for (let row = 0; row < count; row++) {
-    const name = nameOf(places.name === undefined ? null : cellAt(table[places.name]!.column, row), row);
+    const name = targetName(table, places.name, row);
     if (table.every(({ column }) => isBlank(cellAt(column, row)))) continue;
     const because = reader.problemOf(row) ?? valueProblem(cellAt(table[places.value]!.column, row), wish.value);
     if (because === undefined) rows.push(planRow(reader, row, name, cellAt(table[places.value]!.column, row), wish));
@@ -179,7 +180,7 @@ function lackingColumns({ inputs }: PlanColumns, { phases }: PlanWish): string |
   if (missing.length === 0) return undefined;
   const example = missing[0]!;
   const unit = example.unit === "1" ? "" : ` [${example.unit}]`;
-  return `no column of ${missing.map(({ name }) => name).join(", ")} was recognised; head it for example "${example.name}${unit}", or name it with ${example.name}=Header.`;
+  return `no column of ${missing.map(({ name }) => name).join(", ")} was recognised; head it for example "${example.name}${unit}", or say which column it is.`;
 }
 
 function notesOn({ inputs }: PlanColumns, { phases }: PlanWish): string[] {
@@ -202,11 +203,6 @@ function valueProblem(cell: Cell, header: string): string | undefined {
     typeof cell === "number" || (typeof cell === "string" && cell.trim() !== "" && Number.isFinite(Number(cell)));
   if (isNumber) return undefined;
   return `its value, in the column "${header}", is ${cell instanceof CellError ? cell.code : `"${String(cell)}"`}, not a number; give a number.`;
-}
-
-function nameOf(cell: Cell, row: number): string {
-  if (isBlank(cell) || cell instanceof CellError) return `row ${row + 1}`;
-  return String(cell).trim();
 }
 
 function isBlank(cell: Cell): boolean {

@@ -18,8 +18,11 @@ export function readCells(
   column: Column,
   header: string | undefined,
 ): (number | { readonly problem: string })[] {
+  const hours = input.quantity.sexagesimal === "hours";
   const head =
-    header === undefined ? noHeader : headerUnit(input.name, { text: header, address: undefined, isNumber: false });
+    header === undefined
+      ? noHeader
+      : headerUnit(input.name, { text: header, address: undefined, isNumber: false }, hours);
   const reader = quantityReader({ input, columns: [column], headers: [head], single: false }, input, column.length);
   const problems: (string | undefined)[] = [];
   const definition = { ...planDefinition, inputs: [input] };

@@ -1,6 +1,7 @@
 import { cellAt } from "../call/column.js";
 import { required } from "../functions/definition.js";
 import * as quantity from "../functions/quantities.js";
+import type { Quantity } from "../functions/quantity.js";
 import type { TableColumn } from "../table/checkTable.js";
 import { readCells, readOption } from "./readOption.js";
 import type { Site } from "./site.js";
@@ -17,17 +18,20 @@ export function readSite(text: string, table: readonly TableColumn[]): Site | { 
     };
   }
   const quantities = [quantity.longitude, quantity.latitude, quantity.height];
-  const read = parts.map((part, index) => {
-    const column = table.find(({ header }) => header === part);
-    return column ? sameInEveryRow(column, quantities[index]!) : readOption(quantities[index]!, part);
-  });
+  const read = parts.map((part, index) => readSitePart(quantities[index]!, part, table));
   const wrong = read.find((value) => typeof value !== "number");
   if (wrong !== undefined && typeof wrong !== "number") return { problem: `of the site, ${wrong.problem}` };
   const [longitude, latitude, height = 0] = read as number[];
   return { longitude: longitude!, latitude: latitude!, height };
 }
 
-function sameInEveryRow({ header, unitCell, column }: TableColumn, one: typeof quantity.longitude) {
+/** One of the three: a quantity, or the header of a column. */
+export function readSitePart(one: Quantity, text: string, table: readonly TableColumn[]) {
+  const column = table.find(({ header }) => header === text.trim());
+  return column ? sameInEveryRow(column, one) : readOption(one, text);
+}
+
+function sameInEveryRow({ header, unitCell, column }: TableColumn, one: Quantity) {
   const headed = unitCell === undefined ? header : `${header} [${unitCell}]`;
   const filled = Array.from({ length: column.length }, (_, row) => row).filter((row) => cellAt(column, row) !== null);
   const read = readCells(required(one), column, headed);

@@ -5,14 +5,14 @@ import { tellSchedule, tellShortfall } from "./tellSchedule.js";
 const mostNames = 20;
 
 /** What was chosen and laid, what was left out and why, what was taken for granted: one sentence a line. */
-export function tellPlan({ table, choice, chosen, schedule, unreachable }: Plan): string[] {
+export function tellPlan(plan: Plan): string[] {
+  const { table, choice, chosen, schedule, unreachable } = plan;
   const { rows, leftOut, notes } = table;
-  const { hours, budget, value } = choice;
   const isChosen = new Set(choice.chosen);
   const isBeyond = new Set(unreachable.map(({ target }) => target));
   const others = rows.filter((_, index) => !isChosen.has(index) && !isBeyond.has(index));
   return [
-    `${chosen.length} of ${rows.length} targets chosen, worth ${Number(value.toPrecision(12))}, for ${hoursText(hours)} of ${hoursText(budget)}.`,
+    tellChosen(plan),
     ...(others.length > 0
       ? [`Not chosen: ${names(others.map((row) => `${row.name} (${hoursText(row.hours)})`))}.`]
       : []),
@@ -23,6 +23,11 @@ export function tellPlan({ table, choice, chosen, schedule, unreachable }: Plan)
     ...leftOut.map(({ row, name, because }) => `Row ${row + 1}, ${name}, cannot be planned: ${because}`),
     ...notes,
   ];
+}
+
+/** What was chosen, in one sentence. */
+export function tellChosen({ table, choice: { hours, budget, value }, chosen }: Plan): string {
+  return `${chosen.length} of ${table.rows.length} targets chosen, worth ${Number(value.toPrecision(12))}, for ${hoursText(hours)} of ${hoursText(budget)}.`;
 }
 
 function names(all: readonly string[]): string {

@@ -9,8 +9,13 @@ export function tellSchedule({ visits, hours, nights, darkHours, shortfalls }: S
 }
 
 /** A target that has fewer visits than it needs, why, and what would help. */
-export function tellShortfall({ name, visits, laid, reason }: Shortfall): string {
-  return `${name}: ${laid} of ${visits} visits; ${reasonText(reason)}.`;
+export function tellShortfall(shortfall: Shortfall): string {
+  return `${shortfall.name}: ${tellVisitsLacking(shortfall)}`;
+}
+
+/** The same without its name. */
+export function tellVisitsLacking({ visits, laid, reason }: Shortfall): string {
+  return `${laid} of ${visits} visits; ${reasonText(reason)}.`;
 }
 
 function reasonText(reason: Reason): string {

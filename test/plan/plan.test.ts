@@ -129,7 +129,7 @@ describe("a table of targets", () => {
   test("columns can be named", () => {
     const odd = tableOf(header.replace("Period [d]", "Cycle [d]").replace("Target", "Label"), lines.slice(0, 1));
     expect(problemOf(odd)).toBe(
-      'no column of period was recognised; head it for example "period [d]", or name it with period=Header.',
+      'no column of period was recognised; head it for example "period [d]", or say which column it is.',
     );
     expect(read(odd, { named: new Map([["period", "Cycle [d]"]]), name: "Label" }).rows[0]!.name).toBe("Lantern 1 b");
   });

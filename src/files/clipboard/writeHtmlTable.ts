@@ -2,34 +2,45 @@ import type { Cell } from "../../call/cell.js";
 import { addressText } from "../../sheet/book/address.js";
 import type { Area, Book } from "../../sheet/book/book.js";
 import { columnAt } from "../../sheet/book/book.js";
-import { cellOf } from "../../sheet/book/cellOf.js";
-import { formulaOf } from "../../sheet/book/formulaOf.js";
+import { readCell } from "../../sheet/book/cells.js";
+import type { Span } from "../../sheet/book/spans.js";
 import { spanAt } from "../../sheet/book/spans.js";
+import { formulaText } from "../../sheet/formula/formula.js";
 import { fieldOfCell } from "../cell/fieldOfCell.js";
 import { markOf, marks } from "./ownMarks.js";
 
 /**
  * An area of a book as an HTML table: what other programs show, and in attributes what the cells hold. Cells that a
- * formula of the area fills are blank beside it: it fills them again.
+ * formula of the area fills are blank beside it: it fills them again. Of all `rows` where only some of the area are
+ * copied, they stand close below each other, and their formulas are those of where they stand.
  */
-export function writeHtmlTable(book: Book, area: Area): string {
-  const { sheet, top, left, bottom, right } = area;
-  let rows = "";
-  for (let row = top; row <= bottom; row++) {
-    rows += "<tr>";
-    for (let column = left; column <= right; column++) {
-      const place = { sheet, row, column };
-      rows += cellElement(cellOf(book, place), formulaOf(book, place), isFilledFromWithin(book, area, row, column));
+export function writeHtmlTable(book: Book, area: Area, rows: readonly Span[] = wholeOf(area)): string {
+  const { sheet, top, left, right } = area;
+  const columns = Array.from({ length: right - left + 1 }, (_, across) => columnAt(book, sheet, left + across));
+  let text = "";
+  let down = 0;
+  for (const { from, to } of rows) {
+    for (let row = from; row < to; row++, down++) {
+      text += "<tr>";
+      for (const [across, { cells, runs }] of columns.entries()) {
+        const run = spanAt(runs, row);
+        const formula = run && formulaText(run.formula, top + down, left + across);
+        text += cellElement(readCell(cells, row), formula, isFilledFromWithin(book, area, rows, row, left + across));
+      }
+      text += "</tr>";
     }
-    rows += "</tr>";
   }
-  return `<table ${marks.origin}="${addressText(top, left)}"><tbody>${rows}</tbody></table>`;
+  return `<table ${marks.origin}="${addressText(top, left)}"><tbody>${text}</tbody></table>`;
 }
 
-function isFilledFromWithin(book: Book, area: Area, row: number, column: number): boolean {
+function wholeOf({ top, bottom }: Area): readonly Span[] {
+  return [{ from: top, to: bottom + 1 }];
+}
+
+function isFilledFromWithin(book: Book, area: Area, rows: readonly Span[], row: number, column: number): boolean {
   const claim = spanAt(columnAt(book, area.sheet, column).claims, row);
-  const from = claim?.row ?? row;
-  return claim !== undefined && claim.column >= area.left && claim.column <= area.right && from >= area.top;
+  if (claim === undefined || claim.column < area.left || claim.column > area.right) return false;
+  return spanAt(rows, claim.row ?? row) !== undefined;
 }
 
 function cellElement(cell: Cell, formula: string | undefined, isFilled: boolean): string {

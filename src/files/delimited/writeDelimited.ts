@@ -1,4 +1,5 @@
 import { type Column, cellAt } from "../../call/column.js";
+import { guardFormula } from "../cell/guardFormula.js";
 import type { Delimiter, Newline } from "./dialect.js";
 import { type GuardText, guardedField } from "./fieldWriter.js";
 import { lineOfFields } from "./lineOfFields.js";
@@ -16,6 +17,7 @@ export interface WriteOptions {
   /** Line feed where left out. */
   readonly newline?: Newline;
   readonly byteOrderMark?: boolean;
+  /** Where left out, no program takes a text for a formula, and reading gives it back as it was. */
   readonly guardText?: GuardText;
 }
 
@@ -23,7 +25,7 @@ const pieceLength = 1 << 16;
 
 /** The text of a table, every line ended. Reading it gives the same cells, save texts that look like another kind of cell. */
 export function* writeDelimited(table: TableToWrite, options: WriteOptions = {}): Generator<string> {
-  const { delimiter = ",", newline = "\n", byteOrderMark = false, guardText } = options;
+  const { delimiter = ",", newline = "\n", byteOrderMark = false, guardText = guardFormula } = options;
   const { header, unitsRow, columns } = table;
   const rows = columns[0]?.length ?? 0;
   checkShape(table, rows);

@@ -6,10 +6,11 @@ import { EcsvReader } from "../ecsv/ecsvReader.js";
 import { FixedWidthReader } from "../fixedWidth/fixedWidthReader.js";
 import { IpacReader } from "../ipac/ipacReader.js";
 import { MachineReadableReader } from "../machineReadable/machineReadableReader.js";
+import { isPacked, refuseOtherKinds, signatureLength } from "../otherKinds.js";
 import { ChunkDecoder } from "../text/chunkDecoder.js";
 import type { TextChunk } from "../text/textSource.js";
 import { VotableReader } from "../votable/votableReader.js";
-import { detectFormat, detectSignature, openingLength, signatureLength } from "./detectFormat.js";
+import { detectFormat, openingLength } from "./detectFormat.js";
 import type { TableFile, TableFormat } from "./tableFile.js";
 import type { TableReader } from "./tableReader.js";
 
@@ -78,7 +79,8 @@ export class TableFileReading {
 
   private decide(last: boolean): void {
     if (!this.signature || (this.signature.length < signatureLength && !last)) return;
-    this.isWorkbook = detectSignature(this.signature) === "workbook";
+    refuseOtherKinds(this.signature);
+    this.isWorkbook = isPacked(this.signature);
     this.signature = undefined;
     if (this.isWorkbook) return;
     const { held } = this;

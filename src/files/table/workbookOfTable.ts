@@ -1,6 +1,6 @@
 import type { Column } from "../../call/column.js";
 import { bookOf } from "../../sheet/book/bookOf.js";
-import { plainColumn, plainSheet, type Workbook } from "../../sheet/display/workbook.js";
+import { plainWorkbookColumn, plainWorkbookSheet, type Workbook } from "../../sheet/display/workbook.js";
 import type { DescribedTable } from "./describedTable.js";
 
 /** A table as a workbook of one sheet: header, row of units where the table has one, data; the header stays in sight. */
@@ -10,7 +10,13 @@ export function workbookOfTable({ header, unitsRow, columns, name = "Table" }: D
   const frozenRows = unitsRow ? 2 : 1;
   return {
     book: bookOf([sheet]),
-    sheets: [{ ...plainSheet, frozenRows, columns: header.map((text) => ({ ...plainColumn, width: widthOf(text) })) }],
+    sheets: [
+      {
+        ...plainWorkbookSheet,
+        frozenRows,
+        columns: header.map((text) => ({ ...plainWorkbookColumn, width: widthOf(text) })),
+      },
+    ],
     notes: [],
   };
 }

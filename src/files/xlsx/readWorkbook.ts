@@ -1,8 +1,8 @@
 import type { Book, ColumnSpan } from "../../sheet/book/book.js";
 import { calculate } from "../../sheet/calculate/calculate.js";
 import type { Watch } from "../../sheet/change.js";
-import type { SheetPresentation, Workbook } from "../../sheet/display/workbook.js";
-import { plainSheet } from "../../sheet/display/workbook.js";
+import type { Workbook, WorkbookSheet } from "../../sheet/display/workbook.js";
+import { plainWorkbookSheet } from "../../sheet/display/workbook.js";
 import type { Functions } from "../../sheet/formula/functions.js";
 import { openZip } from "../zip/openZip.js";
 import { damaged } from "../zip/zipProblem.js";
@@ -18,7 +18,7 @@ import { readSheet } from "./read/readSheet.js";
 import { readStyles } from "./read/readStyles.js";
 import { readTables } from "./read/readTables.js";
 import { readWorkbookPart } from "./read/readWorkbookPart.js";
-import { refuseOtherKinds } from "./read/refuseOtherKinds.js";
+import { refuseOtherThanWorkbooks } from "./read/refuseOtherThanWorkbooks.js";
 import type { Steps } from "./steps.js";
 import { inSlices } from "./steps.js";
 
@@ -41,7 +41,7 @@ export function readWorkbookAsStored(bytes: Uint8Array): Promise<Workbook> {
 type Calculating = "as needed" | "never";
 
 function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calculating): Steps<Workbook> {
-  refuseOtherKinds(bytes);
+  refuseOtherThanWorkbooks(bytes);
   const directory = openZip(bytes);
   const parts = openParts(directory);
   const workbookEntry = findWorkbookPart(parts, directory);
@@ -100,7 +100,7 @@ function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calcul
   }
   notes.push(...notesOf(sheets, readings));
   const presentations = sheets.map(
-    ({ hidden }, sheet): SheetPresentation => ({ ...plainSheet, ...readings[sheet]?.presentation, hidden }),
+    ({ hidden }, sheet): WorkbookSheet => ({ ...plainWorkbookSheet, ...readings[sheet]?.presentation, hidden }),
   );
   if (calculating === "as needed") {
     book = yield* calculate(book, { changed: [], stale: recalculates ? allFormulas(book) : withoutValue(readings) });

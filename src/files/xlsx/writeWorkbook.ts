@@ -1,7 +1,7 @@
 import { usedRows } from "../../sheet/book/usedRows.js";
 import type { Watch } from "../../sheet/change.js";
 import type { Workbook } from "../../sheet/display/workbook.js";
-import { plainSheet } from "../../sheet/display/workbook.js";
+import { plainWorkbookSheet } from "../../sheet/display/workbook.js";
 import { zipWriter } from "../zip/zipWriter.js";
 import type { Steps } from "./steps.js";
 import { inSlices } from "./steps.js";
@@ -31,7 +31,7 @@ export function writeWorkbook(workbook: Workbook, watch?: Watch): Promise<Uint8A
 
 function* writeSteps(workbook: Workbook): Steps<Uint8Array> {
   const { book } = workbook;
-  const sheets = book.sheets.map((_, index) => workbook.sheets[index] ?? plainSheet);
+  const sheets = book.sheets.map((_, index) => workbook.sheets[index] ?? plainWorkbookSheet);
   const zip = zipWriter();
   const part = (name: string, text: string): void => {
     zip.begin(name);
@@ -50,7 +50,7 @@ function* writeSteps(workbook: Workbook): Steps<Uint8Array> {
   for (const [index, sheet] of book.sheets.entries()) {
     const writing = { book, strings, styles, nextShared: 0 };
     zip.begin(sheetPartName(index));
-    for (const rows of writeSheet(sheet, sheets[index] ?? plainSheet, writing, zip)) {
+    for (const rows of writeSheet(sheet, sheets[index] ?? plainWorkbookSheet, writing, zip)) {
       done += rows;
       yield { done: Math.min(done, total), total };
     }

@@ -1,4 +1,3 @@
-import { guardFormula } from "../../files/cell/guardFormula.js";
 import { delimitedOfTable, type UnitsPlace } from "../../files/delimited/delimitedOfTable.js";
 import { writeDelimited } from "../../files/delimited/writeDelimited.js";
 import { writeEcsv } from "../../files/ecsv/writeEcsv.js";
@@ -18,7 +17,7 @@ export interface TablePieces {
 export async function tablePieces(table: DescribedTable, form: TableForm, units?: UnitsPlace): Promise<TablePieces> {
   if (form === "csv" || form === "tsv") {
     const { table: delimited, losses } = delimitedOfTable(table, units);
-    const options = { delimiter: form === "csv" ? "," : "\t", guardText: guardFormula } as const;
+    const options = { delimiter: form === "csv" ? "," : "\t" } as const;
     return { pieces: writeDelimited(delimited, options), losses };
   }
   if (form === "xlsx") return { pieces: [await writeWorkbook(workbookOfTable(table))], losses: workbookLosses(table) };

@@ -10,7 +10,7 @@ export interface FormatSpan extends Span {
 }
 
 /** How a column is shown. */
-export interface ColumnPresentation {
+export interface WorkbookColumn {
   /** In characters of the worksheet's font; undefined is the usual width. */
   readonly width: number | undefined;
   readonly hidden: boolean;
@@ -19,23 +19,23 @@ export interface ColumnPresentation {
 }
 
 /** How a sheet is shown. */
-export interface SheetPresentation {
+export interface WorkbookSheet {
   readonly hidden: boolean;
   /** Rows and columns that stay in sight. */
   readonly frozenRows: number;
   readonly frozenColumns: number;
   /** By column; columns past the end are shown as usual. */
-  readonly columns: readonly ColumnPresentation[];
+  readonly columns: readonly WorkbookColumn[];
 }
 
 /** A book, and how each of its sheets is shown. */
 export interface Workbook {
   readonly book: Book;
-  readonly sheets: readonly SheetPresentation[];
+  readonly sheets: readonly WorkbookSheet[];
   /** What the file held besides and is not kept, one sentence each; empty where nothing is lost. */
   readonly notes: readonly string[];
 }
 
-export const plainColumn: ColumnPresentation = { width: undefined, hidden: false, formats: [] };
+export const plainWorkbookColumn: WorkbookColumn = { width: undefined, hidden: false, formats: [] };
 
-export const plainSheet: SheetPresentation = { hidden: false, frozenRows: 0, frozenColumns: 0, columns: [] };
+export const plainWorkbookSheet: WorkbookSheet = { hidden: false, frozenRows: 0, frozenColumns: 0, columns: [] };

@@ -23,7 +23,11 @@ describe("the kind of a file is found from its content", () => {
 
   // First bytes as the formats' own standards give them.
   test.each([
-    ["d0cf11e0a1b11ae1", "a workbook in the old binary form"],
+    ["d0cf11e0a1b11ae1", "a document in the form from before 2007, or under a password"],
+    ["526172211a07", "a RAR archive"],
+    ["4d5a9000", "a program"],
+    ["7f454c4602", "a program"],
+    ["0908100000060500", "a worksheet in a form from before 1997 \\(.xls\\)"],
     ["1f8b0800", "packed with gzip"],
     ["425a6839", "packed with bzip2"],
     ["fd377a585a00", "packed with xz"],
@@ -49,6 +53,10 @@ describe("the kind of a file is found from its content", () => {
         readPieces(pieces);
       }).toThrow(message);
     }
+  });
+
+  test.each(["MZAMS [solMass]", "PAR1", "BZh", "GIF8", "Rar!"])("a table whose first column is %s is one", (name) => {
+    expect(readPieces([Buffer.from(`${name},K [m/s]\n1,2\n`)]).header).toEqual([name, "K [m/s]"]);
   });
 
   test("unknown bytes are refused where they stop being text", () => {

@@ -8,7 +8,7 @@ import { writeWorkbook } from "../../../src/files/xlsx/writeWorkbook.js";
 import { bookOf } from "../../../src/sheet/book/bookOf.js";
 import { change } from "../../../src/sheet/change.js";
 import type { Workbook } from "../../../src/sheet/display/workbook.js";
-import { plainColumn, plainSheet } from "../../../src/sheet/display/workbook.js";
+import { plainWorkbookColumn, plainWorkbookSheet } from "../../../src/sheet/display/workbook.js";
 import { fillFormula } from "../../../src/sheet/edit/fillFormula.js";
 import { defineName } from "../../../src/sheet/edit/names.js";
 import { setCells } from "../../../src/sheet/edit/setCells.js";
@@ -37,8 +37,12 @@ async function original(): Promise<Uint8Array> {
     ownFunctions,
   );
   const formats = [{ from: 1, to: 3, format: { kind: "date" } as const, code: undefined }];
-  const shown = { ...plainSheet, frozenRows: 1, columns: [plainColumn, { width: 12, hidden: true, formats }] };
-  return writeWorkbook({ book, sheets: [shown, plainSheet], notes: [] });
+  const shown = {
+    ...plainWorkbookSheet,
+    frozenRows: 1,
+    columns: [plainWorkbookColumn, { width: 12, hidden: true, formats }],
+  };
+  return writeWorkbook({ book, sheets: [shown, plainWorkbookSheet], notes: [] });
 }
 
 const scraps = ["<", ">", '"', "&", "&#0;", "</c>", "<c>", "<v>", "<f>", "]]>", "<!--", "1e999", "-1", "A1:XFD1048576", "XFD1048576", "t=\"s\"", "t=\"shared\" si=\"0\"", "__proto__", "\u0000", "999999999", "é", "=", "NaN", "<!DOCTYPE a>", "ref=\"A1:B9\" t=\"array\""]; // biome-ignore format: one list

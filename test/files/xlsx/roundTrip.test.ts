@@ -7,8 +7,8 @@ import type { Book } from "../../../src/sheet/book/book.js";
 import { bookOf } from "../../../src/sheet/book/bookOf.js";
 import { change } from "../../../src/sheet/change.js";
 import type { NumberFormat } from "../../../src/sheet/display/numberFormat.js";
-import type { SheetPresentation, Workbook } from "../../../src/sheet/display/workbook.js";
-import { plainColumn, plainSheet } from "../../../src/sheet/display/workbook.js";
+import type { Workbook, WorkbookSheet } from "../../../src/sheet/display/workbook.js";
+import { plainWorkbookColumn, plainWorkbookSheet } from "../../../src/sheet/display/workbook.js";
 import type { Edit } from "../../../src/sheet/edit/draft.js";
 import { fillFormula } from "../../../src/sheet/edit/fillFormula.js";
 import { defineName } from "../../../src/sheet/edit/names.js";
@@ -25,7 +25,7 @@ function bookAfter(edits: readonly Edit[]): Book {
   return change(bookOf(sheetNames.map((name) => ({ name, columns: [] }))), edits, ownFunctions);
 }
 
-const workbookOf = (book: Book, sheets: readonly SheetPresentation[] = []): Workbook => ({ book, sheets, notes: [] });
+const workbookOf = (book: Book, sheets: readonly WorkbookSheet[] = []): Workbook => ({ book, sheets, notes: [] });
 
 async function comesBack(book: Book): Promise<void> {
   const bytes = await writeWorkbook(workbookOf(book));
@@ -178,13 +178,13 @@ describe("how a sheet is shown", () => {
         fc.boolean(),
         rows(value),
         async (columns, frozenRows, frozenColumns, hidden, cells) => {
-          const end = columns.findLastIndex((each) => JSON.stringify(each) !== JSON.stringify(plainColumn)) + 1;
+          const end = columns.findLastIndex((each) => JSON.stringify(each) !== JSON.stringify(plainWorkbookColumn)) + 1;
           const shown = { hidden, frozenRows, frozenColumns, columns: columns.slice(0, end) };
           const book = bookAfter([setCells({ sheet: 1, row: 0, column: 0 }, cells)]);
-          const bytes = await writeWorkbook(workbookOf(book, [plainSheet, shown, plainSheet]));
+          const bytes = await writeWorkbook(workbookOf(book, [plainWorkbookSheet, shown, plainWorkbookSheet]));
           expect(packageProblems(bytes)).toEqual([]);
           const back = await readWorkbook(bytes);
-          expect(back.sheets).toEqual([plainSheet, shown, plainSheet]);
+          expect(back.sheets).toEqual([plainWorkbookSheet, shown, plainWorkbookSheet]);
           expect(differences(book, back.book)).toEqual([]);
         },
       ),
@@ -194,7 +194,7 @@ describe("how a sheet is shown", () => {
 
   test("keeps the format code of a file where it says more than the format", async () => {
     const formats = [{ from: 1, to: 5, format: { kind: "fixed", decimals: 2, grouped: false } as const, code: '0.00" m/s"' }]; // biome-ignore format: one list
-    const shown = { ...plainSheet, columns: [{ ...plainColumn, formats }] };
+    const shown = { ...plainWorkbookSheet, columns: [{ ...plainWorkbookColumn, formats }] };
     const back = await readWorkbook(await writeWorkbook(workbookOf(bookAfter([]), [shown])));
     expect(back.sheets[0]).toEqual(shown);
   });

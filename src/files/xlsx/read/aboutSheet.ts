@@ -1,5 +1,5 @@
-import type { ColumnPresentation, SheetPresentation } from "../../../sheet/display/workbook.js";
-import { plainColumn } from "../../../sheet/display/workbook.js";
+import type { WorkbookColumn, WorkbookSheet } from "../../../sheet/display/workbook.js";
+import { plainWorkbookColumn } from "../../../sheet/display/workbook.js";
 import { mostColumns, mostRows } from "../../../sheet/limits.js";
 import { damaged } from "../../zip/zipProblem.js";
 import { attributesOf } from "../xml/attributes.js";
@@ -59,17 +59,17 @@ export function aboutSheet(reading: CellReading) {
     close(name: string): void {
       aside -= name === "extLst" ? 1 : 0;
     },
-    finish({ columns, formats }: BuiltSheet): Omit<SheetPresentation, "hidden"> {
+    finish({ columns, formats }: BuiltSheet): Omit<WorkbookSheet, "hidden"> {
       // Whatever reaches to the last column of all is said of columns without end.
       const length = entries.reduce((most, { to }) => (to === mostColumns ? most : Math.max(most, to)), columns.length);
       const entryOf: (ColumnsEntry | undefined)[] = new Array(length).fill(undefined);
       for (const entry of entries) {
         entryOf.fill(entry, entry.from, Math.min(entry.to, length));
       }
-      const presented = entryOf.map((entry, column): ColumnPresentation => {
+      const presented = entryOf.map((entry, column): WorkbookColumn => {
         const usual = reading.styles[entry?.style ?? 0] ?? usualStyle;
         const own = formats.get(column)?.finish(usual) ?? emptyFormats(usual);
-        const { width, hidden } = entry ?? plainColumn;
+        const { width, hidden } = entry ?? plainWorkbookColumn;
         return { width, hidden, formats: own };
       });
       return { frozenRows, frozenColumns, columns: withoutPlainEnd(presented) };
@@ -81,11 +81,11 @@ function emptyFormats({ format, code }: { format: typeof usualStyle.format; code
   return format.kind === "general" && code === undefined ? [] : [{ from: 0, to: mostRows, format, code }];
 }
 
-function withoutPlainEnd(columns: readonly ColumnPresentation[]): readonly ColumnPresentation[] {
+function withoutPlainEnd(columns: readonly WorkbookColumn[]): readonly WorkbookColumn[] {
   let end = columns.length;
-  const isPlain = ({ width, hidden, formats }: ColumnPresentation) =>
+  const isPlain = ({ width, hidden, formats }: WorkbookColumn) =>
     width === undefined && !hidden && formats.length === 0;
-  while (end > 0 && isPlain(columns[end - 1] as ColumnPresentation)) {
+  while (end > 0 && isPlain(columns[end - 1] as WorkbookColumn)) {
     end--;
   }
   return columns.slice(0, end);

@@ -1,4 +1,4 @@
-import type { SheetPresentation } from "../../../sheet/display/workbook.js";
+import type { WorkbookSheet } from "../../../sheet/display/workbook.js";
 import { mostColumns, mostRows } from "../../../sheet/limits.js";
 import type { ZipEntry } from "../../zip/openZip.js";
 import type { Unpacked } from "../../zip/unpack.js";
@@ -13,7 +13,7 @@ import type { BuiltSheet, SheetBuilder } from "./sheetBuilder.js";
 import { sheetBuilder } from "./sheetBuilder.js";
 
 export interface SheetReading extends BuiltSheet {
-  readonly presentation: Omit<SheetPresentation, "hidden">;
+  readonly presentation: Omit<WorkbookSheet, "hidden">;
   /** Names of elements that the sheet has and that are not kept. */
   readonly others: ReadonlySet<string>;
 }

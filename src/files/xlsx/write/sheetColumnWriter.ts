@@ -9,7 +9,7 @@ import type { Span } from "../../../sheet/book/spans.js";
 import { firstSpanAfter } from "../../../sheet/book/spans.js";
 import { spillSize } from "../../../sheet/book/spillSize.js";
 import { usedLength } from "../../../sheet/book/usedRows.js";
-import type { ColumnPresentation } from "../../../sheet/display/workbook.js";
+import type { WorkbookColumn } from "../../../sheet/display/workbook.js";
 import { mostRows } from "../../../sheet/limits.js";
 import { fieldOfCell } from "../../cell/fieldOfCell.js";
 import { rowTemplate, textInRow } from "../formula/rowTemplate.js";
@@ -42,7 +42,7 @@ export interface SheetColumnWriter {
 
 export function sheetColumnWriter(
   source: SheetColumn,
-  { formats }: ColumnPresentation,
+  { formats }: WorkbookColumn,
   column: number,
   writing: SheetWriting,
 ): SheetColumnWriter {

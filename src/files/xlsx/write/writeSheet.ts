@@ -1,8 +1,8 @@
 import { addressText } from "../../../sheet/book/address.js";
 import type { Sheet } from "../../../sheet/book/book.js";
 import { emptyColumn } from "../../../sheet/book/book.js";
-import type { ColumnPresentation, SheetPresentation } from "../../../sheet/display/workbook.js";
-import { plainColumn } from "../../../sheet/display/workbook.js";
+import type { WorkbookColumn, WorkbookSheet } from "../../../sheet/display/workbook.js";
+import { plainWorkbookColumn } from "../../../sheet/display/workbook.js";
 import type { ZipWriter } from "../../zip/zipWriter.js";
 import type { SheetColumnWriter, SheetWriting } from "./sheetColumnWriter.js";
 import { sheetColumnWriter } from "./sheetColumnWriter.js";
@@ -16,12 +16,15 @@ const usualWidth = 9.140625;
 /** Writes the XML of a sheet; yields the rows done. */
 export function* writeSheet(
   sheet: Sheet,
-  presentation: SheetPresentation,
+  presentation: WorkbookSheet,
   writing: SheetWriting,
   zip: ZipWriter,
 ): Generator<number, void> {
   const width = Math.max(sheet.columns.length, presentation.columns.length);
-  const presentations = Array.from({ length: width }, (_, column) => presentation.columns[column] ?? plainColumn);
+  const presentations = Array.from(
+    { length: width },
+    (_, column) => presentation.columns[column] ?? plainWorkbookColumn,
+  );
   const columns = presentations.map((each, column) =>
     sheetColumnWriter(sheet.columns[column] ?? emptyColumn, each, column, writing),
   );
@@ -57,7 +60,7 @@ function rowsElement(columns: readonly SheetColumnWriter[], from: number, to: nu
   return text;
 }
 
-function sheetViews({ frozenRows, frozenColumns }: SheetPresentation): string {
+function sheetViews({ frozenRows, frozenColumns }: WorkbookSheet): string {
   if (frozenRows === 0 && frozenColumns === 0) {
     return '<sheetViews><sheetView workbookViewId="0"/></sheetViews>';
   }
@@ -71,7 +74,7 @@ function sheetViews({ frozenRows, frozenColumns }: SheetPresentation): string {
   );
 }
 
-function columnsElement(presentations: readonly ColumnPresentation[], columns: readonly SheetColumnWriter[]): string {
+function columnsElement(presentations: readonly WorkbookColumn[], columns: readonly SheetColumnWriter[]): string {
   let text = "";
   for (const [index, { width, hidden }] of presentations.entries()) {
     const style = columns[index]?.usualStyle ?? 0;

@@ -131,5 +131,5 @@ function firstCell(sheet: number): Selection {
 
 export function faultText(fault: unknown): string {
   const message = fault instanceof Error ? fault.message : String(fault);
-  return `That was not done, by a fault of this program: ${message} Nothing in the book was changed.`;
+  return `That was not done, by a fault of this program: ${message.replace(/[^.!?]$/, "$&.")} Nothing in the book was changed.`;
 }

@@ -13,4 +13,5 @@ export interface Panel {
   changed(change: PageChange): void;
 }
 
-export type CreatePanel = (page: Page, redraw: () => void) => Panel;
+/** `enterTyped` enters what is being typed in a cell; it resolves with false where that cannot be entered. */
+export type CreatePanel = (page: Page, redraw: () => void, enterTyped: () => Promise<boolean>) => Panel;

@@ -17,6 +17,7 @@ import type {
   WhyCell,
 } from "./answers.js";
 import type { BookState } from "./bookState.js";
+import type { PlanAnswer, PlanHours, PlanNight, PlanStart, PlanVisibility, PlanWords } from "./plan.js";
 import type { Action, FilterCondition, FindOptions, Outcome } from "./request.js";
 import type { ShownWindow } from "./shown.js";
 
@@ -39,10 +40,7 @@ export interface Bench {
   openFile(file: File): Opened;
   openText(name: string, text: string): Opened;
   /** The file as bytes, whole; `sheet` counts for formats of one table. */
-  exportAs(
-    format: ExportFormat,
-    sheet: number,
-  ): { readonly name: string; readonly type: string; readonly bytes: Uint8Array };
+  exportAs(format: ExportFormat, sheet: number): ExportedFile;
 
   windowOf(sheet: number, from: number, to: number, left: number, right: number): ShownWindow;
   /** The rows of a sheet that its filter lets through, ascending, the header row first; undefined while no filter is on. */
@@ -90,6 +88,27 @@ export interface Bench {
   columnsOf(sheet: number): Readonly<Record<string, number>>;
   /** Radial velocity over one orbit of a row's planet. */
   curve(sheet: number, row: number): CurveAnswer;
+
+  /** What a sheet offers to a plan: its columns, a site. */
+  planStart(sheet: number): PlanStart;
+  /** What a plan calls the targets of these rows. */
+  targetNames(sheet: number, rows: readonly number[]): readonly string[];
+  /** Chooses targets and lays their visits; `cancel` ends it. */
+  plan(sheet: number, words: PlanWords): PlanAnswer;
+  /** The visits of the last plan in a sheet of their own, and what was asked and found in another. */
+  writePlan(): Outcome;
+  planHours(sheet: number, words: PlanWords): PlanHours;
+  planVisibility(sheet: number, rows: readonly number[], words: PlanWords): PlanVisibility;
+  /** `date` is that of the evening; empty for the first night of the plan. */
+  planNight(sheet: number, rows: readonly number[], words: PlanWords, date: string): PlanNight;
+}
+
+export interface ExportedFile {
+  readonly name: string;
+  readonly type: string;
+  readonly bytes: Uint8Array;
+  /** What of the book the file does not hold, one sentence each. */
+  readonly told: readonly string[];
 }
 
 export type ExportFormat = "csv" | "tsv" | "ecsv" | "votable" | "xlsx" | "book";

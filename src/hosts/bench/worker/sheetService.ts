@@ -1,6 +1,7 @@
 import type { Bench } from "../protocol/bench.js";
 import { actions } from "./actions/queue.js";
 import { formulaMethods } from "./formulas/formulaMethods.js";
+import { planMethods } from "./plan/planMethods.js";
 import type { Service } from "./service.js";
 import type { SessionHolder } from "./sessionHolder.js";
 import { tableMethods } from "./tables/tableMethods.js";
@@ -31,11 +32,17 @@ export type SheetMethods = Omit<
  */
 export function sheetService(holder: SessionHolder): Service<SheetMethods> {
   const queue = actions(holder);
+  const plans = planMethods(holder, queue);
   return {
     ...queue.methods,
     ...viewMethods(holder),
     ...formulaMethods(holder),
     ...tellMethods(holder),
     ...tableMethods(holder, queue),
+    ...plans,
+    cancel() {
+      queue.methods.cancel();
+      plans.cancel();
+    },
   };
 }

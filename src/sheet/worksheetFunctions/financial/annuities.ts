@@ -1,6 +1,6 @@
 import { outside } from "../define/outside.js";
 import { number, omittable } from "../define/parameters.js";
-import { fromLibrary } from "../library/fromLibrary.js";
+import { fromLibrary, type LibraryName } from "../library/fromLibrary.js";
 import type { WorksheetFunction } from "../worksheetFunction.js";
 
 const future = omittable(number("future value"), 0);
@@ -20,14 +20,14 @@ const tooMany = (name: string, input: string, value: number) =>
     ? outside(`${name}: ${input}`, value, `above ${mostPeriods}`, "a smaller number is needed, for example 12")
     : undefined;
 
-const cumulative = (name: string) =>
+const cumulative = (name: LibraryName) =>
   fromLibrary(
     name,
     [rate, periods, present, number("first period"), number("last period"), number("type")] as const,
     (_rate, _periods, _present, _first, last, _type) => tooMany(name, "last period", last),
   );
 
-const declining = (name: string, last: readonly [string, number]) =>
+const declining = (name: LibraryName, last: readonly [string, number]) =>
   fromLibrary(
     name,
     [number("cost"), number("salvage"), number("life"), period, omittable(number(last[0]), last[1])] as const,

@@ -2,12 +2,14 @@ import { beforeAll, describe, expect, test } from "vitest";
 import type { Cell } from "../../../../src/call/cell.js";
 import { demoBook } from "../../../../src/hosts/bench/worker/demo/demoBook.js";
 import { columnStatesOf } from "../../../../src/hosts/bench/worker/state/columnStates.js";
+import { usualPlanTexts } from "../../../../src/plan/usualPlanTexts.js";
 import type { Book } from "../../../../src/sheet/book/book.js";
 import { cellOf } from "../../../../src/sheet/book/cellOf.js";
 import { listProblems } from "../../../../src/sheet/book/listProblems.js";
 import { readColumn } from "../../../../src/sheet/book/readColumn.js";
 import { usedColumns, usedRows } from "../../../../src/sheet/book/usedRows.js";
 import { checkTable } from "../../../../src/table/checkTable.js";
+import { openBook } from "../worker/openTable.js";
 
 let book: Book;
 
@@ -16,15 +18,15 @@ beforeAll(() => {
 });
 
 const header = (column: number): string => String(cellOf(book, { sheet: 0, row: 0, column }));
-const columnNamed = (name: string): number => [...Array(23).keys()].findIndex((column) => header(column) === name);
+const columnNamed = (name: string): number => [...Array(36).keys()].findIndex((column) => header(column) === name);
 const at = (row: number, name: string): Cell => cellOf(book, { sheet: 0, row, column: columnNamed(name) });
 const rowOf = (planet: string): number =>
   [...Array(61).keys()].findIndex((row) => cellOf(book, { sheet: 0, row, column: 0 }) === planet);
 
-test("sixty planets, twelve derived columns, and what they assume on a sheet of its own", () => {
-  expect([usedRows(book, 0), usedColumns(book, 0)]).toEqual([61, 23]);
+test("sixty planets, seventeen derived columns, and what they assume on a sheet of its own", () => {
+  expect([usedRows(book, 0), usedColumns(book, 0)]).toEqual([61, 36]);
   expect(book.sheets.map(({ name }) => name)).toEqual(["Survey", "Assumptions"]);
-  expect(columnStatesOf(book, 0).filter(({ derived }) => derived)).toHaveLength(12);
+  expect(columnStatesOf(book, 0).filter(({ derived }) => derived)).toHaveLength(17);
   const planets = Array.from({ length: 60 }, (_, row) => cellOf(book, { sheet: 0, row: row + 1, column: 0 }));
   expect(new Set(planets).size).toBe(60);
 });
@@ -59,6 +61,79 @@ test("every header of it is understood, for its mistakes are in the cells", () =
   for (const sheet of [0, 1]) {
     expect(columnStatesOf(book, sheet).filter(({ reading }) => reading.is === "problem")).toEqual([]);
   }
+});
+
+test("planets of one star stand in one place, within reach of the site, and times come with uncertainties", () => {
+  const places = new Map<string, string>();
+  for (let row = 1; row <= 60; row++) {
+    const star = String(at(row, "Planet")).slice(0, -2);
+    const place = `${at(row, "RA [h]")} ${at(row, "Dec [deg]")}`;
+    expect(place).toMatch(/^([01]\d|2[0-3]):[0-5]\d:[0-5]\d\.\d [+-][0-7]\d:[0-5]\d:[0-5]\d$/);
+    expect(places.get(star) ?? place).toBe(place);
+    places.set(star, place);
+    for (const name of ["T0 [BJD_TDB]", "T0 sigma [d]", "Period sigma [d]", "Priority", "Exposure [s]"]) {
+      expect(at(row, name)).toBeTypeOf("number");
+    }
+  }
+  expect(new Set(places.values()).size).toBe(places.size);
+});
+
+test("noise, visits and hours are those of their formulas, with what K leaves uncertain", () => {
+  let compared = 0;
+  for (let row = 1; row <= 60; row++) {
+    const [V, exposure, k, kSigma] = ["Star V [mag]", "Exposure [s]", "K [m/s]", "K sigma [m/s]"].map((name) =>
+      at(row, name),
+    ) as [number, number, Cell, number];
+    if (typeof k !== "number") continue;
+    // Photon noise falls with the root of the light: Bouchy, Pepe & Queloz 2001, A&A 374, 733; the floor in quadrature.
+    const noise = Math.hypot(0.45 * 10 ** (0.2 * (V - 8)) * Math.sqrt(900 / exposure), 0.3);
+    expect(at(row, "Noise [m/s]")).toBeCloseTo(noise, 10);
+    // By hand, with the systemic velocity unknown: a visits at one quadrature and b at the other give
+    // sigma_K^2 = sigma^2 (a + b) / (4 a b), so that an odd number is worth 1/N less than N; at least 4.
+    const exact = (10 * noise) ** 2 / k ** 2;
+    let visits = 4;
+    while (visits - (visits % 2) / visits < exact) visits++;
+    expect(at(row, "Visits")).toBe(visits);
+    if (exact > 4) {
+      // First order: N goes with K^-2.
+      const sigma = at(row, "Visits sigma") as number;
+      expect(Math.abs(sigma / ((2 * exact * kSigma) / k) - 1)).toBeLessThan(1e-3);
+    }
+    expect(at(row, "Hours [h]")).toBeCloseTo((visits * (exposure + 180)) / 3600 / 0.8, 9);
+    const share = (at(row, "Hours sigma [h]") as number) / (at(row, "Visits sigma") as number);
+    expect(share).toBeCloseTo((exposure + 180) / 3600 / 0.8, 9);
+    compared++;
+  }
+  expect(compared).toBe(56);
+});
+
+test("a plan with what is usual has targets, keeps the hours, and loses the one phase that was lost on purpose", async () => {
+  const { service } = openBook(book);
+  const start = await service.planStart(0);
+  expect(start.columns.filter(({ header }) => header === undefined)).toEqual([]);
+  expect(start).toMatchObject({ value: "Priority", site: { foundIn: "the sheet Assumptions", latitude: "-25.3 deg" } });
+  const { longitude, latitude, height } = start.site!;
+  const site = { longitude, latitude, height };
+  const dates = { from: "2027-01-01", to: "2027-06-30" };
+  const words = {
+    ...usualPlanTexts,
+    ...site,
+    ...dates,
+    hours: "60",
+    value: "Priority",
+    columns: {},
+    must: [],
+    excluded: [],
+  };
+  const answer = await service.plan(0, words);
+  if (answer.is !== "plan") throw new Error(JSON.stringify(answer));
+  const { chosen, leftOut, totals } = answer.plan;
+  expect(chosen.length).toBeGreaterThan(20);
+  expect(chosen.length + leftOut.length).toBe(60);
+  expect(totals.hours).toBeLessThanOrEqual(60);
+  expect(chosen.reduce((sum, { hours }) => sum + hours, 0)).toBeLessThanOrEqual(60);
+  const lost = leftOut.filter(({ because }) => because.includes("its phase is lost")).map(({ name }) => name);
+  expect(lost).toEqual(["Quarry 4 b"]);
 });
 
 describe("what is wrong on purpose", () => {

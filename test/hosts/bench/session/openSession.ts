@@ -8,6 +8,9 @@ import { launchChromium } from "../../../browser/launchChromium.js";
 /** As long as a busy machine may take to show what it was asked for. */
 export const patience = 30_000;
 
+/** For a whole session on such a machine. */
+export const wholeSession = 300_000;
+
 export interface SessionBrowser {
   readonly browser: Browser;
   readonly address: string;
@@ -67,15 +70,20 @@ export function tabOf(page: Page): Tab {
   page.setDefaultTimeout(patience);
   const complaints: string[] = [];
   page.on("console", (message) => message.type() === "error" && complaints.push(message.text()));
+  // Asks for files are held from now on, not only from when a test waits for one.
+  page.on("filechooser", () => undefined);
   page.on("pageerror", (error) => complaints.push(error.stack ?? error.message));
 
   function cell(address: string): Locator {
     const place = readAddress(address);
     if (!place) throw new Error(`${address} is no cell`);
-    return page.locator(`[role=row][aria-rowindex="${place.row + 2}"] > * [aria-colindex="${place.column + 2}"]`);
+    return page.locator(
+      `[role=row]:not([hidden])[aria-rowindex="${place.row + 2}"] [aria-colindex="${place.column + 2}"]:not([hidden])`,
+    );
   }
-  const text = async (address: string) => (await cell(address).textContent()) ?? "";
-  const line = async () => (await page.locator(".editor-line .cm-content").textContent()) ?? "";
+  /** Empty while the cell is not there. */
+  const text = async (address: string) => (await cell(address).allTextContents())[0] ?? "";
+  const line = async () => (await page.locator(".cm-content").allTextContents())[0] ?? "";
 
   async function middle(address: string) {
     await cell(address).waitFor();
@@ -120,4 +128,22 @@ export async function downloaded(page: Page, ask: () => Promise<void>): Promise<
   await ask();
   const download = await coming;
   return { name: download.suggestedFilename(), bytes: await readFile(await download.path()) };
+}
+
+/** Whether the storage of the page holds a text that is typed and not entered. */
+export function isDraftKept(page: Page): Promise<boolean> {
+  return page.evaluate(
+    () =>
+      new Promise<boolean>((resolve) => {
+        const asked = indexedDB.open("barycell");
+        asked.onsuccess = () => {
+          const database = asked.result;
+          const found = database.transaction("drafts").objectStore("drafts").count();
+          found.onsuccess = () => {
+            database.close();
+            resolve(found.result > 0);
+          };
+        };
+      }),
+  );
 }

@@ -137,7 +137,7 @@ describe("several books", () => {
     expect(await tab.call("sweepTomorrow")).toBe(1);
     expect(await tab.call("openBook", "no such")).toEqual({
       is: "refused",
-      message: "That sheet is no longer in this browser's storage.",
+      message: "That book is no longer in this browser's storage.",
     });
   });
 });
@@ -207,7 +207,7 @@ describe("two tabs with one book", () => {
       id,
       saved: {
         is: "not saved",
-        message: "Another tab has this sheet open and saves it. With the first change made here, this becomes a copy.",
+        message: "Another tab has this book open and saves it. With the first change made here, this becomes a copy.",
       },
     });
     await loser.call("type", 1, 0, "from the second");
@@ -258,7 +258,7 @@ describe("storage that is full or denied", () => {
     expect((await tab.call("state")).saved).toEqual({
       is: "not saved",
       message:
-        "Not saved: the browser's storage is full. Export the sheet as a .barycell file, then remove sheets that are no longer needed.",
+        "Not saved: the browser's storage is full. Save a copy as a Barycell book, then remove books that are no longer needed; both are in the menu Book.",
     });
     expect(await tab.call("cells")).toContain(" too much");
     await tab.call("fullStorage", false);
@@ -275,7 +275,7 @@ describe("storage that is full or denied", () => {
     await tab.call("deniedStorage");
     const state = await tab.call("start");
     const message =
-      "Not saved: the browser keeps nothing for this page, as in a private window or where storage is switched off. Export the sheet before you close the page.";
+      "Not saved: the browser keeps nothing for this page, as in a private window or where storage is switched off. Save a copy of the book before you close the page.";
     expect(state).toMatchObject({ title: "Demo survey", saved: { is: "not saved", message } });
     await tab.call("type", 1, 0, "still here");
     await tab.call("settled");

@@ -42,7 +42,7 @@ test("what goes wrong is told to whoever called, and to nobody else", async () =
 test("the bytes of a file go over whole, other arrays are copied", async () => {
   const rows = new Int32Array([1]);
   const { sent, answer } = answered({
-    exportAs: () => ({ name: "a", type: "b", bytes }),
+    exportAs: () => ({ name: "a", type: "b", bytes, told: [] }),
     visibleRows: () => rows,
   });
   await answer({ id: 1, method: "exportAs", given: ["csv", 0] });

@@ -75,7 +75,7 @@ describe("what was copied here", () => {
     const open = table();
     await open.service.act({ do: "type over", area: area("B2:B4"), place: at("B2"), text: "=A2*$A$2" });
     const { own, text } = open.service.copy(area("B2:B4"));
-    expect(text).toBe("1\n2\n3");
+    expect(text).toBe("1\r\n2\r\n3");
     await open.service.act({ do: "paste", place: at("C2"), clipboard: clipboard(text, own), what: "formulas" });
     expect(formulaOf(open.book(), at("C3"))).toBe("=B3*$A$2");
     await open.service.act({ do: "paste", place: at("D2"), clipboard: clipboard(text, own), what: "values" });
@@ -98,10 +98,113 @@ describe("what was copied here", () => {
   });
 
   test("HTML is escaped", () => {
-    const open = openTable([["<b>", 'a&"b"']]);
-    expect(open.service.copy(area("A1:B1")).html).toBe(
-      "<table><tr><td>&lt;b&gt;</td><td>a&amp;&quot;b&quot;</td></tr></table>",
-    );
+    const { html } = openTable([["<b>", 'a&"b"']]).service.copy(area("A1:B1"));
+    expect(html).toMatch(/>&lt;b&gt;<\/td><td[^<>]*>a&amp;&quot;b&quot;<\/td><\/tr>/);
+    expect(html).not.toContain("<b>");
+  });
+
+  test("text keeps every digit and guards what looks like a formula", () => {
+    // 0.1 + 0.2 as a double: 0.30000000000000004 (IEEE 754, its shortest decimal).
+    const open = openTable([[0.1 + 0.2, "=1+1", "007"]]);
+    expect(open.service.copy(area("A1:C1")).text).toBe("0.30000000000000004\t'=1+1\t007");
+  });
+});
+
+describe("in another tab of this page", () => {
+  const copyFrom = async () => {
+    const open = openTable([
+      ["x", "y"],
+      [0.1 + 0.2, null],
+      ["007", null],
+      [-0, null],
+    ]);
+    await open.type("B2", [["=A2*2"], ["=A$2+1"], ['=IF(A4=0,"=zero",1)']]);
+    return open;
+  };
+  const elsewhere = () => openTable([["p", "q", "r"]]);
+
+  test("values come to the last bit, formulas with their relative references", async () => {
+    const { text, html, own } = (await copyFrom()).service.copy(area("A2:B4"));
+    const open = elsewhere();
+    await open.service.act({ do: "paste", place: at("B3"), clipboard: { text, html, own }, what: "formulas" });
+    expect(["B3", "B4", "B5"].map((address) => open.cell(address))).toEqual([0.30000000000000004, "007", -0]);
+    expect(["C3", "C4", "C5"].map((address) => formulaOf(open.book(), at(address)))).toEqual([
+      "=B3*2",
+      "=B$2+1",
+      '=IF(B5=0,"=zero",1)',
+    ]);
+    expect([open.cell("C3"), open.cell("C5")]).toEqual([0.6000000000000001, "=zero"]);
+  });
+
+  test("values alone where they are wanted", async () => {
+    const { text, html } = (await copyFrom()).service.copy(area("A2:B4"));
+    const open = elsewhere();
+    await open.service.act({ do: "paste", place: at("A2"), clipboard: { text, html }, what: "values" });
+    expect(["B2", "B4"].map((address) => open.cell(address))).toEqual([0.6000000000000001, "=zero"]);
+    expect(formulaOf(open.book(), at("B2"))).toBeUndefined();
+    expect(formulaOf(open.book(), at("B4"))).toBeUndefined();
+  });
+
+  test("rows under a filter come close together, their formulas reading their own row", async () => {
+    const from = openTable([
+      ["n", "x", "y"],
+      ["a", 1, null],
+      ["b", 2, null],
+      ["c", 3, null],
+    ]);
+    await from.type("C2", [["=B2*10"], ["=B3*10"], ["=B4*10"]]);
+    from.service.filter(0, [{ column: 0, test: "<>", text: "b" }]);
+    const { text, html } = from.service.copy(area("B2:C4"));
+    const open = elsewhere();
+    await open.service.act({ do: "paste", place: at("A2"), clipboard: { text, html }, what: "formulas" });
+    expect(["A2", "A3", "B2", "B3"].map((address) => open.cell(address))).toEqual([1, 3, 10, 30]);
+    expect(formulaOf(open.book(), at("B3"))).toBe("=A3*10");
+  });
+
+  test("a block is repeated where it fits, formulas with it", async () => {
+    const { text, html } = (await copyFrom()).service.copy(area("A2:B2"));
+    const open = elsewhere();
+    const over = area("A2:B4");
+    await open.service.act({ do: "paste", place: at("A2"), clipboard: { text, html }, what: "formulas", over });
+    expect(["B2", "B3", "B4"].map((address) => formulaOf(open.book(), at(address)))).toEqual([
+      "=A2*2",
+      "=A3*2",
+      "=A4*2",
+    ]);
+  });
+});
+
+describe("HTML from elsewhere", () => {
+  const pasteHtml = async (html: string, text: string) => {
+    const open = openTable([["x", "y"]]);
+    await open.service.act({ do: "paste", place: at("A2"), clipboard: { text, html }, what: "formulas" });
+    return open;
+  };
+
+  test("what looks like a formula stays text, even where it has our marks without a table of ours", async () => {
+    const html = '<table><tr><td data-barycell-formula="=1+1">=1+1</td><td>=A1</td></tr></table>';
+    for (const text of ["", "=1+1\t=A1"]) {
+      const open = await pasteHtml(html, text);
+      expect([open.cell("A2"), open.cell("B2")]).toEqual(["=1+1", "=A1"]);
+      expect(formulaOf(open.book(), at("A2"))).toBeUndefined();
+    }
+  });
+
+  test("its table counts where the plain text is none", async () => {
+    const open = await pasteHtml("<table><tr><td>a<td>1.5<tr><td>b<td>2e-3</table>", "a\n1.5\nb\n2e-3");
+    expect(["A2", "B2", "A3", "B3"].map((address) => open.cell(address))).toEqual(["a", 1.5, "b", 2e-3]);
+  });
+
+  test("plain text that is a table counts before HTML that says no more", async () => {
+    const open = await pasteHtml("<p>page</p><table><tr><td>other<td>9</table>", "a\t1");
+    expect([open.cell("A2"), open.cell("B2")]).toEqual(["a", 1]);
+  });
+
+  // Worksheet programs put the digits they show into the plain text, and the number into an attribute: common practice, from memory.
+  test("numbers that it states in full are taken in full", async () => {
+    const html = '<table><tr><td x:num="12.345678901234567">12.35</td><td x:str>x</td></tr></table>';
+    const open = await pasteHtml(html, "12.35\tx");
+    expect([open.cell("A2"), open.cell("B2")]).toEqual([12.345678901234567, "x"]);
   });
 });
 
@@ -142,7 +245,7 @@ describe("under a filter only the rows in view change", () => {
 
   test("copy takes the rows in view, fill and type over reach them only", async () => {
     const open = await filtered();
-    expect(open.service.copy(area("A2:B6")).text).toBe("a\t1\nc\t3\ne\t5");
+    expect(open.service.copy(area("A2:B6")).text).toBe("a\t1\r\nc\t3\r\ne\t5");
     await open.service.act({ do: "type over", area: area("D2:D6"), place: at("D2"), text: "=B2*10" });
     expect(column(open, "D")).toEqual([10, null, 30, null, 50]);
     await open.service.act({ do: "fill over", area: area("C2:C6") });

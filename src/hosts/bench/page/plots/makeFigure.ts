@@ -1,11 +1,10 @@
 import type { PlotColumn } from "../../protocol/answers.js";
 import type { Page } from "../page.js";
-import type { Figure } from "./draw/figure.js";
 import { columnsFigure } from "./figures/columnsFigure.js";
 import { dateFigure, phaseFigure } from "./figures/curveFigure.js";
+import type { Made } from "./made.js";
+import { firstNight, makePlanFigure } from "./makePlanFigure.js";
 import type { PlotSettings } from "./plotSettings.js";
-
-export type Made = { readonly figure: Figure } | { readonly missing: string };
 
 const orbitsShown = 4;
 
@@ -16,6 +15,10 @@ export async function makeFigure(page: Page, settings: PlotSettings): Promise<Ma
       return columnsPlot(page, settings);
     case "signal":
       return signalPlot(page, settings);
+    case "hours":
+    case "visibility":
+    case "night":
+      return makePlanFigure(page, settings.kind, settings);
     default:
       return curvePlot(page, settings.kind);
   }
@@ -58,7 +61,7 @@ async function drawn(
 async function curvePlot(page: Page, kind: "phase" | "dates"): Promise<Made> {
   const curve = await page.bench.curve(page.sheet(), page.selection().active.row);
   if (curve.is === "missing") return { missing: curve.message };
-  const figure = kind === "phase" ? phaseFigure(curve) : dateFigure(curve, orbitsShown);
+  const figure = kind === "phase" ? phaseFigure(curve) : dateFigure(curve, orbitsShown, firstNight(page));
   return figure ? { figure } : { missing: "Dates need a column with the period." };
 }
 

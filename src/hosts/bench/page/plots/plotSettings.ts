@@ -1,5 +1,10 @@
-export const plotKinds = ["columns", "signal", "phase", "dates"] as const;
+export const plotKinds = ["columns", "signal", "phase", "dates", "hours", "visibility", "night"] as const;
 export type PlotKind = (typeof plotKinds)[number];
+
+/** Kinds that are about the selected or the marked rows. */
+export const kindsOfRows: readonly PlotKind[] = ["phase", "dates", "visibility", "night"];
+/** Kinds that share the site, the dates and the limits of the plan. */
+export const kindsOfPlan: readonly PlotKind[] = ["dates", "hours", "visibility", "night"];
 
 /** What one plot shows; columns are known by their headers, so that they are found again after they moved. */
 export interface PlotSettings {
@@ -12,6 +17,8 @@ export interface PlotSettings {
   readonly errors: boolean;
   /** A value of y, as typed; empty for none. */
   readonly level: string;
+  /** The evening's date of the night that is seen, as typed; empty for the first of the plan. */
+  readonly night: string;
 }
 
 export const usualSettings: PlotSettings = {
@@ -23,6 +30,7 @@ export const usualSettings: PlotSettings = {
   yLog: false,
   errors: true,
   level: "",
+  night: "",
 };
 
 const keptName = "barycell.plot";

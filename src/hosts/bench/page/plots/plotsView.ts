@@ -1,26 +1,44 @@
 import { html, nothing, type TemplateResult } from "lit-html";
 import type { Page } from "../page.js";
 import { headerText } from "./makeFigure.js";
-import type { PlotKind, PlotSettings } from "./plotSettings.js";
+import { kindsOfPlan, type PlotKind, type PlotSettings } from "./plotSettings.js";
 
 const kindWords: Readonly<Record<PlotKind, string>> = {
   signal: "Signal against period",
   columns: "Any two columns",
   phase: "Velocity over the orbit of the selected row",
-  dates: "Velocity over days of the selected row",
+  dates: "Velocity over dates of the selected row",
+  hours: "Hours against targets",
+  visibility: "Dark hours of the selected rows over the plan's nights",
+  night: "One night of the selected rows",
 };
 
 export interface PlotActions {
   set(change: Partial<PlotSettings>): void;
   save(type: "svg" | "png"): void;
   showMarked(): void;
+  /** Opens the panel that says where and when is planned. */
+  showPlan(): void;
   unmark(): void;
 }
 
+export interface PlotTold {
+  /** What keeps it from being drawn. */
+  readonly missing: string;
+  /** What to know beside it. */
+  readonly note: string;
+}
+
 /** What the plot shows, in words that can be changed. */
-export function plotsView(page: Page, settings: PlotSettings, missing: string, actions: PlotActions): TemplateResult {
+export function plotsView(
+  page: Page,
+  settings: PlotSettings,
+  { missing, note }: PlotTold,
+  actions: PlotActions,
+): TemplateResult {
   const { kind } = settings;
   const isColumns = kind === "columns";
+  const isOfPlan = kindsOfPlan.includes(kind);
   const hasPoints = isColumns || kind === "signal";
   const marked = page.marked().size;
   return html`<div class="plot-controls">
@@ -41,6 +59,13 @@ export function plotsView(page: Page, settings: PlotSettings, missing: string, a
               <input id="plot-level" type="text" inputmode="decimal" .value=${settings.level} @change=${(event: Event) => actions.set({ level: (event.target as HTMLInputElement).value })} /></span>`
           : nothing
       }
+      ${kind === "hours" ? box("log up", settings.yLog, (yLog) => actions.set({ yLog })) : nothing}
+      ${
+        kind === "night"
+          ? html`<span class="plot-level plot-night"><label for="plot-night">of</label>
+              <input id="plot-night" type="text" placeholder="first night" aria-label="Date of the night's evening; the first of the plan where it is blank" .value=${settings.night} @change=${(event: Event) => actions.set({ night: (event.target as HTMLInputElement).value })} /></span>`
+          : nothing
+      }
       <span class="plot-save">
         <button type="button" class="quiet" @click=${() => actions.save("svg")}>Save SVG</button>
         <button type="button" class="quiet" @click=${() => actions.save("png")}>Save PNG</button>
@@ -53,7 +78,12 @@ export function plotsView(page: Page, settings: PlotSettings, missing: string, a
             <button type="button" class="quiet" @click=${actions.unmark}>Unmark</button></p>`
         : nothing
     }
-    ${missing ? html`<p class="plot-missing">${missing}</p>` : nothing}`;
+    ${
+      missing
+        ? html`<p class="plot-missing">${missing}${isOfPlan ? html` <button type="button" class="quiet" @click=${actions.showPlan}>Show the plan</button>` : nothing}</p>`
+        : nothing
+    }
+    ${note ? html`<p class="plot-missing" role="status">${note}</p>` : nothing}`;
 }
 
 function columnChoice(

@@ -1,6 +1,7 @@
 import { render } from "lit-html";
 import { faultText } from "../createPage.js";
 import type { Page } from "../page.js";
+import { onWords } from "../panels/plan/planWords.js";
 import { showOnly } from "../shell/showOnly.js";
 import { brush } from "./brush.js";
 import { canvasSurface } from "./draw/canvasSurface.js";
@@ -9,7 +10,7 @@ import type { Figure } from "./draw/figure.js";
 import { paletteOf } from "./draw/palette.js";
 import { svgSurface } from "./draw/svgSurface.js";
 import { makeFigure } from "./makeFigure.js";
-import { keepSettings, readSettings } from "./plotSettings.js";
+import { keepSettings, kindsOfPlan, kindsOfRows, readSettings } from "./plotSettings.js";
 import { plotsView } from "./plotsView.js";
 
 export interface StartedPlots {
@@ -35,14 +36,15 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
 
   let settings = readSettings();
   let figure: Figure | undefined;
-  let missing = "";
+  let told = { missing: "", note: "" };
   let isShown = false;
   let asked = 0;
   let isQueued = false;
 
   function drawControls(): void {
-    const actions = { set, save, showMarked, unmark: () => page.markRows([]) };
-    render(plotsView(page, settings, missing, actions), controls);
+    const showPlan = () => page.prefer({ panel: "plan" });
+    const actions = { set, save, showMarked, showPlan, unmark: () => page.markRows([]) };
+    render(plotsView(page, settings, told, actions), controls);
   }
 
   function set(change: Partial<typeof settings>): void {
@@ -59,7 +61,7 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
       const made = await makeFigure(page, settings);
       if (mine !== asked) return;
       figure = "figure" in made ? made.figure : undefined;
-      missing = "missing" in made ? made.missing : "";
+      told = "missing" in made ? { missing: made.missing, note: "" } : { missing: "", note: made.note ?? "" };
     } catch (fault) {
       page.trouble(faultText(fault));
     }
@@ -157,12 +159,17 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
   new ResizeObserver(drawSoon).observe(area);
   matchMedia("(prefers-color-scheme: dark)").addEventListener("change", drawSoon);
   page.onChange((change) => {
-    const isOfRow = settings.kind === "phase" || settings.kind === "dates";
-    if (change === "state" || change === "sheet" || (change === "selection" && isOfRow)) void make();
+    const isOfRow = kindsOfRows.includes(settings.kind);
+    const isAboutRows = change === "selection" || change === "marked";
+    if (change === "state" || change === "sheet" || (isAboutRows && isOfRow)) void make();
     else if (isShown) {
       if (change === "marked") drawControls();
       drawSoon();
     }
+  });
+
+  onWords(() => {
+    if (kindsOfPlan.includes(settings.kind)) void make();
   });
 
   return {

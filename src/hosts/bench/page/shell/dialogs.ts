@@ -25,10 +25,15 @@ export function createDialogs(root: HTMLElement): Dialogs {
 
   const close = () => element.close();
 
-  element.addEventListener("close", () => {
+  function cleanUp(): void {
     current = undefined;
     render(html``, element);
     if (focused instanceof HTMLElement) focused.focus();
+  }
+
+  // The browser tells of it a little later, when another dialog may be open already.
+  element.addEventListener("close", () => {
+    if (!element.open && current) cleanUp();
   });
   // A press on the ground beside the dialog closes it, as Escape does.
   element.addEventListener("pointerdown", (event) => {
@@ -38,6 +43,7 @@ export function createDialogs(root: HTMLElement): Dialogs {
   return {
     isOpen: () => element.open,
     open(title, view) {
+      if (!element.open && current) cleanUp();
       if (!element.open) focused = document.activeElement;
       current = () => html`<form class="shell-form" method="dialog" aria-labelledby="dialog-title" @submit=${stop}>
         <div class="shell-dialog-head">

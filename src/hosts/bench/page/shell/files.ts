@@ -49,7 +49,7 @@ export function createFiles(root: HTMLElement, page: OwnedPage): Files {
       tell(await page.bench.openText(name, text));
     },
     async save(format) {
-      const { name, type, bytes } = await page.bench.exportAs(format, page.sheet());
+      const { name, type, bytes, told } = await page.bench.exportAs(format, page.sheet());
       const address = URL.createObjectURL(new Blob([bytes as BlobPart], { type }));
       const link = document.createElement("a");
       link.href = address;
@@ -57,6 +57,7 @@ export function createFiles(root: HTMLElement, page: OwnedPage): Files {
       link.click();
       setTimeout(() => URL.revokeObjectURL(address), 60_000);
       page.announce(`Saved as ${name}.`);
+      if (told.length > 0) page.trouble(`Saved as ${name}. ${told.join(" ")}`);
     },
   };
 }

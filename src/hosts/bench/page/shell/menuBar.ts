@@ -29,6 +29,7 @@ export function createMenuBar(
     open = name;
     around = undefined;
     redraw();
+    keepInView(document.getElementById(`menu-${name}-list`));
     if (place === "button") document.getElementById(`menu-${name}`)?.focus();
     else
       items(`menu-${name}-list`)
@@ -141,6 +142,12 @@ export function createMenuBar(
         }`;
     },
   };
+}
+
+/** Moves a list that would reach beyond the window to the left. */
+function keepInView(list: HTMLElement | null): void {
+  const beyond = list ? list.getBoundingClientRect().right + 4 - innerWidth : 0;
+  if (list && beyond > 0) list.style.insetInlineStart = `${-beyond}px`;
 }
 
 function items(id: string): HTMLElement[] {

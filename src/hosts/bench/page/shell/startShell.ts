@@ -57,7 +57,7 @@ export function startShell(
   });
   const editor = createEditor(skeleton.line, page, grid);
   typing = editor;
-  const panels: readonly Panel[] = createPanels.map((create) => create(page, drawSide));
+  const panels: readonly Panel[] = createPanels.map((create) => create(page, drawSide, () => editor.commit()));
   const attempt = (work: () => Promise<void>) => {
     work().catch((fault: unknown) => page.trouble(faultText(fault)));
   };

@@ -1,17 +1,19 @@
-import Papa from "papaparse";
 import type { Cell } from "../../../../call/cell.js";
 import { columnOf } from "../../../../call/column.js";
-import { cellOfField } from "../../../../files/cell/cellOfField.js";
+import { type ClipboardTable, entriesAt } from "../../../../files/clipboard/clipboardTable.js";
 import type { Area, Place } from "../../../../sheet/book/book.js";
 import type { Span } from "../../../../sheet/book/spans.js";
 import type { Edit } from "../../../../sheet/edit/draft.js";
 import { pasteCells } from "../../../../sheet/edit/pasteCells.js";
 import { EditRefused } from "../../../../sheet/edit/refused.js";
+import { type Entry, setCells } from "../../../../sheet/edit/setCells.js";
 import { setColumn } from "../../../../sheet/edit/setColumn.js";
 import { mostColumns, mostRows } from "../../../../sheet/limits.js";
 import type { Action } from "../../protocol/request.js";
+import { functions } from "../functions.js";
 import { bookOfSession, type Session } from "../session.js";
 import { countRows, nextVisibleSpans } from "../view/visibleRows.js";
+import { clipboardEntries } from "./clipboardEntries.js";
 import type { OwnClip } from "./clips.js";
 import type { Plan } from "./plan.js";
 import { areaWords, columnNames, counted } from "./words.js";
@@ -22,9 +24,9 @@ type Paste = Extract<Action, { do: "paste" }>;
 export function paste(session: Session, action: Paste, clip: OwnClip | undefined): Plan {
   const own = clip !== undefined && clip.token === action.clipboard.own ? clip : undefined;
   const copied = own ? sizeOf(own) : undefined;
-  const cells = own ? [] : cellsOfText(action.clipboard.text);
-  const rows = copied?.rows ?? cells.length;
-  const columns = copied?.columns ?? Math.max(0, ...cells.map((line) => line.length));
+  const table = own ? undefined : clipboardEntries(action.clipboard, action.what);
+  const rows = copied?.rows ?? table?.rows.length ?? 0;
+  const columns = copied?.columns ?? table?.rows[0]?.length ?? 0;
   if (rows === 0 || columns === 0) {
     throw new EditRefused("paste: the clipboard holds no text; copy cells or text before");
   }
@@ -36,7 +38,7 @@ export function paste(session: Session, action: Paste, clip: OwnClip | undefined
   for (let turn = 0; turn < across; turn++) {
     const left = column + turn * columns;
     if (own) edits.push(...ownEdits(own, { sheet, row, column: left }, spans, rows, action.what));
-    else edits.push(...textEdits(cells, { sheet, row, column: left }, spans, columns));
+    else if (table) edits.push(...tableEdits(table, { sheet, row, column: left }, spans));
   }
   const edited = spans.map(
     ({ from, to }): Area => ({ sheet, top: from, bottom: to - 1, left: column, right: column + columns * across - 1 }),
@@ -100,32 +102,38 @@ function rowsFrom(rows: readonly Span[], index: number): Span {
   throw new RangeError(`row ${index} of ${before} copied rows`);
 }
 
-function textEdits(cells: readonly (readonly Cell[])[], place: Place, spans: readonly Span[], columns: number): Edit[] {
+/** What was copied elsewhere, as often as there are rows for it. */
+function tableEdits(table: ClipboardTable, place: Place, spans: readonly Span[]): Edit[] {
+  const { rows, origin = place } = table;
+  const hasFormulas = rows.some((row) => row.some(isFormula));
   const edits: Edit[] = [];
   let done = 0;
   for (const { from, to } of spans) {
-    for (let across = 0; across < columns; across++) {
-      const values = Array.from({ length: to - from }, (_, index): Cell => {
-        return cells[(done + index) % cells.length]?.[across] ?? null;
-      });
-      edits.push(setColumn({ ...place, row: from, column: place.column + across }, columnOf(values)));
+    if (!hasFormulas)
+      edits.push(...columnEdits(rows as readonly (readonly Cell[])[], { ...place, row: from }, to, done));
+    for (let row = from; hasFormulas && row < to; ) {
+      const first = (done + row - from) % rows.length;
+      const part = rows.slice(first, first + to - row);
+      const source = { rows: part, origin: { ...origin, row: origin.row + first } };
+      edits.push(setCells({ ...place, row }, entriesAt(source, { ...place, row }, functions)));
+      row += part.length;
     }
     done += to - from;
   }
   return edits;
 }
 
-/**
- * Lines of fields between tabs, quoted where they hold tabs or line ends; read as the fields of a file are. A quote that
- * is never closed is a character like any other.
- */
-export function cellsOfText(text: string): Cell[][] {
-  const whole = text.replace(/\r\n?/g, "\n").replace(/\n$/, "");
-  if (whole === "") return [];
-  const { data, errors } = Papa.parse<string[]>(whole, { delimiter: "\t", newline: "\n" });
-  const isTorn = errors.some(({ code }) => code === "MissingQuotes");
-  const lines = isTorn ? whole.split("\n").map((line) => line.split("\t")) : data;
-  return lines.map((line) => line.map(cellOfField));
+function columnEdits(rows: readonly (readonly Cell[])[], place: Place, to: number, done: number): Edit[] {
+  return Array.from({ length: rows[0]?.length ?? 0 }, (_, across) => {
+    const values = Array.from({ length: to - place.row }, (_, index): Cell => {
+      return rows[(done + index) % rows.length]?.[across] ?? null;
+    });
+    return setColumn({ ...place, column: place.column + across }, columnOf(values));
+  });
+}
+
+function isFormula(entry: Entry): boolean {
+  return typeof entry === "object" && entry !== null && "formula" in entry;
 }
 
 function nameOf(session: Session, select: Area, rows: number): string {

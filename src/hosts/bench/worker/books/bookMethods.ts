@@ -8,8 +8,8 @@ import type { BookEntry, Opened } from "../../protocol/answers.js";
 import type { Bench } from "../../protocol/bench.js";
 import type { SavedState } from "../../protocol/bookState.js";
 import { demoBook } from "../demo/demoBook.js";
-import { exportAs } from "../files/exportAs.js";
-import { openFile } from "../files/openFile.js";
+import { changedValues } from "../files/changedValues.js";
+import { loadFileMethods } from "../files/loadFileMethods.js";
 import { functions } from "../functions.js";
 import type { Service } from "../service.js";
 import { renamed } from "../session.js";
@@ -41,7 +41,7 @@ export type BookMethods = Service<Pick<Bench, Method>>;
 
 const elsewhere: SavedState = {
   is: "not saved",
-  message: "Another tab has this sheet open and saves it. With the first change made here, this becomes a copy.",
+  message: "Another tab has this book open and saves it. With the first change made here, this becomes a copy.",
 };
 
 /** The methods of the bench that are about books as a whole: opening, keeping, removing. */
@@ -183,7 +183,7 @@ export function bookMethods(
         if (desk.state().id === id) return { is: "opened", said: `"${desk.state().title}" is open.`, findings: [] };
         const isThere = await openStored(id, watch);
         if (watch.isCancelled()) return { is: "cancelled" };
-        if (!isThere) return { is: "refused", message: "That sheet is no longer in this browser's storage." };
+        if (!isThere) return { is: "refused", message: "That book is no longer in this browser's storage." };
         return { is: "opened", said: `Opened "${desk.state().title}".`, findings: [] };
       }),
     newBook: (title, headers) =>
@@ -214,7 +214,16 @@ export function bookMethods(
     },
     openFile: (file) => openContent(file.name, file),
     openText: (name, text) => openContent(name, new Blob([text])),
-    exportAs: (format, sheet) => exportAs(desk.document(), format, sheet),
+    async exportAs(format, sheet) {
+      const document = desk.document();
+      const watch = createWatch("Saving a copy", emit);
+      try {
+        const { exportAs } = await loadFileMethods();
+        return await exportAs(document, format, sheet, watch);
+      } finally {
+        watch.end();
+      }
+    },
     keepDraft: (draft) => desk.keepDraft(draft),
     async keptDraft() {
       const found = await database().catch(() => undefined);
@@ -224,7 +233,12 @@ export function bookMethods(
 
   function openContent(name: string, content: Blob): Promise<Opened> {
     return opened(`Reading ${name}`, async (watch) => {
-      const { document, findings } = await openFile(name, content, {
+      const { openFile } = await loadFileMethods();
+      const {
+        document,
+        findings,
+        calculated: stored,
+      } = await openFile(name, content, {
         signal: watch.signal,
         progress: (done) => watch.onProgress(done, content.size),
       });
@@ -233,7 +247,8 @@ export function bookMethods(
       await openNew(whole, document.history.at(-1) ?? "opened");
       const rows = Math.max(...desk.state().sheets.map((sheet) => sheet.rows - 1), 0);
       const said = `Opened ${name}: ${rows.toLocaleString("en")} rows.`;
-      return { is: "opened", said, findings };
+      const changed = stored && changedValues(stored, whole.book);
+      return { is: "opened", said, findings: changed === undefined ? findings : [...findings, changed] };
     });
   }
 

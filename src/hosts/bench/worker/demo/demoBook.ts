@@ -1,4 +1,4 @@
-import { columnOf } from "../../../../call/column.js";
+import { type Column, columnOf } from "../../../../call/column.js";
 import type { BookDocument } from "../../../../files/bookFile/bookDocument.js";
 import { readDelimitedText } from "../../../../files/delimited/readDelimited.js";
 import { bookOf } from "../../../../sheet/book/bookOf.js";
@@ -11,6 +11,7 @@ import { setCells } from "../../../../sheet/edit/setCells.js";
 import type { ColumnPresentation } from "../../../../sheet/presentation/presentation.js";
 import { tableColumns } from "../files/tableColumns.js";
 import { functions } from "../functions.js";
+import { ephemerides } from "./ephemerides.js";
 import { survey } from "./survey.js";
 
 interface Derived {
@@ -26,8 +27,13 @@ const digits = (count: number): NumberFormat => ({ kind: "significant", digits: 
 /** Masses may carry their own unit, which takes room. */
 const typedWidths: Readonly<Record<number, ColumnPresentation>> = { 5: { width: 140 }, 6: { width: 152 } };
 
-/** Columns L and on. */
-const derived: readonly Derived[] = [
+/** Instants to ten seconds. */
+const skyFormats: Readonly<Record<number, ColumnPresentation>> = {
+  2: { format: { kind: "fixed", decimals: 4, grouped: false }, width: 136 },
+};
+
+/** Columns L to U. */
+const derivedOrbits: readonly Derived[] = [
   {
     headers: ["Axis [AU]", "Axis sigma [AU]"],
     formula: "=BARY.AXIS(C2,D2:E2,F2:G2,C$1:G$1,L$1)",
@@ -56,15 +62,30 @@ const derived: readonly Derived[] = [
   },
   // 1 where the measured K and the mass in the table agree; 300 tells of a Jupiter mass among Earth masses.
   { headers: ["Measured over table"], formula: '=IF(ISBLANK(J2),"",S2/BARY.INTO(F2,F$1,S$1))', format: digits(3) },
+];
+
+/** After the places and times of the targets in columns V to AC: what an observation of each would cost. */
+const derivedCosts: readonly Derived[] = [
+  { headers: ["Overhead [s]"], formula: "=overhead", format: { kind: "general" } },
   {
-    headers: ["Noise a visit [m/s]"],
-    formula: "=SQRT((photon_noise*10^(0.2*(B2-anchor_magnitude)))^2+Assumptions!B$7^2)",
+    headers: ["Photon noise [m/s]"],
+    formula: '=BARY.RVNOISE(B2,AC2,anchor_noise,anchor_magnitude,anchor_exposure,,,"mag; s; m/s; mag; s",AE$1)',
     format: digits(3),
   },
   {
-    headers: ["Visits"],
-    formula: "=ROUNDUP(2*(significance*V2/N2)^2,0)",
+    headers: ["Noise [m/s]"],
+    formula: '=BARY.NOISESUM(AE2,Assumptions!B$8,"m/s; m/s",AF$1)',
+    format: digits(3),
+  },
+  {
+    headers: ["Visits", "Visits sigma"],
+    formula: '=BARY.VISITS(N2:O2,AF2,significance,"quadrature",,,"m/s; m/s; m/s; 1",AG$1)',
     format: { kind: "fixed", decimals: 0, grouped: true },
+  },
+  {
+    headers: ["Hours [h]", "Hours sigma [h]"],
+    formula: '=BARY.HOURS(AG2:AH2,AC2,AD2,usable_part,"1; 1; s; s; 1",AI$1)',
+    format: { kind: "fixed", decimals: 1, grouped: true },
   },
 ];
 
@@ -73,34 +94,46 @@ const assumptions: readonly (readonly [name: string, value: number, note: string
   ["Resolving power", 115_000, "invented spectrograph", "resolving_power"],
   ["Pixels per resolution element [pixel]", 3.2, "sampling along the dispersion", "pixels_per_element"],
   ["Reference line [nm]", 550, "wavelength at rest", "reference_line"],
-  ["Photon noise [m/s]", 0.45, "of one visit at the anchor magnitude", "photon_noise"],
-  ["Anchor magnitude [mag]", 8, "noise grows by 10^0.2 a magnitude", "anchor_magnitude"],
+  ["Anchor noise [m/s]", 0.45, "photon noise of one visit to a star of the anchor magnitude", "anchor_noise"],
+  ["Anchor magnitude [mag]", 8, "a star on which the spectrograph was tried", "anchor_magnitude"],
+  ["Anchor exposure [s]", 900, "", "anchor_exposure"],
   ["Noise floor [m/s]", 0.3, "of the instrument; added in quadrature"],
   ["Significance", 10, "K over its uncertainty that is asked for", "significance"],
-  ["Site longitude [deg]", -70.4, "an invented site"],
-  ["Site latitude [deg]", -24.6, ""],
-  ["Site height [m]", 2400, ""],
+  ["Overhead [s]", 180, "of one visit, the shutter closed", "overhead"],
+  ["Usable part", 0.8, "what weather and faults leave of the time", "usable_part"],
+  ["Site longitude [deg]", -69.2, "Cairn Ridge, an invented observatory; east is positive"],
+  ["Site latitude [deg]", -25.3, ""],
+  ["Site height [m]", 2900, ""],
 ];
 
 /** The survey with its derived columns and its assumptions, calculated. */
 export function demoBook(): BookDocument {
-  const table = readDelimitedText(survey, { isUnit: () => false, unitsRow: false });
+  const [planets, skies] = [survey, ephemerides].map(typedColumns) as [TypedColumns, TypedColumns];
+  const { rows } = planets;
+  const firstDerived = planets.columns.length;
+  const between = derivedOrbits.flatMap(({ headers }) => headers);
+  const firstCost = firstDerived + between.length + skies.columns.length;
   const texts = [["Assumption", "Value", "Note"], ...assumptions.map(([name, value, note]) => [name, value, note])];
   const columns = [0, 1, 2].map((index) => columnOf(texts.map((row) => row[index] || null)));
   const values = bookOf([
-    { name: "Survey", columns: tableColumns(table) },
+    { name: "Survey", columns: [...planets.columns, ...between.map(() => columnOf([])), ...skies.columns] },
     { name: "Assumptions", columns },
   ]);
   const names = assumptions.flatMap(([, , , defined], row) =>
     defined === undefined ? [] : [defineName(defined, `=Assumptions!$B$${row + 2}`, 1)],
   );
-  const book = change(values, [...names, ...derivedEdits(table.columns.length, table.rows)], functions);
-  const formats = derived.flatMap(({ headers, format }) => headers.map((): ColumnPresentation => ({ format })));
+  const edits = [...derivedEdits(derivedOrbits, firstDerived, rows), ...derivedEdits(derivedCosts, firstCost, rows)];
+  const seen = [
+    ...planets.columns.map((_, column) => typedWidths[column]),
+    ...formatsOf(derivedOrbits),
+    ...skies.columns.map((_, column) => skyFormats[column]),
+    ...formatsOf(derivedCosts),
+  ];
   return {
     title: "Demo survey",
-    book,
+    book: change(values, [...names, ...edits], functions),
     presentation: [
-      { frozenColumns: 1, columns: [...table.columns.map((_, column) => typedWidths[column]), ...formats] },
+      { frozenColumns: 1, columns: seen },
       { frozenColumns: 1, columns: [{ width: 280 }, undefined, { width: 300 }] },
     ],
     marks: [],
@@ -108,7 +141,22 @@ export function demoBook(): BookDocument {
   };
 }
 
-function derivedEdits(first: number, rows: number): Edit[] {
+interface TypedColumns {
+  readonly columns: readonly Column[];
+  /** Without the headers. */
+  readonly rows: number;
+}
+
+function typedColumns(text: string): TypedColumns {
+  const table = readDelimitedText(text, { isUnit: () => false, unitsRow: false });
+  return { columns: tableColumns(table), rows: table.rows };
+}
+
+function formatsOf(derived: readonly Derived[]): ColumnPresentation[] {
+  return derived.flatMap(({ headers, format }) => headers.map(() => ({ format })));
+}
+
+function derivedEdits(derived: readonly Derived[], first: number, rows: number): Edit[] {
   let column = first;
   return derived.flatMap(({ headers, formula }) => {
     const edits = [

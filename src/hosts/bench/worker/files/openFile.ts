@@ -1,11 +1,13 @@
 import { FileProblem } from "../../../../files/fileProblem.js";
+import { refuseOtherKinds } from "../../../../files/otherKinds.js";
 import { mostRows } from "../../../../sheet/limits.js";
 import { openBookFile } from "./openBookFile.js";
-import { openDelimited } from "./openDelimited.js";
 import type { Opener, OpenWatch, ReadFile } from "./opener.js";
+import { openTable } from "./openTable.js";
+import { openWorkbook } from "./openWorkbook.js";
 
 /** The kinds of files that can be opened; the first that recognises a file reads it, the last reads any text. */
-const openers: readonly Opener[] = [openBookFile, openDelimited];
+const openers: readonly Opener[] = [openBookFile, openWorkbook, openTable];
 
 const startLength = 4096;
 
@@ -13,8 +15,9 @@ const startLength = 4096;
 export async function openFile(name: string, content: Blob, watch: OpenWatch): Promise<ReadFile> {
   const start = new Uint8Array(await content.slice(0, startLength).arrayBuffer());
   const file = { name, size: content.size, start, content };
-  const opener = openers.find((each) => each.isFor(file)) ?? openDelimited;
+  const opener = openers.find((each) => each.isFor(file)) ?? openTable;
   try {
+    refuseOtherKinds(start);
     if (file.size > opener.longest) throw tooLong(file.size, opener.longest);
     return await opener.read(file, watch);
   } catch (error) {

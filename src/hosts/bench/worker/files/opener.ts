@@ -1,4 +1,5 @@
 import type { BookDocument } from "../../../../files/bookFile/bookDocument.js";
+import type { Book } from "../../../../sheet/book/book.js";
 
 export interface FileToOpen {
   readonly name: string;
@@ -18,6 +19,8 @@ export interface OpenWatch {
 /** A book from a file, its formulas still to be calculated, and what its owner should know. */
 export interface ReadFile {
   readonly document: BookDocument;
+  /** The book with the values that the file says its formulas gave, where it says so. */
+  readonly calculated?: Book;
   readonly findings: readonly string[];
 }
 

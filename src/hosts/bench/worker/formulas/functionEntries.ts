@@ -31,7 +31,14 @@ export function searchFunctions(words: string): readonly string[] {
       !name.startsWith(wanted) && (name.includes(wanted) || question.toUpperCase().includes(wanted)),
   );
   const ours = functionEntries.filter(({ own: isOwn, name }) => isOwn && name.includes(wanted) && !own.includes(name));
-  return [...ours.map(({ name }) => name), ...own, ...[...named, ...within].map(({ name }) => name)];
+  const exact = others.filter(({ name }) => name === wanted);
+  const found = [
+    ...exact.map(({ name }) => name),
+    ...ours.map(({ name }) => name),
+    ...own,
+    ...[...named, ...within].map(({ name }) => name),
+  ];
+  return [...new Set(found)];
 }
 
 function ownEntry(definition: Definition): FunctionEntry {
@@ -51,7 +58,8 @@ function ownEntry(definition: Definition): FunctionEntry {
 
 function inputEntry(input: Input): ParameterEntry {
   const unit = input.takes === "quantity" && input.quantity.unit !== "1" ? input.quantity.unit : "";
-  return { name: input.name, optional: isOptional(input), repeating: false, meaning: describeInput(input), unit };
+  const repeating = input.takes === "quantity" && input.repeats === true;
+  return { name: input.name, optional: isOptional(input), repeating, meaning: describeInput(input), unit };
 }
 
 function worksheetEntry(

@@ -1,7 +1,7 @@
 import { completionStatus } from "@codemirror/autocomplete";
 import type { EditorState, Extension } from "@codemirror/state";
-import type { EditorView, Tooltip } from "@codemirror/view";
-import { showTooltip } from "@codemirror/view";
+import type { EditorView, Tooltip, ViewUpdate } from "@codemirror/view";
+import { repositionTooltips, showTooltip } from "@codemirror/view";
 import type { TemplateResult } from "lit-html";
 import { html, nothing, render } from "lit-html";
 import type { Hint } from "../text/hintAt.js";
@@ -26,7 +26,12 @@ export function card(typing: Typing, actions: EditorActions): Extension {
       dom.addEventListener("mousedown", (event) => event.preventDefault());
       const draw = (state: EditorState) => render(cardOf(typing, state, actions), dom);
       draw(view.state);
-      return { dom, update: ({ state }) => draw(state), getCoords: () => boxOf(view), resize: false };
+      const update = ({ state }: ViewUpdate) => {
+        draw(state);
+        // It may have become narrower.
+        repositionTooltips(view);
+      };
+      return { dom, update, getCoords: () => boxOf(view), resize: false };
     },
   };
   return showTooltip.compute(["doc", editing], (state) =>

@@ -9,6 +9,9 @@ export interface CellInset {
   paint(): void;
 }
 
+/** A formula takes more room than most cells have [px at a root size of 16 px]. */
+const roomy = 260;
+
 export function createCellInset(frame: Frame, sight: Sight, reveal: (place: Place) => void): CellInset {
   const { inset } = frame;
   let open: { readonly place: Place; readonly room: HTMLElement } | undefined;
@@ -27,6 +30,14 @@ export function createCellInset(frame: Frame, sight: Sight, reveal: (place: Plac
     room.style.minHeight = `${box.height}px`;
   }
 
+  /** Scrolls a cell at the far edge further in, so that what is typed in it can be read. */
+  function makeRoom(place: Place): void {
+    if (place.column < sight.columns.frozen) return;
+    const { left } = sight.boxOf({ row: sight.rows.toView(place.row), column: place.column });
+    const lacking = Math.min(roomy * sight.zoom - (sight.width - left), left - sight.freeLeft());
+    if (lacking > 0) sight.scroll.setLeft(sight.scroll.left() + lacking);
+  }
+
   function close(): void {
     open?.room.remove();
     open = undefined;
@@ -42,6 +53,7 @@ export function createCellInset(frame: Frame, sight: Sight, reveal: (place: Plac
       open = { place, room: element("grid-cell-editor", inset) };
       inset.hidden = false;
       reveal(place);
+      makeRoom(place);
       paint();
       return open.room;
     },

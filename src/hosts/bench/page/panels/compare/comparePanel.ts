@@ -9,7 +9,7 @@ import { goTo } from "../goTo.js";
 const mostShown = 200;
 
 /** Marks the table as it is, and tells what moved since. */
-export function comparePanel(page: Page, redraw: () => void): Panel {
+export function comparePanel(page: Page, redraw: () => void, enterTyped: () => Promise<boolean>): Panel {
   let marks: readonly MarkState[] = [];
   let chosen: string | undefined;
   let report: ComparisonReport | undefined;
@@ -35,6 +35,7 @@ export function comparePanel(page: Page, redraw: () => void): Panel {
   }
 
   async function mark(): Promise<void> {
+    if (!(await enterTyped())) return;
     const taken = await page.bench.mark(page.sheet());
     chosen = taken.id;
     page.announce(`${page.sheetState().name} is marked. Revise what you like; what moves is told here.`);
@@ -49,7 +50,7 @@ export function comparePanel(page: Page, redraw: () => void): Panel {
   }
 
   async function write(): Promise<void> {
-    if (chosen === undefined) return;
+    if (chosen === undefined || !(await enterTyped())) return;
     const outcome = await page.bench.writeComparison(chosen);
     if (outcome.is === "refused") page.trouble(outcome.message);
     else page.announce("The comparison is in a sheet of its own.");
@@ -104,20 +105,20 @@ function reportView(page: Page, report: ComparisonReport, write: () => void, for
   return html`<p role="status">${sentence}</p>
     ${
       movements.length > 0
-        ? html`<table class="panel-movements">
-            <thead><tr><th scope="col">Row</th><th scope="col">Column</th><th scope="col">Before</th><th scope="col">Now</th><th scope="col">Moved</th></tr></thead>
+        ? html`<div class="panel-across" role="group" aria-label="What moved" tabindex="0"><table class="panel-movements">
+            <thead><tr><th scope="col">Row</th><th scope="col">Column</th><th scope="col">Moved</th><th scope="col">Before</th><th scope="col">Now</th></tr></thead>
             <tbody>
               ${movements.slice(0, mostShown).map(
                 ({ place, key, header, before, after, sigmas, relative, change }) => html`<tr>
                   <th scope="row"><button type="button" class="quiet panel-link" ?disabled=${!place} @click=${() => goTo(page, place)}>${key}</button></th>
                   <td>${header}</td>
+                  <td class="number">${movedText(sigmas, relative, change)}</td>
                   <td class="number">${before}</td>
                   <td class="number">${after}</td>
-                  <td class="number">${movedText(sigmas, relative, change)}</td>
                 </tr>`,
               )}
             </tbody>
-          </table>
+          </table></div>
           ${movements.length > mostShown ? html`<p class="soft">The ${mostShown} largest of ${movements.length.toLocaleString("en")} are shown; the sheet holds all.</p>` : nothing}`
         : nothing
     }

@@ -5,7 +5,7 @@ import type { Panel } from "../../panel.js";
 import { goTo } from "../goTo.js";
 
 /** Finds cells by their text or their formula, and replaces texts. */
-export function findPanel(page: Page, redraw: () => void): Panel {
+export function findPanel(page: Page, redraw: () => void, enterTyped: () => Promise<boolean>): Panel {
   let options = { text: "", matchCase: false, wholeCell: false, inFormulas: false };
   let replacement = "";
   let said = "";
@@ -27,6 +27,7 @@ export function findPanel(page: Page, redraw: () => void): Panel {
   }
 
   async function replace(everywhere: boolean): Promise<void> {
+    if (!(await enterTyped())) return;
     const { area } = page.selection();
     const { rows, columns } = page.sheetState();
     const whole = {

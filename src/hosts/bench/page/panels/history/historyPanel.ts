@@ -6,9 +6,14 @@ import type { Panel } from "../../panel.js";
 const mostShown = 300;
 
 /** Every version of the book by what was done; any of them can be gone back to. */
-export function historyPanel(page: Page, redraw: () => void): Panel {
+export function historyPanel(page: Page, redraw: () => void, enterTyped: () => Promise<boolean>): Panel {
+  const go = async (version: number) => {
+    if (!(await enterTyped())) return;
+    await page.bench.goTo(version);
+    redraw();
+  };
   const goTo = (version: number) => {
-    page.bench.goTo(version).then(redraw, (fault: unknown) => page.trouble(faultText(fault)));
+    go(version).catch((fault: unknown) => page.trouble(faultText(fault)));
   };
   return {
     id: "history",

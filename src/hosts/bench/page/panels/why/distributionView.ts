@@ -13,7 +13,7 @@ export function distributionView(drawn: Distribution): TemplateResult {
   const bar = width / counts.length;
   const [low2, low1, median, high1, high2] = percentiles;
   const words = (x: number) => figures(x, (high1 - low1) / 2);
-  return html`<svg class="panel-histogram" viewBox="0 0 ${width} ${height + 4}" role="img" aria-label=${`Distribution of ${draws} draws: median ${words(median)}, 68 per cent between ${words(low1)} and ${words(high1)} ${unit}`}>
+  return html`<svg class="panel-histogram" viewBox="0 0 ${width} ${height + 4}" preserveAspectRatio="none" role="img" aria-label=${`Distribution of ${draws} draws: median ${words(median)}, 68 per cent between ${words(low1)} and ${words(high1)} ${unit}`}>
       ${counts.map((count, index) => {
         const tall = (count / most) * height;
         return svg`<rect x=${index * bar} y=${height - tall} width=${Math.max(0.5, bar - 0.5)} height=${tall} />`;

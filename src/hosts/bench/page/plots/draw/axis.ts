@@ -5,6 +5,8 @@ export interface Axis {
   readonly isLog: boolean;
   readonly from: number;
   readonly to: number;
+  /** The values are days from J2000.0, told as dates or as times of the clock. */
+  readonly times?: "dates" | "clock";
 }
 
 export interface Tick {

@@ -1,7 +1,9 @@
-import { partOf, ticksOf } from "./axis.js";
+import { type Axis, partOf, type Tick, ticksOf } from "./axis.js";
 import type { ArrowLayer, Figure, Layer, LevelLayer, LineLayer, PointLayer } from "./figure.js";
+import { drawLegend, legendHeight } from "./legend.js";
 import type { Palette } from "./palette.js";
 import type { Surface } from "./surface.js";
+import { timeTicks } from "./timeTicks.js";
 
 export interface Frame {
   readonly left: number;
@@ -21,7 +23,7 @@ const letters = 12;
 const mostShapes = 8_000;
 
 export function frameOf(width: number, height: number, figure: Figure): Frame {
-  const legend = figure.legend.length > 0 ? 18 : 0;
+  const legend = legendHeight(figure.legend, width);
   return { left: 62, top: 10 + legend, width: Math.max(40, width - 78), height: Math.max(40, height - 54 - legend) };
 }
 
@@ -44,7 +46,7 @@ export function drawFigure(
     if (layer.draw !== "bands") drawLayer(surface, frame, figure, layer, palette, chosen);
   }
   surface.release();
-  drawLegend(surface, figure, palette);
+  drawLegend(surface, figure.legend, width, palette);
 }
 
 export function placeX({ left, width }: Frame, { x }: Figure, value: number): number {
@@ -59,7 +61,7 @@ function drawAxes(surface: Surface, frame: Frame, figure: Figure, palette: Palet
   const { left, top, width, height } = frame;
   const grid = { colour: palette.line, width: 1 };
   const words = { colour: palette.soft, size: letters };
-  for (const { value, text } of ticksOf(figure.x, Math.floor(width / 72))) {
+  for (const { value, text } of ticksAcross(figure.x, Math.floor(width / 72))) {
     const x = placeX(frame, figure, value);
     if (x < left - 0.5 || x > left + width + 0.5) continue;
     surface.line([x, top, x, top + height], grid);
@@ -75,6 +77,10 @@ function drawAxes(surface: Surface, frame: Frame, figure: Figure, palette: Palet
   const ink = { colour: palette.ink, size: letters };
   surface.text(axisText(figure.x), left + width / 2, top + height + 36, { ...ink, align: "middle" });
   surface.text(axisText(figure.y), 14, top + height / 2, { ...ink, align: "middle", turned: true });
+}
+
+function ticksAcross(axis: Axis, most: number): Tick[] {
+  return axis.times === undefined ? ticksOf(axis, most) : timeTicks(axis, most);
 }
 
 function axisText({ label, unit }: { readonly label: string; readonly unit: string }): string {
@@ -217,14 +223,5 @@ function drawArrows(
     const wing = (turn: number) => [x1 - 7 * Math.cos(angle + turn), y1 - 7 * Math.sin(angle + turn)] as const;
     if (Math.hypot(x1 - x0, y1 - y0) > 3) surface.line([...wing(0.45), x1, y1, ...wing(-0.45)], { colour, width: 1.2 });
     surface.shape("circle", x1, y1, 2.5, colour);
-  }
-}
-
-function drawLegend(surface: Surface, { legend }: Figure, palette: Palette): void {
-  let x = 66;
-  for (const { text, paint } of legend) {
-    surface.shape(paint.shape, x, 11, 4, palette.colour(paint.colour));
-    surface.text(text, x + 9, 15, { colour: palette.ink, size: letters, align: "start" });
-    x += 30 + 6.6 * text.length;
   }
 }

@@ -65,6 +65,8 @@ export interface Paint {
 export interface LegendEntry {
   readonly text: string;
   readonly paint: Paint;
+  /** Of a line, which has no shape. */
+  readonly dash?: readonly number[];
 }
 
 /** Names of the theme, or a step between the quiet and the accent colour. */

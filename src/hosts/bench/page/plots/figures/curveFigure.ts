@@ -1,3 +1,4 @@
+import { dateText } from "../../../../../plan/dateText.js";
 import type { CurveAnswer } from "../../../protocol/answers.js";
 import { axisOver } from "../draw/axis.js";
 import type { Figure } from "../draw/figure.js";
@@ -13,7 +14,7 @@ export function phaseFigure(curve: Curve): Figure {
   return {
     description: `Radial velocity of ${curve.title} over its orbit, between ${least(y)} and ${most(y)} ${curve.unit}`,
     x: { label: "Phase from the reference time", unit: "", isLog: false, from: 0, to: 1.5 },
-    y: axisOver("Radial velocity of the star", curve.unit, false, y),
+    y: axisOver("Radial velocity", curve.unit, false, y),
     layers: [
       { draw: "level", along: "y", value: 0, text: "" },
       { draw: "line", x, y, colour: "ref-1" },
@@ -23,23 +24,36 @@ export function phaseFigure(curve: Curve): Figure {
   };
 }
 
-/** The same over dates: some orbits from a day on. */
-export function dateFigure(curve: Curve, orbits: number): Figure | undefined {
+/** Longer stretches than this are told in days: dates of so many years mean nothing [d]. */
+const longestDates = 3_652_500;
+const julianDateOfEpoch = 2451545;
+
+/** The same over some orbits: from a date on [d from J2000.0] where a reference time is known, else from that time on. */
+export function dateFigure(curve: Curve, orbits: number, date: number): Figure | undefined {
   const { phases, velocities, period, reference } = curve;
   if (period === undefined) return undefined;
+  const isDated = reference !== undefined && orbits * period < longestDates;
+  const zero = isDated ? reference.day - julianDateOfEpoch : 0;
+  const from = isDated ? date : 0;
+  const to = from + orbits * period;
   const x: number[] = [];
   const y: number[] = [];
-  for (let orbit = 0; orbit < orbits; orbit++) {
+  const first = Math.floor((from - zero) / period);
+  for (let orbit = first; orbit <= first + orbits; orbit++) {
     for (let index = 0; index < phases.length; index++) {
-      x.push((orbit + (phases[index] as number)) * period);
+      const time = zero + (orbit + (phases[index] as number)) * period;
+      if (time < from - period / phases.length || time > to + period / phases.length) continue;
+      x.push(time);
       y.push(velocities[index] as number);
     }
   }
-  const label = reference ? `Days since the reference time (${reference.frame})` : "Days since the reference time";
+  const label = isDated
+    ? `Date (${reference.frame || "of the reference time's clock"})`
+    : "Days since the reference time";
   return {
-    description: `Radial velocity of ${curve.title} over ${orbits} orbits`,
-    x: axisOver(label, "d", false, x),
-    y: axisOver("Radial velocity of the star", curve.unit, false, y),
+    description: `Radial velocity of ${curve.title} over ${orbits} orbits${isDated ? ` from ${dateText(date)} on` : ""}`,
+    x: { label, unit: isDated ? "" : "d", isLog: false, from, to, ...(isDated ? { times: "dates" } : {}) },
+    y: axisOver("Radial velocity", curve.unit, false, velocities),
     layers: [
       { draw: "level", along: "y", value: 0, text: "" },
       { draw: "line", x: Float64Array.from(x), y: Float64Array.from(y), colour: "ref-1" },

@@ -11,7 +11,7 @@ const inGrid: readonly (readonly [string, string])[] = [
   ["Ctrl+Space, Shift+Space", "select the column, the row"],
   ["Ctrl+C, Ctrl+X, Ctrl+V", "copy, cut, paste; Ctrl+Shift+V pastes values only"],
   ["Ctrl+D, Ctrl+R", "fill the first row down, the first column to the right"],
-  ["F6", "go on to the next part of the page"],
+  ["F6, Shift+F6", "go on to the next part of the page, or back to the one before"],
 ];
 
 const inFormulas: readonly (readonly [string, string])[] = [

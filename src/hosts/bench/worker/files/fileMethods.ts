@@ -1,0 +1,2 @@
+export { exportAs } from "./exportAs.js";
+export { openFile } from "./openFile.js";
