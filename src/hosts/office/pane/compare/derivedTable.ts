@@ -1,7 +1,8 @@
-import { type Cell, CellError } from "../../../../call/cell.js";
 import { cellAt } from "../../../../call/column.js";
 import type { ComparedColumn, ComparedTable } from "../../../../table/compareTables.js";
+import { headerText } from "../../../../table/headerText.js";
 import { recogniseColumn } from "../../../../table/recogniseColumn.js";
+import { nameColumn, rowName } from "../../../../table/rowNames.js";
 import type { PlannedColumn } from "../../../../table/tableOf.js";
 import type { SheetTable } from "../sheetTable.js";
 
@@ -18,11 +19,6 @@ export function derivedTable(table: SheetTable): ComparedTable {
   }
 }
 
-/** The header as a column of one row of headers would have it. */
-function headerText({ header, unitCell }: PlannedColumn): string {
-  return unitCell === undefined ? header : `${header} [${unitCell}]`;
-}
-
 function isUncertainty({ header, unitCell }: PlannedColumn): boolean {
   return recogniseColumn(header, unitCell).isUncertainty;
 }
@@ -33,19 +29,9 @@ function hasFormula({ used, plan }: SheetTable, { index }: PlannedColumn): boole
 
 /** The first column of texts names the rows; where there is none, their numbers do. */
 function keysOf({ plan, used }: SheetTable, derived: readonly PlannedColumn[]): readonly string[] {
-  const names = plan.columns.find((column) => !derived.includes(column) && isMostlyText(column, plan.rows));
-  const number = (row: number) => `row ${used.area.row + plan.firstRow + row + 1}`;
-  return Array.from({ length: plan.rows }, (_, row) => {
-    const name = names ? textOf(cellAt(names.column, row)) : "";
-    return name === "" ? number(row) : name;
-  });
-}
-
-function isMostlyText({ column }: PlannedColumn, rows: number): boolean {
-  const texts = (column.others ?? []).filter((cell) => typeof cell === "string" && cell.trim() !== "");
-  return 2 * texts.length > rows;
-}
-
-function textOf(cell: Cell): string {
-  return cell === null ? "" : cell instanceof CellError ? cell.code : String(cell).trim();
+  const typed = plan.columns.filter((column) => !derived.includes(column));
+  const names = nameColumn(typed, plan.rows);
+  return Array.from({ length: plan.rows }, (_, row) =>
+    rowName(names ? cellAt(names.column, row) : null, used.area.row + plan.firstRow + row + 1),
+  );
 }
