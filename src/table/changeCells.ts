@@ -22,13 +22,5 @@ export const changeHeaders: readonly string[] = [
 
 /** A change as the cells of a row, the numbers in full. */
 export function changeCells({ key, header, before, after, change, relative, sigmas }: ListedChange): Cell[] {
-  return [
-    key,
-    header,
-    before,
-    after,
-    change ?? null,
-    relative === undefined ? null : 100 * relative,
-    sigmas ?? null,
-  ];
+  return [key, header, before, after, change ?? null, relative === undefined ? null : 100 * relative, sigmas ?? null];
 }

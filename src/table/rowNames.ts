@@ -1,5 +1,5 @@
 import { type Cell, CellError } from "../call/cell.js";
-import { type Column, cellAt } from "../call/column.js";
+import type { Column } from "../call/column.js";
 
 /** The column whose texts name the rows: the first that is mostly text; undefined where there is none. */
 export function nameColumn<C extends { readonly column: Column }>(columns: readonly C[], rows: number): C | undefined {
