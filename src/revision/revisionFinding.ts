@@ -108,9 +108,10 @@ function slipSentence({
   const looks = isReversed
     ? `converted from ${other.text} to ${unit.text} once too often`
     : `${other.text} in a column of ${unit.text === one.text ? "plain numbers" : unit.text}`;
-  const where = isWhole
-    ? `${rows.length.toLocaleString("en")} of ${counted(changed, "changed cell")}`
-    : counted(rows.length, "cell");
+  const where =
+    isWhole && changed > 1
+      ? `${rows.length.toLocaleString("en")} of ${counted(changed, "changed cell")}`
+      : counted(rows.length, "cell");
   return `${quoted(header)}: ${where} became about ${how}, which looks like ${looks}; first ${quoted(key, 24)}, ${short(before)} to ${short(after)}.`;
 }
 

@@ -1,4 +1,4 @@
-import type { Cell } from "../call/cell.js";
+import { type Cell, CellError } from "../call/cell.js";
 import { cellAt } from "../call/column.js";
 import { type Area, type Book, columnAt } from "../sheet/book/book.js";
 import { cellOf } from "../sheet/book/cellOf.js";
@@ -46,7 +46,7 @@ export function sharedChanges(ledger: Ledger, cells: readonly SharedCell[]): rea
       const origin = cell[from];
       const isNumber = typeof value === "number" && typeof origin === "number";
       sums[input]![index]! += isNumber ? (sign * (value - origin)) / 2 : Number.NaN;
-      if (from === "before" && cell.change === undefined && sameValue(value, cell.after)) sole[index] ??= input;
+      if (from === "before" && cell.change === undefined && isAlike(value, cell.after)) sole[index] ??= input;
     });
   };
   if (active.length === 1) {
@@ -73,6 +73,11 @@ export function sharedChanges(ledger: Ledger, cells: readonly SharedCell[]): rea
       sole[index],
     ),
   );
+}
+
+/** Errors are alike by their code: their sentences quote what other inputs held. */
+function isAlike(a: Cell, b: Cell): boolean {
+  return a instanceof CellError && b instanceof CellError ? a.code === b.code : sameValue(a, b);
 }
 
 function shared(

@@ -58,7 +58,10 @@ export function unitSlips(unit: Unit, before: Column, after: Column): readonly U
   const found = new Map<Candidate, number[]>();
   for (const row of rows) {
     const logarithm = logarithms[row]!;
-    const candidate = Math.abs(logarithm) < least ? undefined : nearestOf(candidates, logarithm, reach);
+    // The ratio of the column as a whole explains its cells, even where another lies nearer to one of them.
+    const isOfWhole = whole && Math.abs(whole.logarithm - logarithm) <= reach;
+    const single = Math.abs(logarithm) < least ? undefined : nearestOf(candidates, logarithm, reach);
+    const candidate = isOfWhole ? whole : single;
     if (!candidate) continue;
     const known = found.get(candidate);
     if (known) known.push(row);

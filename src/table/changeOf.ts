@@ -35,7 +35,10 @@ export function sameValue(before: Cell, after: Cell): boolean {
  * uncertainty, then by relative size.
  */
 export function byImportance(a: Change, b: Change): number {
-  const kind = ({ change }: Change) => (change === undefined ? 0 : 1);
-  const size = (value: number | undefined) => Math.abs(value ?? 0);
-  return kind(a) - kind(b) || size(b.sigmas) - size(a.sigmas) || size(b.relative) - size(a.relative);
+  const kind = (a.change === undefined ? 0 : 1) - (b.change === undefined ? 0 : 1);
+  return kind || sizeOf(b.sigmas) - sizeOf(a.sigmas) || sizeOf(b.relative) - sizeOf(a.relative);
+}
+
+function sizeOf(value: number | undefined): number {
+  return Math.abs(value ?? 0);
 }

@@ -1,6 +1,7 @@
 import { benchFill } from "./fill.js";
 import { benchFormats } from "./formats.js";
 import { benchReflex } from "./reflex.js";
+import { benchRevise } from "./revise.js";
 import { benchSheet } from "./sheet.js";
 import { benchXlsx } from "./xlsx.js";
 
@@ -10,6 +11,7 @@ const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   fill: benchFill,
   xlsx: () => benchXlsx((line) => void process.stdout.write(`${line}\n`)),
   formats: benchFormats,
+  revise: benchRevise,
   sheet: () => benchSheet((line) => void process.stdout.write(`${line}\n`)),
 };
 
