@@ -3,11 +3,15 @@ import type { Ledger, LedgerColumn, WatchedCondition } from "./ledger.js";
 import { cellOfKept, type KeptCell, type LedgerEntry, ledgerEntries } from "./ledgerEntry.js";
 import { counted, short } from "./words.js";
 
-/** A ledger as a report: what was revised, what moved, which conditions were crossed, the most important changes. */
-export function* ledgerMarkdown(ledger: Ledger, most = 20): Generator<string> {
+/**
+ * A ledger as a report: what was revised, what moved, which conditions were crossed, the most important changes;
+ * `matching`: sentences on how the revision was matched.
+ */
+export function* ledgerMarkdown(ledger: Ledger, most = 20, matching: readonly string[] = []): Generator<string> {
   const { source, sheet, columns, conditions, inputs, unshared } = ledger;
   yield "# Revision\n\n";
   yield `${code(source.file)}, ${source.date}, SHA-256 ${code(source.sha256)}, into ${code(sheet)}.\n`;
+  if (matching.length > 0) yield `\n## Matching\n\n${matching.map((text) => `- ${escaped(text)}\n`).join("")}`;
   yield* section(
     "Revised",
     ["Column", "Cells"],
@@ -76,7 +80,9 @@ function entryLine({
   parts,
   remainder,
 }: LedgerEntry): string[] {
-  const shares = [...parts]
+  // One input that did it all is told beside; what did nothing is not worth the room.
+  const told = parts.filter(({ part }) => part !== 0);
+  const shares = (told.length > 1 ? [...told] : [])
     .sort((a, b) => Math.abs(b.part) - Math.abs(a.part))
     .map(({ input, part }) => `${input} ${signed(part)}`);
   // What is left is told where it would show in the digits of the change.

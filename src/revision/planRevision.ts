@@ -70,6 +70,9 @@ export function planRevision(table: BookTable, revision: RevisionTable, request:
     aliases,
     sameRows(revision, pairs),
   );
+  if (match.exact + match.folded + match.aliased === 0 && match.ambiguous.length === 0) {
+    throw new RevisionRefused(nothingMatched(table, revision, keys, nameOfRow));
+  }
   const revised = pairs.map((pair) => reviseColumn(table, pair, revision, match.rows, erases));
   return {
     table,
@@ -95,6 +98,18 @@ function keyColumn<C extends BookColumn | RevisionColumn>(columns: readonly C[],
   throw new RevisionRefused(
     `the ${which} has no column ${quoted(key)}; ${near ? `did you mean ${quoted(near)}?` : `it has ${listed(names)}.`}`,
   );
+}
+
+function nothingMatched(
+  { rows }: BookTable,
+  revision: RevisionTable,
+  { revision: key }: { readonly revision: RevisionColumn },
+  nameOfRow: (row: number) => string,
+): string {
+  if (rows === 0) return "the table has no rows.";
+  if (revision.rows === 0) return "the revision has no rows.";
+  const name = String(cellAt(revision.columns[key.index]!, 0) ?? "");
+  return `no row of the revision is in the table; the first is ${quoted(name)} in the revision and ${quoted(nameOfRow(0))} in the table. Name the column that both share, or give aliases.`;
 }
 
 /** Whether two rows of the revision say the same in all that is taken from them. */
@@ -162,10 +177,10 @@ function largestChanges(
     const sigma = Math.abs(standing?.numbers[row] || revised?.values.numbers[row] || 0);
     const ratio = Math.abs((now - old) / sigma);
     const part = Math.abs((now - old) / old);
-    if (sigma > 0 && !(ratio <= Math.abs(bySigma?.sigmas ?? -1))) {
+    if (sigma > 0 && (!bySigma || ratio > Math.abs(bySigma.sigmas!))) {
       bySigma = { row, before: old, after: now, ...changeOf(old, now, sigma) };
     }
-    if (old !== 0 && !(part <= Math.abs(byPart?.relative ?? -1))) {
+    if (old !== 0 && (!byPart || part > Math.abs(byPart.relative!))) {
       byPart = { row, before: old, after: now, ...changeOf(old, now, sigma > 0 ? sigma : undefined) };
     }
   }

@@ -146,6 +146,16 @@ describe("columns are matched", () => {
     for (const text of said) expect(text.length, text).toBeLessThanOrEqual(250);
   });
 
+  test("the largest change is told in sigmas and in per cent", () => {
+    const file = revisionOf({ Target: ["A", "B", "C"], "Mstar [solMass]": [1.05, 0.78, 0.4] });
+    // By hand: +0.05 / 0.1, -0.02 / 0.04 and -0.1 / 0.05 sigma; +5 %, -2.5 % and -20 %.
+    expect(planLines(plan(bookWith(masses), file))[1]).toBe(
+      '"Mstar [solMass]": 3 values change; at most -2 sigma ("C"), -20 % ("C").',
+    );
+    const { bySigma } = plan(bookWith(masses), revisionOf({ Target: ["A"], "Mstar [solMass]": [1.05] })).columns[0]!.largest; // biome-ignore format: one value
+    expect(bySigma!.sigmas).toBeCloseTo(0.5, 12);
+  });
+
   test("the lost uncertainty is not told where the revision has one, though it is the same", () => {
     const file = revisionOf({ Target: ["A"], "Mstar [solMass]": [2], "Mstar err [solMass]": [0.1] });
     expect(sentences(plan(bookWith(masses), file)).slice(1)).toEqual([]);

@@ -40,7 +40,11 @@ export function tableOfWorkbook({ book, notes }: Workbook, asked: string | undef
   };
 }
 
-function chosenSheet(book: Book, asked: string | undefined): { readonly sheet: number; readonly plan: TablePlan } {
+/** The sheet asked for by name or number, else the first that holds a table, and where the table lies in it. */
+export function chosenSheet(
+  book: Book,
+  asked: string | undefined,
+): { readonly sheet: number; readonly plan: TablePlan } {
   const names = book.sheets.map(({ name }) => name);
   const wanted = names.map((name, index) => asked === undefined || asked === name || asked === String(index + 1));
   for (const [sheet, isWanted] of wanted.entries()) {

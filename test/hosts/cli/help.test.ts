@@ -7,7 +7,7 @@ import { definitions } from "../../../src/functions/definitions.js";
 import { barycell } from "./barycell.js";
 import { expectGolden } from "./golden.js";
 
-const commands = ["calc", "fill", "convert", "check", "recalc", "functions", "explain", "units", "demo"];
+const commands = ["calc", "fill", "convert", "check", "recalc", "revise", "functions", "explain", "units", "demo"];
 
 describe.concurrent("--help", () => {
   test("of barycell and of every command is the golden text", async () => {
