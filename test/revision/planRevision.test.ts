@@ -2,9 +2,12 @@ import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import type { Cell } from "../../src/call/cell.js";
 import { cellAt } from "../../src/call/column.js";
+import { ownFunctions } from "../../src/files/xlsx/ownFunctions.js";
 import { planLines } from "../../src/revision/planLines.js";
 import { cellOf } from "../../src/sheet/book/cellOf.js";
 import { formulaOf } from "../../src/sheet/book/formulaOf.js";
+import { change } from "../../src/sheet/change.js";
+import { setCells } from "../../src/sheet/edit/setCells.js";
 import { changes } from "../../src/sheet/history/changes.js";
 import { presentBook, record, startHistory, undo } from "../../src/sheet/history/history.js";
 import { at } from "../sheet/grid.js";
@@ -161,7 +164,19 @@ describe("columns are matched", () => {
     expect(sentences(plan(bookWith(masses), file)).slice(1)).toEqual([]);
   });
 
-  test("cells with formulas stay; blanks erase where asked", () => {
+  test("cells with formulas among the typed ones stay", () => {
+    const typed = bookWith({ Target: ["A", "B", "C"], "Mstar [solMass]": [1, 2, 3] });
+    const book = change(typed, [setCells(at("B3"), [[{ formula: "=B2*2" }]])], ownFunctions);
+    const file = revisionOf({ Target: ["A", "B", "C"], "Mstar [solMass]": [5, 6, 7] });
+    const after = revised(book, file);
+    expect(["B2", "B3", "B4"].map((address) => cellOf(after, at(address)))).toEqual([5, 10, 7]);
+    expect(formulaOf(after, at("B3"))).toBe("=B2*2");
+    expect(sentences(plan(book, file))).toEqual([
+      '"Mstar [solMass]": 1 cell holds a formula and was left as it is, first "B".',
+    ]);
+  });
+
+  test("blanks erase where asked", () => {
     const book = bookWith({ Target: ["A", "B", "C"], "Mstar [solMass]": [1, 2, 3] });
     const file = revisionOf({ Target: ["A", "B", "C"], "Mstar [solMass]": [5, null, 7] });
     const after = revised(book, file, { erases: true });
@@ -201,5 +216,23 @@ describe("applied", () => {
     const column = plan(before, file).columns[0]!.values;
     expect(cellAt(column.values, 1)).toBe(0.8);
     expect(column.spans).toEqual([{ from: 0, to: 3 }]);
+  });
+});
+
+describe("planted slips in 5,000 rows", () => {
+  test("are all told, and nothing else is", () => {
+    const names = Array.from({ length: 5000 }, (_, row) => `T${row}`);
+    const masses = names.map((_, row) => 0.1 + ((row * 7919) % 5000) / 1000);
+    const period = names.map((_, row) => 1 + ((row * 104729) % 5000) / 10);
+    const book = bookWith({ Target: names, "m [jupiterMass]": masses, "P [d]": period });
+    // 317.828 and 1047.566: IAU 2015 resolution B3; 365.25 d: the Julian year.
+    const slips: Readonly<Record<number, number>> = { 10: 317.828, 20: 317.828, 4000: 1 / 1047.566 };
+    const newer = masses.map((mass, row) => mass * (1 + (((row * 31) % 200) - 100) / 1000) * (slips[row] ?? 1));
+    const file = revisionOf({ Target: names, "m [jupiterMass]": newer, "P [d]": period.map((value, row) => (row === 77 ? value / 365.25 : value)) }); // biome-ignore format: one table
+    expect(sentences(plan(book, file))).toEqual([
+      expect.stringMatching(/^"m \[jupiterMass\]": 2 cells became about 317.8 times larger, which looks like earthMass in a column of jupiterMass; first "T10", /), // biome-ignore format: one value
+      expect.stringMatching(/^"m \[jupiterMass\]": 1 cell became about 1048 times smaller, which looks like solMass in a column of jupiterMass; first "T4000", /), // biome-ignore format: one value
+      expect.stringMatching(/^"P \[d\]": 1 cell became about 365.2 times smaller, which looks like yr in a column of d; first "T77", /), // biome-ignore format: one value
+    ]);
   });
 });

@@ -49,7 +49,10 @@ export function* appendColumns(
     let from = 0;
     for (; record < recordsEnd; record++) {
       const end = source.ends[record] as number;
-      const cells = replaced.filter(({ isReplaced }) => record >= firstRow && isReplaced(record - firstRow));
+      const cells =
+        replaced.length === 0
+          ? []
+          : replaced.filter(({ isReplaced }) => record >= firstRow && isReplaced(record - firstRow));
       const start = cells.length === 0 ? end : (source.starts[record] as number);
       text += block.slice(from, start) + body(record, block.slice(start, end), cells) + tail(record, cells.length > 0);
       from = end;
