@@ -34,11 +34,17 @@ export function eachChange(states: TwoStates, pair: ColumnPair<BookColumn>, visi
     for (let row = 0; row < before.length; row++) {
       if (isPacked && before.numbers[row] === after.numbers[row]) continue;
       const [was, is] = [cellAt(before, row), cellAt(after, row)];
-      if (!sameValue(was, is)) visit(from + row, was, is, sigma(row));
+      if (!sameValue(was, is) && !(pair.units && isRounding(was, is))) visit(from + row, was, is, sigma(row));
     }
   }
 }
 
+/** A value that was converted to another unit and back differs in its last bits. */
+function isRounding(was: Cell, is: Cell): boolean {
+  return typeof was === "number" && typeof is === "number" && Math.abs(is - was) <= 8 * Number.EPSILON * Math.abs(was);
+}
+
+/** Visits all cells of a column in both states. */
 export function eachPair(
   states: TwoStates,
   pair: ColumnPair<BookColumn>,

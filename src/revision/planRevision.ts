@@ -132,7 +132,7 @@ function reviseColumn(
   const sigmas =
     pair.sigmas.length === 0
       ? []
-      : pair.column.sigmas.map((_, which) => reviseSigmas(table, pair, which, revision, rows, erases));
+      : pair.column.sigmas.map((_, which) => reviseSigmas(table, pair, which, revision, values.taken, erases));
   const standing =
     sigmas[0]?.before ?? (pair.column.sigmas[0] === undefined ? undefined : tableCells(table, pair.column.sigmas[0]));
   const lost = lostSigmas(values, standing, sigmas[0]);

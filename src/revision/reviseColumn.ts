@@ -21,6 +21,8 @@ export interface NewCells {
   /** Rows of the table that are written anew; few unchanged rows may lie between changed ones. */
   readonly spans: readonly Span[];
   readonly counts: ReadonlyMap<CountedFinding, CellsFound>;
+  /** For each row of the table the row of the revision whose cell was taken, -1 where none was. */
+  readonly taken: Int32Array;
   /** Whether the revision has a number for a row of the table. */
   isGiven(row: number): boolean;
 }
@@ -49,7 +51,7 @@ export function reviseValues(
   return newCells(table, column, given, rows, { erases, accepts: acceptsValue(column, units?.to) });
 }
 
-/** A column of uncertainties of that column of values: `which` is its place among them. */
+/** Uncertainties of a column of values, in rows whose values were taken; `which` is their place beside it. */
 export function reviseSigmas(
   table: BookTable,
   pair: PairedColumn,
@@ -87,9 +89,11 @@ function newCells(table: BookTable, column: BookColumn, given: Column, rows: Int
   const holdsFormulas = hasFormulas(table, column);
   const changedRows: number[] = [];
   const barred: number[] = [];
+  const taken = rows.slice();
   for (let row = 0; row < table.rows; row++) {
     if (holdsFormulas && isComputed(table, column.column, row)) {
       barred.push(row);
+      taken[row] = -1;
       if (rows[row]! >= 0) count("formula kept", row, null);
       continue;
     }
@@ -102,6 +106,7 @@ function newCells(table: BookTable, column: BookColumn, given: Column, rows: Int
     }
     if (cell === "" || cell === null) {
       const was = cellAt(before, row);
+      if (!rules.erases) taken[row] = -1;
       if (was === null || was === "") continue;
       count(rules.erases ? "blank erased" : "blank kept", row, null);
       if (!rules.erases) continue;
@@ -110,6 +115,7 @@ function newCells(table: BookTable, column: BookColumn, given: Column, rows: Int
       const refused = rules.accepts(cell, cellAt(before, row));
       if (refused) {
         count(refused, row, cell);
+        taken[row] = -1;
         continue;
       }
     }
@@ -134,6 +140,7 @@ function newCells(table: BookTable, column: BookColumn, given: Column, rows: Int
     changed: changedRows.length,
     spans: spansOver(changedRows, barred),
     counts,
+    taken,
     isGiven,
   };
 }

@@ -159,6 +159,15 @@ describe("the parts of a change", () => {
     expect(entry!.parts).toEqual([{ input: "formula of d", part: 1 }, { input: "Set!A", part: 20 }]); // biome-ignore format: one value
   });
 
+  test("are none where only the unit of a header was changed", () => {
+    const made = ledger(withVisits, set(withVisits, "B1", "P [yr]"));
+    // Other numbers of years than of days: that is a change of K.
+    expect(made.columns.find(({ header }) => header === "K [m/s]")!.changed).toBe(3);
+    expect(ledgerEntries(made).every(({ movedBy }) => movedBy === "P [yr]")).toBe(true);
+    const shown = ledger(targets, set(targets, "G1", "K [km/s]"));
+    expect(shown.columns.find(({ header }) => header === "K [m/s]")!.changed).toBe(0);
+  });
+
   test("are left out, with the reason, where rows were put in another order", () => {
     const sorted = change(withVisits, [sortRows({ sheet: 0, top: 1, left: 0, bottom: 3, right: 8 }, [{ column: 0, descending: true }])], ownFunctions); // biome-ignore format: one value
     const made = ledger(withVisits, set(sorted, "C2", 0.4));

@@ -164,6 +164,12 @@ describe("columns are matched", () => {
     expect(sentences(plan(bookWith(masses), file)).slice(1)).toEqual([]);
   });
 
+  test("an uncertainty is taken only where its value is", () => {
+    const file = revisionOf({ Target: ["A", "B", "C"], "Mstar [solMass]": [-1, null, 0.6], "Mstar err [solMass]": [9, 9, 0.06] }); // biome-ignore format: one table
+    const after = revised(bookWith(masses), file);
+    expect(["C2", "C3", "C4"].map((address) => cellOf(after, at(address)))).toEqual([0.1, 0.04, 0.06]);
+  });
+
   test("cells with formulas among the typed ones stay", () => {
     const typed = bookWith({ Target: ["A", "B", "C"], "Mstar [solMass]": [1, 2, 3] });
     const book = change(typed, [setCells(at("B3"), [[{ formula: "=B2*2" }]])], ownFunctions);
@@ -232,7 +238,7 @@ describe("planted slips in 5,000 rows", () => {
     expect(sentences(plan(book, file))).toEqual([
       expect.stringMatching(/^"m \[jupiterMass\]": 2 cells became about 317.8 times larger, which looks like earthMass in a column of jupiterMass; first "T10", /), // biome-ignore format: one value
       expect.stringMatching(/^"m \[jupiterMass\]": 1 cell became about 1048 times smaller, which looks like solMass in a column of jupiterMass; first "T4000", /), // biome-ignore format: one value
-      expect.stringMatching(/^"P \[d\]": 1 cell became about 365.2 times smaller, which looks like yr in a column of d; first "T77", /), // biome-ignore format: one value
+      expect.stringMatching(/^"P \[d\]": 1 cell became about 365.3 times smaller, which looks like yr in a column of d; first "T77", /), // biome-ignore format: one value
     ]);
   });
 });

@@ -1,4 +1,6 @@
 import { createHash } from "node:crypto";
+import { readFileSync } from "node:fs";
+import { strFromU8, strToU8, unzipSync, zipSync } from "fflate";
 import { afterAll, describe, expect, test } from "vitest";
 import { ownFunctions } from "../../../src/files/xlsx/ownFunctions.js";
 import { readWorkbookAsStored } from "../../../src/files/xlsx/readWorkbook.js";
@@ -135,10 +137,34 @@ describe("revise, of a workbook", () => {
     const { code, out, note } = await barycell([...words, "--out", at("revised.xlsx")]);
     expect({ code, note }).toEqual({ code: 0, note: "" });
     expect(out).toContain("| B | twice \\[solMass\\] | 4 | 5 | +1 | +25 |  | Mstar \\[solMass\\] |  |");
-    const { readFileSync } = await import("node:fs");
     const { book: written } = await readWorkbookAsStored(readFileSync(at("revised.xlsx")));
+    const notes = await barycell([...words, ...k]);
+    expect(notes).toMatchObject({ code: 2, out: "" });
+    expect(notes.note).toContain(
+      "barycell revise: a workbook has its own formulas; --set goes with tables of other forms.",
+    );
     expect([valueAt(written, "C2"), valueAt(written, "C3"), formulaAt(written, "C3")]).toEqual([2, 5, "=B3*2"]);
   });
+});
+
+test("revise tells of a workbook whose values are not those of its formulas", async () => {
+  const parts = unzipSync(new Uint8Array(readFileSync(at("book.xlsx"))));
+  const name = "xl/worksheets/sheet1.xml";
+  const xml = strFromU8(parts[name] as Uint8Array).replace(/(<c r="C3"(?:(?!<c ).)*<v>)4</s, (_, cell) => `${cell}40<`);
+  folder.write("stale.xlsx", zipSync({ ...parts, [name]: strToU8(xml) }));
+  const { code, out, note } = await barycell([
+    "revise",
+    at("stale.xlsx"),
+    "--with",
+    at("masses.csv"),
+    "--key",
+    "Target",
+  ]);
+  expect({ code, note }).toEqual({
+    code: 0,
+    note: "1 value in the workbook was not what its formulas give; the ledger begins with what they give. barycell recalc lists them.\n",
+  });
+  expect(out).toContain("| B | twice \\[solMass\\] | 4 | 5 | +1 | +25 |");
 });
 
 describe("revise, where something is wrong", () => {
