@@ -7,7 +7,16 @@ export type HtmlToken =
   | { readonly kind: "text"; readonly text: string };
 
 /** Elements whose content is no text of the page. */
-const raw: ReadonlySet<string> = new Set(["script", "style", "title", "textarea", "template", "xml", "iframe", "noscript"]); // biome-ignore format: one list
+const raw: ReadonlySet<string> = new Set([
+  "script",
+  "style",
+  "title",
+  "textarea",
+  "template",
+  "xml",
+  "iframe",
+  "noscript",
+]);
 
 const tagStart = /<(\/?)([a-z][^\s/>]*)/iy;
 const attribute = /[\s/]*([^\s/>=][^\s/>=]*)(?:\s*=\s*(?:"([^"]*)"|'([^']*)'|([^\s>"'][^\s>]*)))?/y;

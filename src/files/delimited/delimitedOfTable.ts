@@ -6,6 +6,7 @@ import { one } from "../../units/unit.js";
 import { cellOfField } from "../cell/cellOfField.js";
 import { guardFormula } from "../cell/guardFormula.js";
 import type { DescribedTable } from "../table/describedTable.js";
+import { unitInBrackets } from "../table/unitInBrackets.js";
 import type { TableToWrite } from "./writeDelimited.js";
 
 /** Where the units of a table stand in delimited text; left out, where they stood in the table. */
@@ -47,7 +48,7 @@ function withUnits({ header, unitsRow }: DescribedTable, place: UnitsPlace): Hea
 
 function nameAndUnit(header: string, unitCell: string | undefined) {
   const { name, unit, problem } = recogniseColumn(header, unitCell);
-  const written = problem && (/\[([^[\]]*)\][^[\]]*$/.exec(header)?.[1] ?? unitCell);
+  const written = problem && (unitInBrackets(header) ?? unitCell);
   return { name, unit: unit ? (unit.text === one.text ? "" : unit.text) : (written?.trim() ?? "") };
 }
 

@@ -120,7 +120,7 @@ export class DelimitedReader {
       this.header = fields.map((field) => unguardFormula(field.trim()));
       this.widen(fields.length);
     } else if (this.source.records === 2 && this.holdsUnits(fields)) {
-      this.unitsRow = fields.map((field) => field.trim());
+      this.unitsRow = fields.map((field) => unguardFormula(field.trim()));
       this.checkWidth(fields.length, this.header.length);
     } else {
       this.addRow(fields, this.header.length);

@@ -2,6 +2,7 @@ import { ColumnBuilder } from "../cell/columnBuilder.js";
 import { isUnitsRow } from "../delimited/isUnitsRow.js";
 import { FileProblem } from "../fileProblem.js";
 import { checkColumnCount } from "../table/mostColumns.js";
+import { sameNames } from "../table/sameNames.js";
 import type { TableFile } from "../table/tableFile.js";
 import type { TableFinding } from "../table/tableFinding.js";
 import type { TableReader } from "../table/tableReader.js";
@@ -47,7 +48,7 @@ export class FixedWidthReader implements TableReader {
       rows: this.rows,
       notes: this.names.map((name) => ({ name, unit: undefined, description: undefined, ucd: undefined })),
       remarks: this.remarks,
-      findings: [...across, ...none],
+      findings: [...sameNames(this.names), ...across, ...none],
       delimited: undefined,
     };
   }

@@ -16,6 +16,25 @@ const longestHead = 1 << 20;
 /** Data lines that are followed by a rule were notes after all; so many are kept to tell. */
 const mostNotes = 2000;
 
+/** How the text between two rules begins where it is no data. */
+const noteLike =
+  /^\s*(?:(?:global|general|table)\s+)?(?:notes?|remarks?|references?|comments?|acknowledge\w*|history|description)\b/i;
+
+/** What was read as data between two rules. */
+interface Section {
+  readonly rows: number;
+  readonly columns: DescribedColumn[];
+  readonly beyond: (Beyond | undefined)[];
+  readonly outside: Outside | undefined;
+  readonly lines: readonly string[];
+}
+
+interface Outside {
+  count: number;
+  readonly line: number;
+  readonly text: string;
+}
+
 interface Beyond {
   count: number;
   readonly row: number;
@@ -39,9 +58,10 @@ export class MachineReadableReader implements TableReader {
   private part: "titles" | "names" | "entries" | "data" = "titles";
   private length = 0;
   private line = 0;
-  private outside: { count: number; readonly line: number; readonly text: string } | undefined;
+  private outside: Outside | undefined;
   private descriptions = 0;
   private since: string[] = [];
+  private before: Section | undefined;
 
   push(text: string): void {
     this.lines.push(text, (line) => this.take(line));
@@ -51,6 +71,7 @@ export class MachineReadableReader implements TableReader {
     this.lines.end((line) => this.take(line));
     if (!this.described) throw problem("its byte-by-byte description does not end with a rule of dashes");
     if (this.descriptions > 1) throw severalFiles(this.descriptions);
+    this.settleData();
     const { findings, ...parts } = describedColumns(this.columns);
     const titles = this.titles.map((line) => line.trim()).filter((line) => line !== "" && !rule.test(line));
     const title = titles.find((line) => /^Title:/i.test(line))?.replace(/^Title:\s*/i, "");
@@ -112,9 +133,7 @@ export class MachineReadableReader implements TableReader {
 
   private takeData(text: string): void {
     if (rule.test(text)) {
-      this.notes.push(...this.since);
-      this.since = [];
-      this.begin();
+      this.endSection();
       return;
     }
     if (this.since.length < mostNotes) this.since.push(text);
@@ -133,6 +152,29 @@ export class MachineReadableReader implements TableReader {
       this.outside ??= { count: 0, line: this.line, text: text.slice(end).trim() };
       this.outside.count++;
     }
+  }
+
+  /** A rule says that what stood above it were notes, unless nothing follows: then it only closes the data. */
+  private endSection(): void {
+    const { rows, columns, beyond, outside, since } = this;
+    const first = since.find((line) => line.trim() !== "");
+    if (first !== undefined && !noteLike.test(first)) this.before = { rows, columns, beyond, outside, lines: since };
+    else this.notes.push(...since);
+    this.since = [];
+    this.begin();
+  }
+
+  private settleData(): void {
+    const { before } = this;
+    if (!before) return;
+    if (this.rows > 0) this.notes.push(...before.lines);
+    else
+      Object.assign(this, {
+        rows: before.rows,
+        columns: before.columns,
+        beyond: before.beyond,
+        outside: before.outside,
+      });
   }
 
   private checkLimits(index: number, field: string): void {

@@ -1,6 +1,7 @@
 import type { Column } from "../../call/column.js";
 import type { FieldColumn } from "./fieldColumn.js";
 import { headerKeepsUnit, headerOfField } from "./headerOfField.js";
+import { sameNames } from "./sameNames.js";
 import type { ColumnNotes } from "./tableFile.js";
 import type { TableFinding } from "./tableFinding.js";
 
@@ -30,12 +31,4 @@ export function describedColumns(described: readonly DescribedColumn[]): Describ
     notes,
     findings: [...sameNames(header), ...unitsAside],
   };
-}
-
-function sameNames(header: readonly string[]): TableFinding[] {
-  const places = new Map<string, number[]>();
-  for (const [column, name] of header.entries()) places.set(name, [...(places.get(name) ?? []), column]);
-  return [...places]
-    .filter(([, columns]) => columns.length > 1)
-    .map(([name, columns]) => ({ kind: "duplicate-header", header: name, columns }));
 }

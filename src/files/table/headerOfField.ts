@@ -1,4 +1,5 @@
 import { recogniseColumn } from "../../table/recogniseColumn.js";
+import { isErrorUcd } from "../../table/ucds.js";
 import { isProblem } from "../../units/problem.js";
 import { readHeader } from "../../units/readHeader.js";
 import { readUnit } from "../../units/readUnit.js";
@@ -26,7 +27,7 @@ export function headerKeepsUnit(header: string, { unit = "" }: ColumnNotes): boo
 }
 
 function sigmaWord(name: string, ucd: string): string {
-  const error = /(?:^|;)\s*stat\.error(?:\.(min|max))?/i.exec(ucd);
-  if (!error || recogniseColumn(name).isUncertainty) return "";
-  return error[1] === undefined ? " sigma" : error[1].toLowerCase() === "max" ? " sigma+" : " sigma-";
+  if (!isErrorUcd(ucd) || recogniseColumn(name).isUncertainty) return "";
+  const side = /stat\.error\.(min|max)\b/i.exec(ucd)?.[1]?.toLowerCase();
+  return side === undefined ? " sigma" : side === "max" ? " sigma+" : " sigma-";
 }

@@ -6,6 +6,7 @@ import { findTable, nearCells } from "../../sheet/view/findTable.js";
 import type { TablePlan } from "../../table/tableOf.js";
 import { readHeader } from "../../units/readHeader.js";
 import { FileProblem } from "../fileProblem.js";
+import { sameNames } from "./sameNames.js";
 import type { TableFile } from "./tableFile.js";
 import type { TableFinding } from "./tableFinding.js";
 
@@ -35,7 +36,7 @@ export function tableOfWorkbook({ book, notes }: Workbook, asked: string | undef
       ucd: undefined,
     })),
     remarks: [...above(book, sheet, plan.headerRow), ...notes],
-    findings: [...several, ...(rows === 0 ? [{ kind: "no-rows" } as const] : [])],
+    findings: [...several, ...sameNames(header), ...(rows === 0 ? [{ kind: "no-rows" } as const] : [])],
     delimited: undefined,
   };
 }

@@ -5,6 +5,7 @@ import { ucdOfQuantity } from "../../table/ucds.js";
 import { one, type Unit } from "../../units/unit.js";
 import type { DescribedTable } from "./describedTable.js";
 import { headerOfField } from "./headerOfField.js";
+import { unitInBrackets } from "./unitInBrackets.js";
 
 /** What the cells of a column are written as: one type a column, and blanks. */
 export type WrittenType = "double" | "integer" | "logical" | "text";
@@ -67,10 +68,6 @@ function partsOf({ header, unitsRow, notes }: DescribedTable, index: number) {
     description: own?.description,
     ucd: own?.ucd ?? (quantity && ucdOfQuantity(quantity, isUncertainty)),
   };
-}
-
-function unitInBrackets(header: string): string | undefined {
-  return /\[((?:[^[\]]|\[[^[\]]*\])*)\][^[\]]*$/.exec(header)?.[1]?.trim();
 }
 
 function freeName(wanted: string, taken: Set<string>): string {

@@ -16,6 +16,7 @@ import { readSharedStrings } from "./read/readSharedStrings.js";
 import type { SheetReading } from "./read/readSheet.js";
 import { readSheet } from "./read/readSheet.js";
 import { readStyles } from "./read/readStyles.js";
+import { readTables } from "./read/readTables.js";
 import { readWorkbookPart } from "./read/readWorkbookPart.js";
 import { refuseOtherKinds } from "./read/refuseOtherKinds.js";
 import type { Steps } from "./steps.js";
@@ -44,7 +45,13 @@ function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calcul
   const directory = openZip(bytes);
   const parts = openParts(directory);
   const workbookEntry = findWorkbookPart(parts, directory);
-  const { sheets, names: nameEntries, since1904, recalculates } = readWorkbookPart(parts, workbookEntry);
+  const {
+    sheets,
+    names: nameEntries,
+    since1904,
+    recalculates,
+    refersElsewhere,
+  } = readWorkbookPart(parts, workbookEntry);
   const relationships = parts.relationshipsOf(workbookEntry.name);
   const partOf = (test: (each: (typeof relationships)[number]) => boolean) => {
     const target = relationships.find(test)?.target;
@@ -58,7 +65,7 @@ function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calcul
       throw damaged(`the sheet "${name.slice(0, 31)}" is missing`);
     }
     const type = relationships.find((each) => each.id === id)?.type;
-    return { entry, isChart: type !== "worksheet" };
+    return { entry, name, isChart: type !== "worksheet" };
   });
 
   const total = entries.reduce((sum, { entry }) => sum + entry.size, stringsEntry?.size ?? 0);
@@ -71,20 +78,30 @@ function* readSteps(bytes: Uint8Array, functions: Functions, calculating: Calcul
     }
   };
   const notes: string[] = [];
-  const names = readNames(nameEntries, functions, notes);
+  const tables = new Map(
+    entries.flatMap(({ entry, name }) => readTables(parts, entry, name).map((each) => [each.name.toUpperCase(), each])),
+  );
+  const names = readNames(nameEntries, functions, tables, notes);
   const strings = stringsEntry === undefined ? [] : yield* told(readSharedStrings(stringsEntry, parts.unpacked));
   const styles = stylesEntry === undefined ? [] : readStyles(parts, stylesEntry);
-  const reading = { functions, names, strings, styles, since1904, budget: { left: mostCells } };
+  const reading = { functions, names, tables, strings, styles, since1904, budget: { left: mostCells } };
   let book: Book = { names, sheets: [] };
   const why = explainer(() => book);
   const readings: (SheetReading | undefined)[] = [];
-  for (const [sheet, { entry, isChart }] of entries.entries()) {
+  for (const [sheet, { entry, name, isChart }] of entries.entries()) {
     const explain = (row: number, column: number) => why({ sheet, row, column });
-    readings.push(isChart ? undefined : yield* told(readSheet(entry, parts.unpacked, reading, explain)));
+    readings.push(
+      isChart ? undefined : yield* told(readSheet(entry, parts.unpacked, { ...reading, sheet: name }, explain)),
+    );
   }
   book = { names, sheets: sheets.map(({ name }, sheet) => ({ name, columns: readings[sheet]?.columns ?? [] })) };
+  if (refersElsewhere) {
+    notes.push("Formulas refer to other files, which are not read; they keep the values that they had.");
+  }
   notes.push(...notesOf(sheets, readings));
-  const presentations = sheets.map(({ hidden }, sheet): SheetPresentation => ({ ...plainSheet, ...readings[sheet]?.presentation, hidden })); // biome-ignore format: one value
+  const presentations = sheets.map(
+    ({ hidden }, sheet): SheetPresentation => ({ ...plainSheet, ...readings[sheet]?.presentation, hidden }),
+  );
   if (calculating === "as needed") {
     book = yield* calculate(book, { changed: [], stale: recalculates ? allFormulas(book) : withoutValue(readings) });
   }

@@ -31,7 +31,6 @@ export function changeLines(book: Book, changes: Iterable<ChangedCell>): { lines
       before.column === change.column &&
       before.key === change.key
     ) {
-      // biome-ignore format: one condition
       current.last = change;
       current.count++;
       current.largest = weightOf(change) > weightOf(current.largest) ? change : current.largest;

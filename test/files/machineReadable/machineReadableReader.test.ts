@@ -13,7 +13,7 @@ Byte-by-byte Description of file: datafile1.txt
    Bytes Format Units    Label   Explanations
 --------------------------------------------------------------------------------
    1-  6 A6     ---      Name    Name of the star
-   8- 13 F6.3   d        Per     ?=-9.999 Orbital period
+   8- 13 F6.3   d        Per     [0/99]?=-9.999 Orbital period
   15- 18 F4.2   jovMass  Mass    ?=--- Minimum mass, as
                                    fitted (1)
   20- 23 F4.2   jovMass  e_Mass  ? Uncertainty in Mass
@@ -61,6 +61,18 @@ describe("a machine-readable table", () => {
   test("values beyond the limits that it states are told", () => {
     expect(sentencesOf(file)).toEqual([
       'Column "Flag" has 1 value beyond the limits [0/3] that the file states, first 7 in row 2.',
+    ]);
+  });
+
+  test("a rule below the data closes them", () => {
+    const closed = read(`${table}${"-".repeat(80)}\n`);
+    expect(rowsOf(closed)).toEqual(rowsOf(file));
+    expect([closed.remarks, sentencesOf(closed)]).toEqual([file.remarks, sentencesOf(file)]);
+    expect(rowsOf(read(table.replace(/^007[\s\S]*/m, "")))).toEqual([]);
+    const noted = read(table.replace("Note (1)", "(1)"));
+    expect([rowsOf(noted), noted.remarks]).toEqual([
+      rowsOf(file),
+      ["Authors: Nobody A., Noone B.", "(1): From the fit of all data."],
     ]);
   });
 

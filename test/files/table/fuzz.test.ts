@@ -5,7 +5,7 @@ import { FileProblem } from "../../../src/files/fileProblem.js";
 import type { TableFile } from "../../../src/files/table/tableFile.js";
 import { sentenceOfTableFinding } from "../../../src/files/table/tableFinding.js";
 import { writeVotable } from "../../../src/files/votable/writeVotable.js";
-import { read } from "./read.js";
+import { read, readPieces } from "./read.js";
 
 const table = {
   header: ["Name", "P [d]", "n", "ok", "t [BJD_TDB]"],
@@ -158,6 +158,19 @@ test.each(Object.entries(files))("a damaged file is a table or is refused in a s
   }
   expect(refused).toBeGreaterThan(0);
   expect(refused).toBeLessThan(mutants);
+});
+
+test.each(Object.entries(files))("a table does not depend on how its bytes were cut: %s", (_, text) => {
+  const bytes = new TextEncoder().encode(text);
+  const { delimited: whole, ...table } = read(bytes);
+  for (const size of [1, 2, 5, 33]) {
+    const pieces = Array.from({ length: Math.ceil(bytes.length / size) }, (_, index) =>
+      bytes.subarray(index * size, (index + 1) * size),
+    );
+    const { delimited, ...cut } = readPieces(pieces);
+    expect(cut).toEqual(table);
+    expect(delimited?.source.blocks.join("")).toBe(whole?.source.blocks.join(""));
+  }
 });
 
 test("a hundred thousand columns, elements or brackets end in a sentence too", () => {

@@ -1,7 +1,12 @@
 import { describe, expect, test } from "vitest";
+import type { Cell } from "../../../src/call/cell.js";
+import { blockOf, columnOf } from "../../../src/call/column.js";
 import { readTableFile } from "../../../src/files/table/readTableFile.js";
 import { sentenceOfTableFinding, type TableFinding } from "../../../src/files/table/tableFinding.js";
-import { read, readPieces, refusal, rowsOf } from "./read.js";
+import { workbookOfTable } from "../../../src/files/table/workbookOfTable.js";
+import { writeWorkbook } from "../../../src/files/xlsx/writeWorkbook.js";
+import { bookOf } from "../../../src/sheet/book/bookOf.js";
+import { read, readPieces, refusal, rowsOf, sentencesOf } from "./read.js";
 
 describe("the kind of a file is found from its content", () => {
   test.each([
@@ -115,5 +120,58 @@ describe("more columns than a table may have", () => {
     ["IPAC", `${"|a".repeat(many.length)}|\n${"|i".repeat(many.length)}|\n1\n`],
   ])("are refused: %s", (_, text) => {
     expect(refusal(text)).toBe("The file describes 16,385 columns, more than the 16,384 a table may have.");
+  });
+});
+
+describe("a workbook comes through the same door", () => {
+  const sheet = (name: string, rows: Cell[][]) => ({ name, columns: blockOf(rows).columns });
+  const bytesOf = (...sheets: ReturnType<typeof sheet>[]) =>
+    writeWorkbook({ book: bookOf(sheets), sheets: [], notes: [] });
+  async function* pieces(bytes: Uint8Array, size: number) {
+    for (let at = 0; at < bytes.length; at += size) yield bytes.subarray(at, at + size);
+  }
+  const planets = sheet("Planets", [["Invented", null, null], ["Name", "P", "e"], [null, "d", null], ["007", 4.25, 0], ["x", null, 0.5]]); // biome-ignore format: a row a line
+  const stars = sheet("Stars", [
+    ["Star", "Mass [solMass]"],
+    ["y", 1.5],
+  ]);
+
+  test("the first sheet with a table, or the one asked for", async () => {
+    const bytes = await bytesOf(sheet("Empty", [[null]]), planets, stars);
+    for (const size of [1, 5, 100_000]) {
+      const table = await readTableFile(pieces(bytes, size));
+      expect([table.format, table.name, table.header, table.unitsRow, table.remarks]).toEqual([
+        "workbook",
+        "Planets",
+        ["Name", "P", "e"],
+        ["", "d", ""],
+        ["Invented"],
+      ]);
+      expect(rowsOf(table)).toEqual([["007", 4.25, 0], ["x", null, 0.5]]); // biome-ignore format: a row a line
+      expect(sentencesOf(table)).toEqual([
+        'The file holds 2 tables; "Planets" was read. The others are "Stars"; name one to read it instead.',
+      ]);
+    }
+    for (const table of ["Stars", "3"]) {
+      expect((await readTableFile(pieces(bytes, 1000), { table })).header).toEqual(["Star", "Mass [solMass]"]);
+    }
+    await expect(readTableFile(pieces(bytes, 1000), { table: "Moons" })).rejects.toThrow(
+      'The workbook has no sheet "Moons"; it has "Empty", "Planets", "Stars".',
+    );
+    await expect(readTableFile(pieces(bytes, 1000), { table: "Empty" })).rejects.toThrow(
+      "The workbook's sheet has no row of column names; put one above the data.",
+    );
+  });
+
+  test("what is written to one reads back", async () => {
+    const table = {
+      header: ["a", "b"],
+      unitsRow: ["d", ""],
+      columns: [columnOf([1, null, -0]), columnOf(["=1+1", true, null])],
+      name: "x/y [z]",
+    };
+    const again = await readTableFile(pieces(await writeWorkbook(workbookOfTable(table)), 1000));
+    expect([again.name, again.header, again.unitsRow]).toEqual(["x y  z", ["a", "b"], ["d", ""]]);
+    expect(rowsOf(again)).toEqual(rowsOf({ rows: 3, columns: table.columns }));
   });
 });

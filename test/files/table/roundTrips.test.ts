@@ -7,6 +7,7 @@ import { guardFormula, unguardFormula } from "../../../src/files/cell/guardFormu
 import { delimitedOfTable } from "../../../src/files/delimited/delimitedOfTable.js";
 import { writeDelimited } from "../../../src/files/delimited/writeDelimited.js";
 import { writeEcsv } from "../../../src/files/ecsv/writeEcsv.js";
+import { yamlText } from "../../../src/files/ecsv/yamlText.js";
 import type { DescribedTable } from "../../../src/files/table/describedTable.js";
 import { writtenTable } from "../../../src/files/table/writtenColumn.js";
 import { writeVotable } from "../../../src/files/votable/writeVotable.js";
@@ -144,6 +145,20 @@ describe("what a described form cannot hold is told", () => {
     ],
   ])("by delimited text: %s", (_, described, sentence) => {
     expect(delimitedOfTable(described).losses).toEqual([sentence]);
+  });
+
+  test("a negative zero makes whole numbers doubles, and stays", () => {
+    const signed = { header: ["x"], columns: [columnOf([1, -0])] };
+    for (const pieces of [writeEcsv(signed), writeVotable(signed), writeVotable(signed, "BINARY2")]) {
+      expect(rowsOf(read([...pieces].join("")))).toEqual([[1], [-0]]);
+    }
+  });
+
+  test("what YAML takes for a line break or a mark is escaped in its texts", () => {
+    // YAML 1.1, sections 5.1 and 5.4: characters that are not printable, line breaks, the byte order mark.
+    expect(yamlText('a"\\\n\u007f\u0085\u2028\u2029\ufeff\u{1d6fc}')).toBe(
+      '"a\\"\\\\\\n\\u007f\\u0085\\u2028\\u2029\\ufeff\u{1d6fc}"',
+    );
   });
 
   test("infinities keep a column of numbers one", () => {

@@ -4,6 +4,7 @@ import { readWorkbook, readWorkbookAsStored } from "../../../src/files/xlsx/read
 import { change } from "../../../src/sheet/change.js";
 import type { Workbook } from "../../../src/sheet/display/workbook.js";
 import { recalculate } from "../../../src/sheet/edit/recalculate.js";
+import { setCells } from "../../../src/sheet/edit/setCells.js";
 import { formulaAt, messageAt, valueAt } from "../../sheet/grid.js";
 import type { Parts } from "./packed.js";
 import { packed } from "./packed.js";
@@ -19,6 +20,13 @@ describe("values", () => {
     ["17 digits", '<c r="A1"><v>0.30000000000000004</v></c>', 0.1 + 0.2],
     ["a small number", '<c r="A1" t="n"><v>1E-300</v></c>', 1e-300],
     ["an identifier stored as a number", '<c r="A1"><v>1234567890123456789</v></c>', "1234567890123456789"],
+    ["a long integer that is a double", '<c r="A1"><v>-9129314004952892</v></c>', -9129314004952892],
+    [
+      "a long integer in the shortest form of its double",
+      '<c r="A1"><v>1234567890123456800</v></c>',
+      1234567890123456800,
+    ],
+    ["a number that begins with zeros", '<c r="A1"><v>007</v></c>', "007"],
     ["a shared text in several fonts", '<c r="A1" t="s"><v>1</v></c>', "K2-18 b"],
     ["a shared text with blanks", '<c r="A1" t="s"><v>0</v></c>', " a\nb "],
     ["an inline text", '<c r="A1" t="inlineStr"><is><t>x</t></is></c>', "x"],
@@ -112,7 +120,9 @@ describe("formulas", () => {
     const data = row(
       '<c r="A1"><v>2</v></c><c r="B1"><f>A1*3</f><v>0</v></c><c r="C1"><f>[1]Sheet1!A1</f><v>8</v></c>',
     );
-    const { book } = await read({ data, rest: '<calcPr fullCalcOnLoad="1"/>' });
+    const rest = '<externalReferences><externalReference/></externalReferences><calcPr fullCalcOnLoad="1"/>';
+    const { book, notes } = await read({ data, rest });
+    expect(notes).toEqual(["Formulas refer to other files, which are not read; they keep the values that they had."]);
     expect(["B1", "C1"].map((each) => valueAt(book, each))).toEqual([6, 8]);
   });
 
@@ -124,6 +134,14 @@ describe("formulas", () => {
     expect(["A1", "B1", "C1", "D1", "E1"].map((each) => valueAt(again, each))).toEqual([1, 2, "#VALUE!", 1, 2]);
   });
 
+  test("that found no room are known to wait for it", async () => {
+    const data = row('<c r="A1" t="e" cm="1"><f t="array" ref="A1">_xlfn.SEQUENCE(1,2)</f><v>#VALUE!</v></c><c r="B1"><v>7</v></c>'); // biome-ignore format: one row
+    const { book } = await read({ data });
+    expect(messageAt(book, "A1")).toMatch(/B1 is in the way/);
+    const cleared = change(book, [setCells({ sheet: 0, row: 0, column: 1 }, [[null]])], ownFunctions);
+    expect(["A1", "B1"].map((each) => valueAt(cleared, each))).toEqual([1, 2]);
+  });
+
   test("with an error say why when they are asked", async () => {
     const data = row('<c r="A1" t="e"><f>BARY.INTO(2,,"h")</f><v>#VALUE!</v></c><c r="B1" t="e"><f>A1*2</f><v>#VALUE!</v></c><c r="C1" t="e"><v>#N/A</v></c>'); // biome-ignore format: one row
     const book = await stored({ data });
@@ -132,6 +150,32 @@ describe("formulas", () => {
     expect(messageAt(book, "C1")).toBe(
       "the file holds #N/A in this cell; calculate it anew, or type what belongs here",
     );
+  });
+});
+
+// Tables: ECMA-376 part 1, section 18.5.1; references to them: section 18.17.6.6 and common practice.
+describe("references to tables", () => {
+  const table = (name: string, area: string, extra = "") => `<table name="x" displayName="${name}" ref="${area}"${extra}><tableColumns count="3"><tableColumn name="P [d]"/><tableColumn name="K"/><tableColumn name="e_x000a_f"/></tableColumns></table>`; // biome-ignore format: one part
+  const parts = {
+    "xl/worksheets/_rels/sheet1.xml.rels": `<Relationships><Relationship Id="a" Type="x/table" Target="../tables/table1.xml"/></Relationships>`,
+    "xl/tables/table1.xml": table("Planets", "B2:D9", ' totalsRowCount="1"'),
+  };
+
+  test.each([
+    ["SUM(Planets[K])", "=SUM($C$3:$C$8)"],
+    ["Planets[[#This Row],[P '[d']]]*2", "=$B5*2"],
+    ["SUM(Planets[[#This Row],[P '[d']]:[K]])", "=SUM($B5:$C5)"],
+    ["SUM(Planets[])+SUM(planets)", "=SUM($B$3:$D$8)+SUM($B$3:$D$8)"],
+    ["COUNTA(Planets[#All])", "=COUNTA($B$2:$D$9)"],
+    ["COUNTA(Planets[#Headers])", "=COUNTA($B$2:$D$2)"],
+    ["Planets[[#Totals],[K]]", "=$C$9"],
+    ["SUM(Planets[gone])", "=SUM(#REF!)"],
+    ['Others[K]&amp;"Planets[K]"', '=Others[K]&"Planets[K]"'],
+  ])("%s", async (text, formula) => {
+    const data = row(`<c r="F5"><f>${text}</f><v>1</v></c>`, 5) + row(`<c r="F6"><f>${text}</f><v>1</v></c>`, 6);
+    const book = await stored({ data, parts });
+    expect(formulaAt(book, "F5")).toBe(formula);
+    expect(formulaAt(book, "F6")).toBe(formula.replace(/(\$[A-Z])5/g, "$16"));
   });
 });
 
@@ -178,12 +222,12 @@ describe("how cells are shown", () => {
 
   test("widths, hidden columns, frozen rows; what is not kept is said", async () => {
     const head = '<sheetViews><sheetView><pane xSplit="1" ySplit="2" state="frozen"/></sheetView></sheetViews><cols><col min="1" max="2" width="12.5" customWidth="1"/><col min="3" max="16384" hidden="1" width="9"/></cols>'; // biome-ignore format: one part
-    const tail = '<mergeCells><mergeCell ref="A1:B1"/></mergeCells><conditionalFormatting><cfRule type="x"/></conditionalFormatting><drawing/>'; // biome-ignore format: one part
+    const tail = '<mergeCells><mergeCell ref="A1:B1"/></mergeCells><conditionalFormatting><cfRule type="x"/></conditionalFormatting><drawing/><tableParts><tablePart/></tableParts>'; // biome-ignore format: one part
     const { sheets, notes } = await read({ head, tail, data: row('<c r="C1"><v>1</v></c>') });
     const column = { width: 12.5, hidden: false, formats: [] };
     expect(sheets).toEqual([{ hidden: false, frozenRows: 2, frozenColumns: 1, columns: [column, column, { width: 9, hidden: true, formats: [] }] }]); // biome-ignore format: one value
     expect(notes).toEqual([
-      "The sheet Targets has merged cells (their first cell keeps the value), conditional formats and charts and pictures, which are not kept.",
+      "The sheet Targets has merged cells (their first cell keeps the value), conditional formats, charts and pictures and tables (their cells and formulas stay), which are not kept.",
     ]);
   });
 });

@@ -2,7 +2,8 @@ import fc from "fast-check";
 import { SaxesParser } from "saxes";
 import { describe, expect, test } from "vitest";
 import { FileProblem } from "../../../src/files/fileProblem.js";
-import { attributesOf, xmlScanner } from "../../../src/files/xlsx/xml/xmlScanner.js";
+import { attributesOf } from "../../../src/files/xlsx/xml/attributes.js";
+import { xmlScanner } from "../../../src/files/xlsx/xml/xmlScanner.js";
 import { decodeText, escapeAttribute, escapeText } from "../../../src/files/xlsx/xml/xmlText.js";
 
 function scanned(pieces: readonly string[]): string[] {

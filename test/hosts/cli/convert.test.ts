@@ -117,4 +117,9 @@ describe("fill reads and writes the other forms too", () => {
     const { out } = await barycell(["fill", "in.csv", ...set], { folder: folder.path });
     expect(out.split("\n")[1]).toBe('"=1+1",4.25,0.47,007,102');
   });
+
+  test("a text that could be taken for a formula has an apostrophe in a column that is added", async () => {
+    const { out } = await barycell(["fill", "in.csv", "--set", "T", '="="&D2'], { folder: folder.path });
+    expect(out.split("\n")[1]).toBe('"=1+1",4.25,0.47,007,\'=007');
+  });
 });

@@ -6,11 +6,16 @@ import type { Functions } from "../../../sheet/formula/functions.js";
 import { readFormula } from "../../../sheet/formula/readFormula.js";
 import { plainFormula } from "./plainFormula.js";
 import { isRange, surveyArrays } from "./surveyArrays.js";
+import type { FileTables } from "./tableReferences.js";
+import { withoutTables } from "./tableReferences.js";
 
 /** What formulas of a file are read with. */
 export interface FormulaReading {
   readonly functions: Functions;
   readonly names: readonly DefinedName[];
+  readonly tables: FileTables;
+  /** The sheet of the formulas. */
+  readonly sheet: string;
 }
 
 /**
@@ -24,7 +29,8 @@ export function fileFormula(
   isArray: boolean,
   reading: FormulaReading,
 ): Formula {
-  const formula = readFormula(plainFormula(stored), row, column, reading.functions);
+  const text = withoutTables(plainFormula(stored), row, reading.sheet, reading.tables);
+  const formula = readFormula(text, row, column, reading.functions);
   if (isArray || formula.problem !== undefined) {
     return formula;
   }

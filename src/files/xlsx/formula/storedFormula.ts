@@ -41,7 +41,8 @@ function kindOf(formula: Formula, book: Book): "formula" | "text" | "value" {
     return "value";
   }
   // An unknown name or function, and parts that are not supported here, are formulas all the same.
-  const isReadable = problem.code === "#NAME?" ? / is not a known /.test(problem.topic) : / not supported$/.test(problem.topic); // biome-ignore format: one choice
+  const isReadable =
+    problem.code === "#NAME?" ? / is not a known /.test(problem.topic) : / not supported$/.test(problem.topic);
   return isReadable ? "formula" : "text";
 }
 

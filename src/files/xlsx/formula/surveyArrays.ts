@@ -81,7 +81,10 @@ function withinOperator(taken: Taking): Taking {
 }
 
 export function isRange(reference: Reference | undefined): boolean {
-  return reference !== undefined && !(sameBound(reference.top, reference.bottom) && sameBound(reference.left, reference.right)); // biome-ignore format: one condition
+  return (
+    reference !== undefined &&
+    !(sameBound(reference.top, reference.bottom) && sameBound(reference.left, reference.right))
+  );
 }
 
 function sameBound(a: Bound, b: Bound): boolean {

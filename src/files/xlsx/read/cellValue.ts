@@ -27,7 +27,16 @@ export function numberOfText(text: string): number | string | undefined {
   if (trimmed !== text) {
     return numberOfText(trimmed);
   }
+  if (/^-?[1-9]\d*$/.test(text) && isHeld(text)) {
+    return Number(text);
+  }
   return /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i.test(text) ? text : undefined;
+}
+
+/** Whether a long integer is a double, digit by digit or in the shortest form that programs write doubles in. */
+function isHeld(text: string): boolean {
+  const value = Number(text);
+  return Number.isFinite(value) && (String(value) === text || BigInt(value) === BigInt(text));
 }
 
 /** An error that a file holds; `explain` finds out why, when somebody asks. */

@@ -11,6 +11,7 @@ const namesOfElements: readonly (readonly [element: string, name: string])[] = [
   ["legacyDrawing", "comments"],
   ["hyperlink", "links"],
   ["sheetProtection", "protection"],
+  ["tablePart", "tables (their cells and formulas stay)"],
 ];
 
 /** Sentences on what of the sheets is not kept. */

@@ -2,9 +2,9 @@ import { FileProblem } from "../../fileProblem.js";
 import type { ZipDirectory, ZipEntry } from "../../zip/openZip.js";
 import type { Unpacked } from "../../zip/unpack.js";
 import { damaged } from "../../zip/zipProblem.js";
+import { attributesOf } from "../xml/attributes.js";
 import { scanPart } from "../xml/scanPart.js";
 import type { XmlHandler } from "../xml/xmlScanner.js";
-import { attributesOf } from "../xml/xmlScanner.js";
 
 /** A line of a relationships part. */
 export interface Relationship {

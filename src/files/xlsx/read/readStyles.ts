@@ -4,7 +4,7 @@ import { general } from "../../../sheet/display/numberFormat.js";
 import type { ZipEntry } from "../../zip/openZip.js";
 import { builtInCode, codeOf, formatOfCode } from "../formatCode.js";
 import { stylePrefix } from "../styleName.js";
-import { attributesOf } from "../xml/xmlScanner.js";
+import { attributesOf } from "../xml/attributes.js";
 import { decodeText } from "../xml/xmlText.js";
 import type { Parts } from "./parts.js";
 

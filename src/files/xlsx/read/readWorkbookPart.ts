@@ -1,6 +1,6 @@
 import type { ZipEntry } from "../../zip/openZip.js";
 import { damaged } from "../../zip/zipProblem.js";
-import { attributesOf } from "../xml/xmlScanner.js";
+import { attributesOf } from "../xml/attributes.js";
 import { decodeText } from "../xml/xmlText.js";
 import type { Parts } from "./parts.js";
 
@@ -26,6 +26,8 @@ export interface WorkbookPart {
   readonly since1904: boolean;
   /** Whether what formulas gave is not to be relied on. */
   readonly recalculates: boolean;
+  /** Whether formulas refer to other files. */
+  readonly refersElsewhere: boolean;
 }
 
 export function isTrue(value: string | undefined): boolean {
@@ -37,6 +39,7 @@ export function readWorkbookPart(parts: Parts, entry: ZipEntry): WorkbookPart {
   const names: NameEntry[] = [];
   let since1904 = false;
   let recalculates = false;
+  let refersElsewhere = false;
   let current: { name: string; sheet: number | undefined } | undefined;
   let text = "";
   parts.scan(entry, {
@@ -50,6 +53,8 @@ export function readWorkbookPart(parts: Parts, entry: ZipEntry): WorkbookPart {
         since1904 = isTrue(attributes.get("date1904"));
       } else if (name === "calcPr") {
         recalculates = isTrue(attributes.get("fullCalcOnLoad"));
+      } else if (name === "externalReference") {
+        refersElsewhere = true;
       } else if (name === "definedName") {
         const sheet = attributes.get("localSheetId");
         current = {
@@ -70,7 +75,7 @@ export function readWorkbookPart(parts: Parts, entry: ZipEntry): WorkbookPart {
     },
   });
   refuseSheets(sheets);
-  return { sheets, names, since1904, recalculates };
+  return { sheets, names, since1904, recalculates, refersElsewhere };
 }
 
 function refuseSheets(sheets: readonly SheetEntry[]): void {

@@ -1,49 +1,23 @@
-import type { Cell } from "../../../call/cell.js";
 import { addressText } from "../../../sheet/book/address.js";
 import type { SheetColumn } from "../../../sheet/book/book.js";
 import { emptyColumn } from "../../../sheet/book/book.js";
 import type { Span } from "../../../sheet/book/spans.js";
 import type { Formula } from "../../../sheet/formula/formula.js";
 import { damaged } from "../../zip/zipProblem.js";
-import type { FormulaReading } from "../formula/fileFormula.js";
 import { fileFormula } from "../formula/fileFormula.js";
 import { decodeText } from "../xml/xmlText.js";
 import { readArea } from "./cellAddress.js";
-import type { CellBudget, CellsBuilder } from "./cellsBuilder.js";
+import type { CellReading, ExplainError, RawCell } from "./cellOfRaw.js";
+import { cellOfRaw } from "./cellOfRaw.js";
+import type { CellsBuilder } from "./cellsBuilder.js";
 import { cellsBuilder, spendCells } from "./cellsBuilder.js";
-import { daysFrom1900To1904, errorOfText, numberOfText, serialOfIso } from "./cellValue.js";
 import type { FormatsBuilder } from "./formatsBuilder.js";
 import { formatsBuilder } from "./formatsBuilder.js";
 import type { Filling } from "./placeFilled.js";
 import { placeFilled } from "./placeFilled.js";
-import type { CellStyle } from "./readStyles.js";
 import { usualStyle } from "./readStyles.js";
 import type { RunsBuilder } from "./runsBuilder.js";
 import { runsBuilder } from "./runsBuilder.js";
-
-/** A cell as it stands in the XML of a sheet. */
-export interface RawCell {
-  type: string;
-  style: number;
-  /** Undefined where there is none, which is not an empty one. */
-  value: string | undefined;
-  /** Undefined where there is none. */
-  formula: string | undefined;
-  formulaType: string;
-  formulaArea: string;
-  sharedIndex: string;
-}
-
-/** What the cells of all sheets of a file are read with. */
-export interface CellReading extends FormulaReading {
-  readonly strings: readonly string[];
-  readonly styles: readonly CellStyle[];
-  readonly since1904: boolean;
-  readonly budget: CellBudget;
-}
-
-/** Why a cell holds an error. */
-export type ExplainError = (row: number, column: number) => string | undefined;
 
 interface ColumnBuilder {
   readonly cells: CellsBuilder;
@@ -55,7 +29,7 @@ interface ColumnBuilder {
 export interface BuiltSheet {
   readonly columns: readonly SheetColumn[];
   readonly formats: ReadonlyMap<number, FormatsBuilder>;
-  /** Formulas without a value in the file, by column. */
+  /** Formulas whose value the file does not tell, or not all of it, by column. */
   readonly stale: ReadonlyMap<number, readonly Span[]>;
   readonly hasOtherFormulas: boolean;
 }
@@ -128,7 +102,7 @@ export function sheetBuilder(reading: CellReading, explain: ExplainError): Sheet
         cells.put(row, value);
         count++;
       }
-      if (hasFormula && raw.value === undefined) {
+      if (hasFormula && (raw.value === undefined || mayBeBlocked(raw))) {
         addStale(builder, row);
       }
       builder.formats.put(row, style);
@@ -160,6 +134,11 @@ export function sheetBuilder(reading: CellReading, explain: ExplainError): Sheet
   };
 }
 
+/** No file tells whether an array formula gave an error or found no room; only a calculation finds out. */
+function mayBeBlocked({ type, formulaType, formulaArea }: RawCell): boolean {
+  return type === "e" && formulaType === "array" && !formulaArea.includes(":");
+}
+
 function addStale({ stale }: ColumnBuilder, row: number): void {
   const last = stale.at(-1);
   if (last !== undefined && last.to === row) {
@@ -168,74 +147,3 @@ function addStale({ stale }: ColumnBuilder, row: number): void {
     stale.push({ from: row, to: row + 1 });
   }
 }
-
-function cellOfRaw(
-  raw: RawCell,
-  row: number,
-  column: number,
-  hasFormula: boolean,
-  style: CellStyle,
-  reading: CellReading,
-  explain: ExplainError,
-): Cell {
-  const { type, value } = raw;
-  if (value === undefined || (value === "" && type !== "str" && type !== "inlineStr")) {
-    return null;
-  }
-  const wrong = () =>
-    damaged(
-      `the cell ${addressText(row, column)} holds "${value.slice(0, 20)}" as ${kinds[type] ?? "something unknown"}`,
-    );
-  switch (type) {
-    case "n": {
-      const number = numberOfText(value);
-      if (number === undefined) {
-        throw wrong();
-      }
-      if (typeof number === "string") {
-        return hasFormula ? calculated(Number(number), () => explain(row, column)) : number;
-      }
-      const isDate = style.format.kind === "date" || style.format.kind === "date-time";
-      return reading.since1904 && isDate ? number + daysFrom1900To1904 : number;
-    }
-    case "s": {
-      const index = /^\d{1,9}$/.test(value) ? Number(value) : Number.NaN;
-      const text = reading.strings[index];
-      if (text === undefined) {
-        throw wrong();
-      }
-      return text;
-    }
-    case "str":
-    case "inlineStr":
-      return decodeText(value);
-    case "b":
-      if (!/^(0|1|true|false)$/.test(value)) {
-        throw wrong();
-      }
-      return value === "1" || value === "true";
-    case "e":
-      return errorOfText(value, () => explain(row, column));
-    case "d": {
-      const serial = serialOfIso(value);
-      if (serial === undefined) {
-        throw wrong();
-      }
-      return serial;
-    }
-    default:
-      throw wrong();
-  }
-}
-
-/** What a formula gave has no digits of its own to lose. */
-function calculated(number: number, explain: () => string | undefined): Cell {
-  return Number.isFinite(number) ? number : errorOfText("#NUM!", explain);
-}
-
-const kinds: Readonly<Record<string, string>> = {
-  n: "a number",
-  s: "the number of a text",
-  b: "a truth value",
-  d: "a date",
-};

@@ -52,7 +52,10 @@ function relationshipsPart(targets: readonly (readonly [type: string, target: st
  * that are there; the version of the calculation keeps programs from one of their own accord (common practice, no source).
  */
 export function workbookPart({ book, sheets }: Workbook): string {
-  const firstShown = Math.max(0, sheets.findIndex(({ hidden }) => !hidden)); // biome-ignore format: one value
+  const firstShown = Math.max(
+    0,
+    sheets.findIndex(({ hidden }) => !hidden),
+  );
   const lines = book.sheets.map(({ name }, index) => {
     const isHidden = sheets[index]?.hidden === true && index !== firstShown;
     const state = isHidden ? ' state="hidden"' : "";

@@ -128,7 +128,9 @@ async function printLines(book: Book, changes: Iterable<ChangedCell>, summary: S
 async function printJson(book: Book, changes: Iterable<ChangedCell>, summary: Summary, terminal: Terminal) {
   const { formulas, tolerance, kept, notes } = summary;
   let count = 0;
-  await terminal.out(`{"formulas":${formulas},"tolerance":${tolerance},"kept":${kept},"notes":${JSON.stringify(notes)},"changes":[`); // biome-ignore format: one line of the answer
+  await terminal.out(
+    `{"formulas":${formulas},"tolerance":${tolerance},"kept":${kept},"notes":${JSON.stringify(notes)},"changes":[`,
+  );
   for (const change of changes) {
     await terminal.out(`${count++ === 0 ? "" : ","}\n${JSON.stringify(jsonChange(book, change))}`);
   }
