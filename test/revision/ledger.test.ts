@@ -63,6 +63,17 @@ describe("a change of one mass", () => {
     expect(inPlanet.relative! / step).toBeCloseTo(1 - (2 / 3) * (planet / (star + planet)), 5);
   });
 
+  test("of both masses is shared out by the same laws", () => {
+    const [star, planet] = [0.8, 1 / 1047.5655];
+    const both = change(targets, [setCells(at("C3"), [[star * (1 + 2e-6)]]), setCells(at("E3"), [[1 + 1e-6]])], ownFunctions); // biome-ignore format: one value
+    const [entry] = ledgerEntries(ledger(targets, both));
+    const [byStar, byPlanet] = entry!.parts.map(({ part }) => part / (entry!.before as number));
+    // dlnK = -(2/3) M/(M+m) dlnM + (1 - (2/3) m/(M+m)) dlnm, from the same proportion.
+    expect(byStar! / 2e-6).toBeCloseTo((-2 / 3) * (star / (star + planet)), 5);
+    expect(byPlanet! / 1e-6).toBeCloseTo(1 - (2 / 3) * (planet / (star + planet)), 5);
+    expect(entry!.movedBy).toBe("Mstar [solMass]");
+  });
+
   test("is told in units of its own uncertainty, and traced through K to the visits", () => {
     const before = withVisits;
     const entries = ledgerEntries(ledger(before, set(before, "C2", 1.2)));

@@ -93,6 +93,19 @@ describe("revise, of a table", () => {
     expect(folder.read("out.ecsv")).toContain("\nHD 3,3000,0.33,0.02,5,,");
   });
 
+  test("with a row of units under its header", async () => {
+    folder.write("units.csv", "Target;P;Mstar;m\n-;d;solMass;jupiterMass\nA;4.23;1.1;0.47\nB;100;0.8;1\n");
+    folder.write("kilo.csv", "Target,Mstar [kg]\nA,2.386e30\n");
+    const set = ["--set", "K [m/s]", "=BARY.REFLEX(B3,C3,D3,,,B$2:D$2,E$2)", "--out", at("units2.csv")];
+    const words = ["revise", at("units.csv"), "--with", at("kilo.csv"), "--key", "Target", ...set];
+    const { code, out } = await barycell([...words, "--condition", "K < 1 km/s"]);
+    expect(code).toBe(0);
+    expect(out).toContain("| K \\[m/s\\] | 1 |");
+    expect(out).toContain('"Mstar \\[solMass\\]" was converted from kg to solMass.');
+    // 2.386e30 kg over the mass of the Sun, 1.98841e30 kg (nominal GM of IAU 2015 B3 over G of CODATA 2018), is 1.19996.
+    expect(folder.read("units2.csv")).toMatch(/^Target;P;Mstar;m;K \[m\/s\]\n-;d;solMass;jupiterMass;m\/s\nA;4.23;1.1999\d+;0.47;52.2\d+\nB;100;0.8;1;50.7\d+\n$/); // biome-ignore format: one value
+  });
+
   test("answers in JSON", async () => {
     const { code, out } = await barycell([...usual, "--json", "--condition", "K >= 50 m/s"]);
     expect(code).toBe(0);
