@@ -23,7 +23,7 @@ export { ledgerCells } from "./revision/ledgerCells.js";
 export { type LedgerEntry, ledgerEntries } from "./revision/ledgerEntry.js";
 export { ledgerMarkdown } from "./revision/ledgerMarkdown.js";
 export { ledgerOf } from "./revision/ledgerOf.js";
-export { type LedgerRecord, ledgerRecord, ledgerRecordText, readLedgerRecord } from "./revision/ledgerRecord.js";
+export { type LedgerRecord, ledgerRecord, ledgerText, readLedgerRecord } from "./revision/ledgerRecord.js";
 export { planLines } from "./revision/planLines.js";
 export { planRevision, type RevisionPlan, type RevisionRequest } from "./revision/planRevision.js";
 export { revisionEdits } from "./revision/revisionEdits.js";

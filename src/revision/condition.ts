@@ -1,5 +1,5 @@
 import type { Cell } from "../call/cell.js";
-import { foldName } from "../table/foldName.js";
+import { columnKey } from "../table/columnKey.js";
 import { recogniseColumn } from "../table/recogniseColumn.js";
 import { isPlainNumberKind, kindPhrase } from "../units/kind.js";
 import { isProblem } from "../units/problem.js";
@@ -75,7 +75,7 @@ function columnNamed(name: string, columns: readonly BookColumn[], text: string)
   const whole = columns.findIndex(({ header }) => header === name);
   if (whole >= 0) return whole;
   const named = columns.filter(({ header, recognised }) =>
-    [header, recognised.name].some((own) => own === name || foldName(own) === foldName(name)),
+    [header, recognised.name].some((own) => columnKey(own) === columnKey(name)),
   );
   const { quantity } = recogniseColumn(name);
   const meant =

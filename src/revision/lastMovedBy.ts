@@ -1,3 +1,4 @@
+import { columnKey } from "../table/columnKey.js";
 import { foldName } from "../table/foldName.js";
 import { readHeader } from "../units/readHeader.js";
 import type { LedgerEntry } from "./ledgerEntry.js";
@@ -29,5 +30,5 @@ function isAsked(entry: LedgerEntry, asked: NumberAsked): boolean {
 
 /** A column is the same one when its unit changed. */
 function nameOf(header: string): string {
-  return foldName(readHeader(header).name || header);
+  return columnKey(readHeader(header).name || header);
 }

@@ -43,10 +43,24 @@ export function ledgerEntries(
   most = Number.POSITIVE_INFINITY,
   roles: readonly LedgerColumn["role"][] = ["derived"],
 ): readonly LedgerEntry[] {
+  return [...eachLedgerEntry(ledger, most, roles)];
+}
+
+/** The same one by one, for ledgers that are better not held whole. */
+export function* eachLedgerEntry(
+  ledger: Ledger,
+  most: number,
+  roles: readonly LedgerColumn["role"][],
+): Generator<LedgerEntry> {
   const changes = rankedChanges(ledger, most, roles);
-  const derived = changes.filter(({ column }) => column.role === "derived");
-  const shares = new Map(sharedChanges(ledger, derived).map((own, index) => [derived[index]!, own]));
-  return changes.map((change) => entryOf(ledger, change, shares.get(change)));
+  const shareOf = sharedChanges(
+    ledger,
+    changes.filter(({ column }) => column.role === "derived"),
+  );
+  let derived = 0;
+  for (const change of changes) {
+    yield entryOf(ledger, change, change.column.role === "derived" ? shareOf(derived++) : undefined);
+  }
 }
 
 function entryOf(ledger: Ledger, change: RankedChange, share: SharedChange | undefined): LedgerEntry {

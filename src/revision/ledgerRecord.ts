@@ -1,5 +1,5 @@
 import type { Ledger, RevisionSource, WatchedCondition } from "./ledger.js";
-import { type KeptCell, keptCell, type LedgerEntry, ledgerEntries } from "./ledgerEntry.js";
+import { eachLedgerEntry, type KeptCell, keptCell, type LedgerEntry } from "./ledgerEntry.js";
 
 /** A ledger in plain JSON, whole: to be kept with a book, and to answer which revision last moved a number. */
 export interface LedgerRecord {
@@ -33,6 +33,21 @@ export interface KeptCrossing {
 }
 
 export function ledgerRecord(ledger: Ledger): LedgerRecord {
+  return { ...headOf(ledger), entries: [...allEntries(ledger)] };
+}
+
+/** The text of a ledger's record in pieces, an entry a line, so that a large one is never held whole. */
+export function* ledgerText(ledger: Ledger): Generator<string> {
+  yield `${JSON.stringify(headOf(ledger)).slice(0, -1)},"entries":[`;
+  let separator = "";
+  for (const entry of allEntries(ledger)) {
+    yield `${separator}\n${JSON.stringify(entry)}`;
+    separator = ",";
+  }
+  yield "]}\n";
+}
+
+function headOf(ledger: Ledger): Omit<LedgerRecord, "entries"> {
   return {
     kind: "barycell-ledger",
     version: 1,
@@ -41,8 +56,11 @@ export function ledgerRecord(ledger: Ledger): LedgerRecord {
     inputs: ledger.inputs.map(({ name, cells }) => ({ input: name, cells })),
     unshared: ledger.unshared ?? null,
     conditions: ledger.conditions.map(keptCondition),
-    entries: ledgerEntries(ledger, Number.POSITIVE_INFINITY, ["revised", "derived"]),
   };
+}
+
+function allEntries(ledger: Ledger): Generator<LedgerEntry> {
+  return eachLedgerEntry(ledger, Number.POSITIVE_INFINITY, ["revised", "derived"]);
 }
 
 function keptCondition({ condition, metBefore, metAfter, gained, lost }: WatchedCondition): KeptCondition {
@@ -58,14 +76,6 @@ function keptCondition({ condition, metBefore, metAfter, gained, lost }: Watched
     gained: gained.map(kept),
     lost: lost.map(kept),
   };
-}
-
-/** The text of a record in pieces, an entry a line, so that a large one is never one text. */
-export function* ledgerRecordText(record: LedgerRecord): Generator<string> {
-  const { entries, ...head } = record;
-  yield `${JSON.stringify(head).slice(0, -1)},"entries":[`;
-  for (const [index, entry] of entries.entries()) yield `${index === 0 ? "" : ","}\n${JSON.stringify(entry)}`;
-  yield "]}\n";
 }
 
 /** Undefined where the text is no ledger, or of a version that is not known here: it is to be left as it is. */

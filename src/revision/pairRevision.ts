@@ -1,5 +1,5 @@
 import type { TableFile } from "../files/table/tableFile.js";
-import { foldName } from "../table/foldName.js";
+import { columnKey } from "../table/columnKey.js";
 import { headerText } from "../table/headerText.js";
 import { type RecognisedColumn, recogniseColumn } from "../table/recogniseColumn.js";
 import { ownersOfSigmas } from "../table/sigmaColumns.js";
@@ -103,7 +103,7 @@ export function pairRevision(
 }
 
 function isSame(by: PairedColumn["by"], table: RecognisedColumn, revision: RecognisedColumn): boolean {
-  if (by === "header") return foldName(table.name) === foldName(revision.name);
+  if (by === "header") return columnKey(table.name) === columnKey(revision.name);
   return table.quantity !== undefined && table.quantity.name === revision.quantity?.name;
 }
 

@@ -1,6 +1,6 @@
 import { type Column, cellAt } from "../call/column.js";
 import { type Change, changeOf } from "../table/changeOf.js";
-import { foldName } from "../table/foldName.js";
+import { columnKey } from "../table/columnKey.js";
 import { nearest } from "../units/nearest.js";
 import { one } from "../units/unit.js";
 import { type BookColumn, type BookTable, namesOfRows, tableCells } from "./bookTable.js";
@@ -91,7 +91,9 @@ export function planRevision(table: BookTable, revision: RevisionTable, request:
 function keyColumn<C extends BookColumn | RevisionColumn>(columns: readonly C[], key: string, which: string): C {
   const found =
     columns.find(({ header }) => header === key) ??
-    columns.find(({ header, recognised }) => [header, recognised.name].some((own) => foldName(own) === foldName(key)));
+    columns.find(({ header, recognised }) =>
+      [header, recognised.name].some((own) => columnKey(own) === columnKey(key)),
+    );
   if (found) return found;
   const names = columns.map(({ recognised }) => recognised.name);
   const near = nearest(key, names);

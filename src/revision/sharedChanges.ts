@@ -32,9 +32,9 @@ const fewRows = 2048;
 /**
  * The part of an input is the mean of what it does alone to the state before, and of what is lost when it alone is taken
  * back from the state after: with one or two inputs the parts add up to the change but for rounding. Each such state is
- * calculated once, for all cells together.
+ * calculated once, for all cells together. Gives what to ask for the share of one of the cells.
  */
-export function sharedChanges(ledger: Ledger, cells: readonly SharedCell[]): readonly SharedChange[] {
+export function sharedChanges(ledger: Ledger, cells: readonly SharedCell[]): (index: number) => SharedChange {
   const reaching = ledger.inputs.map((_, input) => cells.some(({ column }) => column.ways[input] !== undefined));
   const active = [...ledger.inputs.keys()].filter((input) => reaching[input]);
   const sums = ledger.inputs.map(() => new Float64Array(cells.length));
@@ -65,14 +65,13 @@ export function sharedChanges(ledger: Ledger, cells: readonly SharedCell[]): rea
       else add(input, swap(ledger.after.book, ledger.before.book, ledger.inputs[input]!), -1, "after");
     }
   }
-  return cells.map((cell, index) =>
+  return (index) =>
     shared(
       ledger,
-      cell,
+      cells[index]!,
       sums.map((sum) => sum[index]!),
       sole[index],
-    ),
-  );
+    );
 }
 
 /** Errors are alike by their code: their sentences quote what other inputs held. */

@@ -1,4 +1,4 @@
-import { foldName } from "./foldName.js";
+import { columnKey } from "./columnKey.js";
 import { bareName, type RecognisedColumn } from "./recogniseColumn.js";
 
 /** What of a column decides whose uncertainties it holds. */
@@ -14,7 +14,7 @@ export interface HeadedColumn {
 export function ownersOfSigmas(columns: readonly HeadedColumn[]): readonly (number | undefined)[] {
   const names = new Map<string, number>();
   columns.forEach(({ recognised }, index) => {
-    if (!recognised.isUncertainty) names.set(foldName(recognised.name), index);
+    if (!recognised.isUncertainty) names.set(columnKey(recognised.name), index);
   });
   let beside: number | undefined;
   return columns.map(({ recognised }, index) => {
@@ -22,6 +22,6 @@ export function ownersOfSigmas(columns: readonly HeadedColumn[]): readonly (numb
       beside = index;
       return undefined;
     }
-    return names.get(foldName(bareName(recognised.name))) ?? beside;
+    return names.get(columnKey(bareName(recognised.name))) ?? beside;
   });
 }

@@ -8,7 +8,7 @@ import { ledgerCells } from "../../src/revision/ledgerCells.js";
 import { ledgerEntries } from "../../src/revision/ledgerEntry.js";
 import { ledgerMarkdown } from "../../src/revision/ledgerMarkdown.js";
 import { ledgerOf } from "../../src/revision/ledgerOf.js";
-import { ledgerRecord, ledgerRecordText, readLedgerRecord } from "../../src/revision/ledgerRecord.js";
+import { ledgerRecord, ledgerText, readLedgerRecord } from "../../src/revision/ledgerRecord.js";
 import type { Book } from "../../src/sheet/book/book.js";
 import { change } from "../../src/sheet/change.js";
 import { setCells } from "../../src/sheet/edit/setCells.js";
@@ -231,7 +231,7 @@ describe("a ledger", () => {
 
   test("comes back from its text as it was, and is left alone where its version is not known", () => {
     const record = ledgerRecord(made);
-    const text = [...ledgerRecordText(record)].join("");
+    const text = [...ledgerText(made)].join("");
     expect(readLedgerRecord(text)).toEqual(record);
     expect(readLedgerRecord(text.replace('"version":1', '"version":2'))).toBeUndefined();
     expect(readLedgerRecord("no ledger")).toBeUndefined();

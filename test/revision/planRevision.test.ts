@@ -149,6 +149,25 @@ describe("columns are matched", () => {
     for (const text of said) expect(text.length, text).toBeLessThanOrEqual(250);
   });
 
+  test("by the capitals of a symbol: M is not m", () => {
+    const book = bookWith({
+      Target: ["A"],
+      "m [jupiterMass]": [1],
+      "m err": [0.1],
+      "M [solMass]": [2],
+      "M err": [0.2],
+    });
+    const file = revisionOf({
+      Target: ["A"],
+      "M [solMass]": [3],
+      "m [jupiterMass]": [1.5],
+      "m err": [0.3],
+      "M err": [0.5],
+    });
+    const after = revised(book, file);
+    expect(["B2", "C2", "D2", "E2"].map((address) => cellOf(after, at(address)))).toEqual([1.5, 0.3, 3, 0.5]);
+  });
+
   test("the largest change is told in sigmas and in per cent", () => {
     const file = revisionOf({ Target: ["A", "B", "C"], "Mstar [solMass]": [1.05, 0.78, 0.4] });
     // By hand: +0.05 / 0.1, -0.02 / 0.04 and -0.1 / 0.05 sigma; +5 %, -2.5 % and -20 %.

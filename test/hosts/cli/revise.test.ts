@@ -217,6 +217,21 @@ describe("revise, where something is wrong", () => {
       'barycell revise: --out "/targets.csv" is the table itself; name another file, or add --force to replace the table.',
     ],
     [
+      words("new.csv", "--report", at("new.csv")),
+      2,
+      'barycell revise: --report "/new.csv" is read or written already; name another file.',
+    ],
+    [
+      words("new.csv", "--report", at("x.csv"), "--out", at("x.csv")),
+      2,
+      'barycell revise: --report "/x.csv" is read or written already; name another file.',
+    ],
+    [
+      words("new.csv", "--out", at("new.csv"), "--force"),
+      2,
+      'barycell revise: --out "/new.csv" is read or written already; name another file.',
+    ],
+    [
       words("none.csv"),
       3,
       'barycell revise: cannot read "/none.csv": there is no such file or folder; check the name.',

@@ -1,4 +1,4 @@
-import { basename } from "node:path";
+import { basename, resolve } from "node:path";
 import { FileProblem } from "../../../files/fileProblem.js";
 import { detectSignature } from "../../../files/table/detectFormat.js";
 import { sentenceOfTableFinding } from "../../../files/table/tableFinding.js";
@@ -6,7 +6,7 @@ import { bookTable } from "../../../revision/bookTable.js";
 import type { Ledger } from "../../../revision/ledger.js";
 import { ledgerMarkdown } from "../../../revision/ledgerMarkdown.js";
 import { ledgerOf } from "../../../revision/ledgerOf.js";
-import { ledgerRecord, ledgerRecordText } from "../../../revision/ledgerRecord.js";
+import { ledgerText } from "../../../revision/ledgerRecord.js";
 import type { Alias } from "../../../revision/matchKeys.js";
 import { planLines } from "../../../revision/planLines.js";
 import { planRevision, type RevisionPlan } from "../../../revision/planRevision.js";
@@ -38,7 +38,7 @@ Takes revised values over from another table and tells what they move: a ledger 
 after, and of the input that moved it most. Rows are matched by the column HEADER: as written, then without regard to
 blanks and capitals, then by --alias. Columns are matched by name, else by the quantity both hold, and converted to
 TABLE's units. TABLE is a workbook (.xlsx), whose formulas are calculated, or any table that barycell convert reads,
-with columns to derive as in barycell fill. TABLE itself is never changed.
+with columns to derive as in barycell fill. TABLE stays as it is unless FILE is TABLE.
 
   --with NEW             the table with the revised values, in any form that barycell convert reads
   --key HEADER           the column that names the rows in both
@@ -86,7 +86,7 @@ export const revise: Command = {
   async run(line, terminal) {
     const request = readRequest(line);
     const { out, report, isDry } = request;
-    if (out !== undefined && !line.options.has("--force")) await refuseSameFile(request.path, out);
+    if (!isDry) await refuseInputs(request, line.options.has("--force"));
     const writeOut = out === undefined || isDry ? undefined : await prepareFile(out);
     const writeReport = report === undefined || isDry ? undefined : await prepareFile(report);
     const progress = progressOn(terminal);
@@ -173,9 +173,23 @@ function readAlias(text: string): Alias {
   return { old, new: now };
 }
 
-async function refuseSameFile(path: string, out: string): Promise<void> {
-  if (!(await isSameFile(path, out))) return;
-  throw new UsageProblem(`--out "${out}" is the table itself; name another file, or add --force to replace the table.`);
+/** No file is written over one that is read, but the table where that was asked for. */
+async function refuseInputs({ path, from, out, report }: ReviseRequest, isForced: boolean): Promise<void> {
+  if (out !== undefined && !isForced && (await isSameFile(path, out))) {
+    throw new UsageProblem(
+      `--out "${out}" is the table itself; name another file, or add --force to replace the table.`,
+    );
+  }
+  const refused = [
+    ["--out", out, [from]],
+    ["--report", report, [path, from, ...(out === undefined ? [] : [out])]],
+  ] as const;
+  for (const [option, target, others] of refused) {
+    for (const other of others) {
+      if (target === undefined || !(resolve(target) === resolve(other) || (await isSameFile(other, target)))) continue;
+      throw new UsageProblem(`${option} "${target}" is read or written already; name another file.`);
+    }
+  }
 }
 
 /** The content tells whether it is a workbook, whose formulas count, or a table. */
@@ -245,6 +259,6 @@ function* jsonAnswer(plan: RevisionPlan, ledger: Ledger): Generator<string> {
     message: sentenceOfRevisionFinding(finding),
   }));
   yield `{"matched":${JSON.stringify(matched)},\n"findings":${JSON.stringify(findings)},\n"ledger":`;
-  yield* ledgerRecordText(ledgerRecord(ledger));
+  yield* ledgerText(ledger);
   yield "}\n";
 }
