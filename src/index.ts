@@ -28,6 +28,7 @@ export { planLines } from "./revision/planLines.js";
 export { planRevision, type RevisionPlan, type RevisionRequest } from "./revision/planRevision.js";
 export { revisionEdits } from "./revision/revisionEdits.js";
 export { sha256 } from "./revision/sha256.js";
+export { stepName } from "./revision/stepName.js";
 export type { QuantityProblem, UnitProblem } from "./units/problem.js";
 export { isProblem } from "./units/problem.js";
 export type { QuantityReading } from "./units/quantityReading.js";

@@ -1,8 +1,9 @@
 import { type Column, cellAt } from "../call/column.js";
 import { type Change, changeOf } from "../table/changeOf.js";
+import { isPlausible, otherUnits } from "../table/checkColumn.js";
 import { columnKey } from "../table/columnKey.js";
 import { nearest } from "../units/nearest.js";
-import { one } from "../units/unit.js";
+import { one, toBase } from "../units/unit.js";
 import { type BookColumn, type BookTable, namesOfRows, tableCells } from "./bookTable.js";
 import { type Alias, type KeyMatch, matchKeys } from "./matchKeys.js";
 import {
@@ -227,6 +228,32 @@ function cellFindings(
       const moved = [values.before.numbers[row]!, values.values.numbers[row]!] as const;
       return { about: "unit slip", header: column.header, unit, slip, changed: values.changed, key: nameOfRow(row), values: moved }; // biome-ignore format: one value
     }),
+    ...implausible(column, values, nameOfRow),
     ...counted,
   ];
+}
+
+/** Values in cells that held none, where no ratio tells of a slip in the unit: they would be usual in another. */
+function implausible(
+  { header, recognised: { quantity, unit } }: BookColumn,
+  { before, values }: NewCells,
+  nameOfRow: (row: number) => string,
+): RevisionFinding[] {
+  if (!quantity || !unit || quantity.kind !== unit.kind) return [];
+  const others = otherUnits(quantity, unit);
+  const found = new Map<string, { row: number; count: number }>();
+  for (let row = 0; row < values.length; row++) {
+    const value = values.numbers[row]!;
+    if (!Number.isNaN(before.numbers[row]) || Number.isNaN(value) || isPlausible(quantity, toBase(unit, value)))
+      continue;
+    const better = others.find((other) => isPlausible(quantity, toBase(other, value)))?.text;
+    if (better === undefined) continue;
+    const known = found.get(better);
+    if (known) known.count++;
+    else found.set(better, { row, count: 1 });
+  }
+  return [...found].map(([better, { row, count }]) => {
+    const value = values.numbers[row]!;
+    return { about: "implausible", header, quantity, unit, better, count, key: nameOfRow(row), value };
+  });
 }

@@ -1,4 +1,5 @@
 import { unitSentence } from "../call/explain.js";
+import type { Quantity } from "../functions/quantity.js";
 import { kindPhrase } from "../units/kind.js";
 import type { UnitProblem } from "../units/problem.js";
 import { one, type Unit } from "../units/unit.js";
@@ -36,6 +37,16 @@ export type RevisionFinding =
       readonly changed: number;
       readonly key: string;
       readonly values: readonly [number, number];
+    }
+  | {
+      readonly about: "implausible";
+      readonly header: string;
+      readonly quantity: Quantity;
+      readonly unit: Unit;
+      readonly better: string;
+      readonly count: number;
+      readonly key: string;
+      readonly value: number;
     }
   | {
       readonly about: CountedFinding;
@@ -88,6 +99,8 @@ export function sentenceOfRevisionFinding(finding: RevisionFinding): string {
       return `The uncertainties ${quoted(finding.from)} were left aside: the table has no column for them beside ${quoted(finding.header)}.`;
     case "converted":
       return `${quoted(finding.header)} was converted from ${finding.fromUnit.text} to ${finding.unit.text}.`;
+    case "implausible":
+      return `${quoted(finding.header)}: ${counted(finding.count, "new value")} where the table had none ${finding.count === 1 ? "is" : "are"} unusual for ${finding.quantity.meaning}; as ${finding.better} usual. First ${quoted(finding.key, 24)}, ${short(finding.value)} ${finding.unit.text}.`;
     case "unit slip":
       return slipSentence(finding);
     default:

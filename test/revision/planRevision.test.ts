@@ -4,6 +4,7 @@ import type { Cell } from "../../src/call/cell.js";
 import { cellAt } from "../../src/call/column.js";
 import { ownFunctions } from "../../src/files/xlsx/ownFunctions.js";
 import { planLines } from "../../src/revision/planLines.js";
+import { stepName } from "../../src/revision/stepName.js";
 import { cellOf } from "../../src/sheet/book/cellOf.js";
 import { formulaOf } from "../../src/sheet/book/formulaOf.js";
 import { change } from "../../src/sheet/change.js";
@@ -183,6 +184,14 @@ describe("columns are matched", () => {
     expect(sentences(plan(bookWith(masses), file)).slice(1)).toEqual([]);
   });
 
+  test("a slip in the unit shows where there was no value before, too", () => {
+    const book = bookWith({ Target: ["A", "B"], "Mstar [solMass]": [1, null] });
+    expect(sentences(plan(book, revisionOf({ Target: ["B", "A"], "Mstar [solMass]": [1047.57, 1] })))).toEqual([
+      '"Mstar [solMass]": 1 new value where the table had none is unusual for mass of the star; as jupiterMass usual. First "B", 1048 solMass.',
+    ]);
+    expect(sentences(plan(book, revisionOf({ Target: ["B", "A"], "Mstar [solMass]": [1.2, 1] })))).toEqual([]);
+  });
+
   test("an uncertainty is taken only where its value is", () => {
     const file = revisionOf({ Target: ["A", "B", "C"], "Mstar [solMass]": [-1, null, 0.6], "Mstar err [solMass]": [9, 9, 0.06] }); // biome-ignore format: one table
     const after = revised(bookWith(masses), file);
@@ -219,8 +228,9 @@ describe("applied", () => {
   test("only what depends on it is calculated anew, and undo brings every bit back", () => {
     const after = revised(before, file);
     expect([...changes(before, after)].map(({ row, column }) => [row, column])).toEqual([[1, 1], [3, 1], [1, 2], [3, 2], [1, 3], [3, 3]]); // biome-ignore format: one value
-    const history = record(startHistory(before), "revised from new.csv", after);
+    const history = record(startHistory(before), stepName(plan(before, file), "new.csv"), after);
     expect([...changes(presentBook(undo(history)), before)]).toEqual([]);
+    expect(history.versions.map(({ name }) => name)).toEqual(["opened", "revised 4 cells from new.csv"]);
     expect(formulaOf(after, at("D2"))).toBe("=B2*2");
   });
 
