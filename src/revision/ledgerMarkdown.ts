@@ -1,5 +1,5 @@
 import { CellError } from "../call/cell.js";
-import type { Ledger, LedgerColumn, WatchedCondition } from "./ledger.js";
+import type { Crossing, Ledger, LedgerColumn, WatchedCondition } from "./ledger.js";
 import { cellOfKept, type KeptCell, type LedgerEntry, ledgerEntries } from "./ledgerEntry.js";
 import { counted, short } from "./words.js";
 
@@ -59,12 +59,11 @@ function columnLine({ nameOfRow }: Ledger, { header, changed, ceased, began, lar
 
 function* conditionSection({ condition, metBefore, metAfter, gained, lost }: WatchedCondition, most: number) {
   const title = `${condition.text}: ${counted(metBefore, "row")} before, ${metAfter.toLocaleString("en")} now`;
-  const lines = [
-    ...gained.map((own) => ["gained", own.key, shown(own.before), shown(own.after)]),
-    ...lost.map((own) => ["lost", own.key, shown(own.before), shown(own.after)]),
-  ];
-  yield* section(title, ["", "Row", "Before", "After"], lines.slice(0, most));
-  if (lines.length > most) yield `\nand ${(lines.length - most).toLocaleString("en")} more.\n`;
+  const lines = (kind: string, crossings: readonly Crossing[]) =>
+    crossings.slice(0, most).map((own) => [kind, own.key, shown(own.before), shown(own.after)]);
+  yield* section(title, ["", "Row", "Before", "After"], [...lines("gained", gained), ...lines("lost", lost)]);
+  const left = Math.max(0, gained.length - most) + Math.max(0, lost.length - most);
+  if (left > 0) yield `\nand ${left.toLocaleString("en")} more.\n`;
 }
 
 function entryLine({
@@ -100,7 +99,7 @@ function entryLine({
   ];
 }
 
-function shown(kept: KeptCell | WatchedCondition["gained"][number]["before"]): string {
+function shown(kept: KeptCell | Crossing["before"]): string {
   const cell = kept instanceof CellError ? kept : cellOfKept(kept);
   if (cell === null) return "blank";
   if (cell instanceof CellError) return cell.code;

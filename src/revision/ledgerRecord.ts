@@ -1,4 +1,4 @@
-import type { Ledger, RevisionSource, WatchedCondition } from "./ledger.js";
+import type { Crossing, Ledger, RevisionSource, WatchedCondition } from "./ledger.js";
 import { eachLedgerEntry, type KeptCell, keptCell, type LedgerEntry } from "./ledgerEntry.js";
 
 /** A ledger in plain JSON, whole: to be kept with a book, and to answer which revision last moved a number. */
@@ -64,7 +64,7 @@ function allEntries(ledger: Ledger): Generator<LedgerEntry> {
 }
 
 function keptCondition({ condition, metBefore, metAfter, gained, lost }: WatchedCondition): KeptCondition {
-  const kept = ({ key, before, after }: WatchedCondition["gained"][number]): KeptCrossing => {
+  const kept = ({ key, before, after }: Crossing): KeptCrossing => {
     return { key, before: keptCell(before), after: keptCell(after) };
   };
   const { text, header } = condition;
