@@ -68,5 +68,5 @@ test("any cells under any headers are matched and told, or refused, and applied 
     }),
     { numRuns: 300 },
   );
-  expect(taken).toBeGreaterThan(100);
+  expect(taken).toBeGreaterThan(50);
 });
