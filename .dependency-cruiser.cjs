@@ -1,5 +1,17 @@
 // Imports only point down this list; the reason for each layer stands in DEVELOPERS.md.
-const layers = ["hosts", "files", "sheet", "plan", "table", "catalog", "call", "functions", "units", "kernel"];
+const layers = [
+  "hosts",
+  "revision",
+  "files",
+  "sheet",
+  "plan",
+  "table",
+  "catalog",
+  "call",
+  "functions",
+  "units",
+  "kernel",
+];
 
 const upward = layers.slice(1).map((layer, index) => ({
   name: `${layer}-imports-only-downwards`,

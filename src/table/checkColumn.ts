@@ -91,7 +91,7 @@ function valueFindings(column: Column, values: readonly number[], recognised: Re
   return findings;
 }
 
-function isPlausible({ plausible }: Quantity, base: number): boolean {
+export function isPlausible({ plausible }: Quantity, base: number): boolean {
   return plausible === undefined || (base >= plausible.least && base <= plausible.most);
 }
 
@@ -100,11 +100,14 @@ const usualUnits = "d h yr s min solMass jupiterMass earthMass kg deg rad m/s km
 
 /** A unit in which columns of this quantity are common and in which the value would be usual. */
 function betterUnit(quantity: Quantity, value: number, unit: Unit): string | undefined {
-  return [quantity.unit, ...usualUnits].find((symbol) => {
-    const other = readUnit(symbol);
-    if (isProblem(other) || other.kind !== quantity.kind || other.text === unit.text) return false;
-    return isPlausible(quantity, toBase(other, value));
-  });
+  return otherUnits(quantity, unit).find((other) => isPlausible(quantity, toBase(other, value)))?.text;
+}
+
+/** The units besides its own in which columns of a quantity are common. */
+export function otherUnits(quantity: Quantity, unit: Unit): readonly Unit[] {
+  return [quantity.unit, ...usualUnits]
+    .map(readUnit)
+    .filter((other): other is Unit => !isProblem(other) && other.kind === quantity.kind && other.text !== unit.text);
 }
 
 function rangeText({ lower, upper }: Quantity): string {

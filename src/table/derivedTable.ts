@@ -1,7 +1,8 @@
-import { type Cell, CellError } from "../call/cell.js";
 import { cellAt } from "../call/column.js";
 import type { ComparedColumn, ComparedTable } from "./compareTables.js";
+import { headerText } from "./headerText.js";
 import { recogniseColumn } from "./recogniseColumn.js";
+import { nameColumn, nameOf } from "./rowNames.js";
 import type { PlannedColumn, TablePlan } from "./tableOf.js";
 
 /** The columns of a table that formulas work out, with what names each row; `rowName` names those without a name. */
@@ -21,11 +22,6 @@ export function derivedTable(
   }
 }
 
-/** The header as a column of one row of headers would have it. */
-function headerText({ header, unitCell }: PlannedColumn): string {
-  return unitCell === undefined ? header : `${header} [${unitCell}]`;
-}
-
 function isUncertainty({ header, unitCell }: PlannedColumn): boolean {
   return recogniseColumn(header, unitCell).isUncertainty;
 }
@@ -36,18 +32,10 @@ function keysOf(
   derived: readonly PlannedColumn[],
   rowName: (row: number) => string,
 ): readonly string[] {
-  const names = columns.find((column) => !derived.includes(column) && isMostlyText(column, rows));
+  const typed = columns.filter((column) => !derived.includes(column));
+  const names = nameColumn(typed, rows);
   return Array.from({ length: rows }, (_, row) => {
-    const name = names ? textOf(cellAt(names.column, row)) : "";
+    const name = names ? nameOf(cellAt(names.column, row)) : "";
     return name === "" ? rowName(row) : name;
   });
-}
-
-export function isMostlyText({ column }: Pick<PlannedColumn, "column">, rows: number): boolean {
-  const texts = (column.others ?? []).filter((cell) => typeof cell === "string" && cell.trim() !== "");
-  return 2 * texts.length > rows;
-}
-
-function textOf(cell: Cell): string {
-  return cell === null ? "" : cell instanceof CellError ? cell.code : String(cell).trim();
 }

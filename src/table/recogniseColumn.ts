@@ -38,12 +38,17 @@ export function recogniseColumn(header: string, unitCell?: string, ucd = ""): Re
   const unit = (isName ? undefined : reading.unit) ?? (below && !isProblem(below) ? below : undefined);
   const problem = reading.problem ?? (below && isProblem(below) ? below : undefined);
   const name = reading.name || header.trim();
-  const bare = name.replace(uncertaintyWords, " ").trim();
+  const bare = bareName(name);
   const quantity = quantityNamed(bare, unit) ?? quantityOfUcd(ucd, name, unit);
   // An hour of right ascension is no hour of time.
   const own = quantity?.sexagesimal === "hours" ? angleOf(unit) : unit;
   const isUncertainty = bare !== name.trim() || isErrorUcd(ucd);
   return { name, unit: own, problem, quantity, isUncertainty };
+}
+
+/** A name without the words that mark an uncertainty: that of the values it belongs to. */
+export function bareName(name: string): string {
+  return name.replace(uncertaintyWords, " ").trim();
 }
 
 interface NamedQuantity {

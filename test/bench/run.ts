@@ -3,6 +3,7 @@ import { benchFormats } from "./formats.js";
 import { benchPage } from "./page.js";
 import { benchPlan } from "./plan.js";
 import { benchReflex } from "./reflex.js";
+import { benchRevise } from "./revise.js";
 import { benchSheet } from "./sheet.js";
 import { benchTime } from "./time.js";
 import { benchXlsx } from "./xlsx.js";
@@ -14,6 +15,7 @@ const parts: Readonly<Record<string, () => void | Promise<void>>> = {
   fill: benchFill,
   xlsx: () => benchXlsx(print),
   formats: benchFormats,
+  revise: benchRevise,
   plan: benchPlan,
   sheet: () => benchSheet(print),
   page: () => benchPage(print),

@@ -1,18 +1,14 @@
-import type { Cell } from "../../call/cell.js";
-import { cellAt } from "../../call/column.js";
 import type { Book } from "../../sheet/book/book.js";
 import { readColumn } from "../../sheet/book/readColumn.js";
-import { columnsInUse, usedRows } from "../../sheet/book/usedRows.js";
+import { usedRows } from "../../sheet/book/usedRows.js";
 import type { Workbook } from "../../sheet/display/workbook.js";
-import { type TablePlan, tableOf } from "../../table/tableOf.js";
+import { findTable, nearCells } from "../../sheet/view/findTable.js";
+import type { TablePlan } from "../../table/tableOf.js";
 import { readHeader } from "../../units/readHeader.js";
 import { FileProblem } from "../fileProblem.js";
 import { sameNames } from "./sameNames.js";
 import type { TableFile } from "./tableFile.js";
 import type { TableFinding } from "./tableFinding.js";
-
-/** So many rows decide where the headers of a sheet stand. */
-const nearRows = 40;
 
 /** The table of one sheet of a workbook: the one asked for by name or number, else the first that holds a table. */
 export function tableOfWorkbook({ book, notes }: Workbook, asked: string | undefined): TableFile {
@@ -45,11 +41,15 @@ export function tableOfWorkbook({ book, notes }: Workbook, asked: string | undef
   };
 }
 
-function chosenSheet(book: Book, asked: string | undefined): { readonly sheet: number; readonly plan: TablePlan } {
+/** The sheet asked for by name or number, else the first that holds a table, and where the table lies in it. */
+export function chosenSheet(
+  book: Book,
+  asked: string | undefined,
+): { readonly sheet: number; readonly plan: TablePlan } {
   const names = book.sheets.map(({ name }) => name);
   const wanted = names.map((name, index) => asked === undefined || asked === name || asked === String(index + 1));
   for (const [sheet, isWanted] of wanted.entries()) {
-    const plan = isWanted ? tableOf(nearCells(book, sheet)) : undefined;
+    const plan = isWanted ? findTable(book, sheet) : undefined;
     if (plan) return { sheet, plan };
   }
   const shown = names
@@ -75,12 +75,4 @@ function above(book: Book, sheet: number, headerRow: number): string[] {
         .trim(),
     )
     .filter((text) => text !== "");
-}
-
-function nearCells(book: Book, sheet: number): Cell[][] {
-  const rows = Math.min(nearRows, usedRows(book, sheet));
-  const columns = Array.from({ length: columnsInUse(book.sheets[sheet]) }, (_, column) =>
-    readColumn(book, { sheet, column, from: 0, to: rows }),
-  );
-  return Array.from({ length: rows }, (_, row) => columns.map((column) => cellAt(column, row)));
 }

@@ -9,4 +9,6 @@ export const exitCode = {
   file: 3,
   /** Values that a file holds are not what its formulas give. */
   changed: 4,
+  /** A row crossed a condition that was watched. */
+  crossed: 5,
 } as const;

@@ -24,6 +24,10 @@ export interface FilledColumn extends AddedColumn {
 }
 
 export interface FilledTable {
+  /** The worksheet with the columns added. */
+  readonly book: Book;
+  /** The added columns as another state of that worksheet has them. */
+  columnsIn(book: Book): readonly FilledColumn[];
   readonly added: readonly FilledColumn[];
   readonly problems: readonly CellProblem[];
   /** Sentences about formulas that may not mean what they say. */
@@ -70,11 +74,12 @@ export function fillTable(table: SheetTable, requests: readonly ColumnRequest[],
       { first: table.columns.length, end: column },
     ),
   );
-  const added = places.flatMap((place) => addedColumns(book, place, rows));
+  const columnsIn = (state: Book) => places.flatMap((place) => addedColumns(state, place, rows));
+  const added = columnsIn(book);
   const problems = added.flatMap((_, index) =>
     table.rows > 0 ? listProblems(book, { sheet: 0, column: table.columns.length + index, ...rows }) : [],
   );
-  return { added, problems, doubts };
+  return { book, columnsIn, added, problems, doubts };
 }
 
 function addHeaders(book: Book, { column, headers, unit }: Place, rows: number): Book {

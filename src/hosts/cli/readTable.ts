@@ -43,8 +43,12 @@ export async function readTable(
   layout: TableLayout,
   terminal: Terminal,
   progress: Progress,
+  /** Given every piece of the file as it is read. */
+  watch?: (piece: Uint8Array) => void,
 ): Promise<TableFile> {
-  const source = path === "-" ? terminal.input : createReadStream(path, { highWaterMark: 1 << 20 });
+  const bytes: AsyncIterable<Uint8Array> =
+    path === "-" ? terminal.input : createReadStream(path, { highWaterMark: 1 << 20 });
+  const source = watch ? watched(bytes, watch) : bytes;
   try {
     return await readTableFile(source, {
       ...(layout.delimiter === undefined ? {} : { delimiter: layout.delimiter }),
@@ -56,5 +60,12 @@ export async function readTable(
     if (error instanceof FileProblem) throw new IoProblem(`${path}: ${error.message}`);
     if ((error as { syscall?: string }).syscall !== undefined) throw ioProblem("read", path, error);
     throw error;
+  }
+}
+
+async function* watched(bytes: AsyncIterable<Uint8Array>, watch: (piece: Uint8Array) => void) {
+  for await (const piece of bytes) {
+    watch(piece);
+    yield piece;
   }
 }

@@ -11,6 +11,7 @@ import { fill } from "./commands/fill.js";
 import { functions } from "./commands/functions.js";
 import { plan } from "./commands/plan.js";
 import { recalc } from "./commands/recalc.js";
+import { revise } from "./commands/revise.js";
 import { units } from "./commands/units.js";
 import { exitCode } from "./exitCode.js";
 import { IoProblem } from "./ioProblem.js";
@@ -18,7 +19,20 @@ import type { Terminal } from "./terminal.js";
 import { UsageProblem } from "./usageProblem.js";
 import { version } from "./version.js";
 
-const commands: readonly Command[] = [bench, calc, fill, plan, convert, check, recalc, functions, explain, units, demo];
+const commands: readonly Command[] = [
+  bench,
+  calc,
+  fill,
+  plan,
+  convert,
+  check,
+  recalc,
+  revise,
+  functions,
+  explain,
+  units,
+  demo,
+];
 
 const help = `barycell: unit-safe functions for radial-velocity target tables
 
@@ -27,8 +41,9 @@ ${commands.map(({ name, summary }) => `  barycell ${name.padEnd(10)} ${summary}`
   barycell COMMAND --help tells about one command; barycell --version prints the version.
 
 Exit codes: ${exitCode.done} done; ${exitCode.cellError} a formula or a cell has an error (fill: with --strict), or there is something to look at
-(check); ${exitCode.usage} the command line cannot be understood; ${exitCode.file} a file cannot be read or written;
-${exitCode.changed} values of a workbook are not what its formulas give (recalc).
+(check), or nothing could be taken over (revise); ${exitCode.usage} the command line cannot be understood; ${exitCode.file} a file cannot be
+read or written; ${exitCode.changed} values of a workbook are not what its formulas give (recalc); ${exitCode.crossed} a row crossed a
+condition (revise: with --fail-on-crossing).
 `;
 
 /** Runs one command line; resolves to the exit code. */

@@ -1,6 +1,7 @@
+import fc from "fast-check";
 import { expect, test } from "vitest";
 import { type Cell, CellError } from "../../../src/call/cell.js";
-import { columnOf } from "../../../src/call/column.js";
+import { cellAt, columnOf } from "../../../src/call/column.js";
 import { type AddedColumn, appendColumns } from "../../../src/files/delimited/appendColumns.js";
 import { sentenceOfFinding } from "../../../src/files/delimited/sentenceOfFinding.js";
 import { read } from "./tables.js";
@@ -74,4 +75,46 @@ test("text can be guarded as it is written, the original never", () => {
 
 test("a column of another length is a mistake of the caller", () => {
   expect(() => [...appendColumns(read("a,b\n1,2\n"), [column("K", undefined, [])])]).toThrow(RangeError);
+});
+
+/** The original, what is written anew (column, cells by row), and the file that must come out. */
+const replaced: [why: string, original: string, index: number, cells: Record<number, Cell>, expected: string][] = [
+  ["all else stays", '# c\na,b\n1.10,"x, y"\r\n2.0 , 3\n', 0, { 1: 7.5 }, '# c\na,b\n1.10,"x, y"\r\n7.5, 3\n'],
+  ["beside quoted fields", 'a,b\n"1,""2""",3\n4,5\n', 1, { 0: 'w"' }, 'a,b\n"1,""2""","w"""\n4,5\n'],
+  ["in a short record", "a,b,c\n1\n", 2, { 0: 2 }, "a,b,c\n1,,2\n"],
+  ["a first cell is no comment", "a,b\nx,1\n", 0, { 0: "#1" }, 'a,b\n"#1",1\n'],
+  ["a quote that is never closed is closed", 'a,b\n1,"2\n', 0, { 0: 3 }, 'a,b\n3,"2\n"'],
+  ["odd quotes count as they were understood", 'a,b\n"x"y,z",1\n', 1, { 0: 2 }, 'a,b\n"x""y,z",2\n'],
+];
+
+test.each(replaced)("written anew: %s", (_, original, index, cells, expected) => {
+  const table = read(original);
+  const before = table.columns[index]!;
+  const all = Array.from({ length: before.length }, (_, row) => cells[row] ?? null);
+  const written = { index, column: columnOf(all), isReplaced: (row: number) => row in cells };
+  expect([...appendColumns(table, [], { replaced: [written] })].join("")).toBe(expected);
+});
+
+test("every field but those written anew is read as before, whatever the file", () => {
+  const field = fc.oneof(fc.stringMatching(/^[ab,;"\n #']{0,6}$/), fc.constantFrom("1", "2.50", "x"));
+  const files = fc.array(fc.array(field, { minLength: 1, maxLength: 4 }), { minLength: 1, maxLength: 5 });
+  fc.assert(
+    fc.property(files, fc.nat(), fc.nat(), (rows, some, other) => {
+      const quoted = rows.map((row) => row.map((text) => (/[",\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text)).join(",")); // biome-ignore format: one line
+      const table = read(`p,q,r\n${quoted.join("\n")}\n`, { delimiter: "," });
+      if (table.rows === 0) return;
+      const [row, index] = [some % table.rows, other % table.columns.length];
+      const column = columnOf(Array.from({ length: table.rows }, () => 12345));
+      const written = { index, column, isReplaced: (each: number) => each === row };
+      const after = read([...appendColumns(table, [], { replaced: [written] })].join(""), { delimiter: "," });
+      expect(after.rows).toBe(table.rows);
+      table.columns.forEach((before, at) => {
+        for (let each = 0; each < table.rows; each++) {
+          const expected = each === row && at === index ? 12345 : cellAt(before, each);
+          expect(cellAt(after.columns[at]!, each)).toEqual(expected);
+        }
+      });
+    }),
+    { numRuns: 300 },
+  );
 });

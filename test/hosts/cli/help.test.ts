@@ -15,6 +15,7 @@ const commands = [
   "convert",
   "check",
   "recalc",
+  "revise",
   "functions",
   "explain",
   "units",

@@ -1,20 +1,17 @@
 import { sentenceOfTableFinding } from "../../../files/table/tableFinding.js";
-import { checkFormula } from "../../../sheet/formula/readFormula.js";
-import type { ColumnRequest } from "../columnRequest.js";
+import { type ColumnRequest, columnRequests } from "../columnRequest.js";
 import type { Command } from "../command.js";
 import { type CommandLine, optionValue } from "../commandLine.js";
 import { exitCode } from "../exitCode.js";
 import { filledPieces } from "../filledPieces.js";
 import { fillSummary } from "../fillSummary.js";
 import { fillTable } from "../fillTable.js";
-import { formulaComplaint } from "../formulaComplaint.js";
 import { isSameFile } from "../isSameFile.js";
 import { previewTable } from "../previewTable.js";
 import { progressOn } from "../progress.js";
 import { readTable, type TableLayout, tableLayout } from "../readTable.js";
 import type { Terminal } from "../terminal.js";
 import { UsageProblem } from "../usageProblem.js";
-import { functions } from "../worksheet.js";
 import { prepareFile } from "../writeFile.js";
 
 const help = `barycell fill IN --set HEADER FORMULA [--set HEADER FORMULA ...] [--out OUT]
@@ -101,7 +98,7 @@ function readRequest(line: CommandLine): FillRequest {
     throw new UsageProblem(
       `give one table; ${line.operands.map((operand) => `"${operand}"`).join(", ")} came. Texts with spaces or $ need quotes.`,
     );
-  const requests = (line.options.get("--set") ?? []).map(([header, formula]) => readColumnRequest(header!, formula!));
+  const requests = columnRequests(line);
   if (requests.length === 0) throw new UsageProblem('say which column to add: --set "K [m/s]" "=BARY.REFLEX(...)".');
   const out = optionValue(line, "--out");
   const shown = optionValue(line, "--show");
@@ -109,13 +106,4 @@ function readRequest(line: CommandLine): FillRequest {
   if (show !== undefined && !(Number.isInteger(show) && show > 0))
     throw new UsageProblem(`--show is "${shown}"; it is a number of rows, for example 20.`);
   return { path, out: out === "-" ? undefined : out, show, requests };
-}
-
-/** A formula that cannot be read stops everything before a file is touched. */
-function readColumnRequest(header: string, text: string): ColumnRequest {
-  const formula = text.startsWith("=") ? text : `=${text}`;
-  const problem = checkFormula(formula, functions);
-  if (problem)
-    throw new UsageProblem(`the formula of "${header}" cannot be read:\n${formulaComplaint(formula, problem)}`);
-  return { header, formula };
 }

@@ -2,8 +2,8 @@ import { cellAt } from "../../../../call/column.js";
 import { inputColumns } from "../../../../plan/planColumns.js";
 import { type PlanInput, planInputs } from "../../../../plan/planQuantities.js";
 import type { Book } from "../../../../sheet/book/book.js";
-import { isMostlyText } from "../../../../table/derivedTable.js";
 import { recogniseColumn } from "../../../../table/recogniseColumn.js";
+import { isMostlyText } from "../../../../table/rowNames.js";
 import type { PlannedColumn } from "../../../../table/tableOf.js";
 import type { PlanColumn, PlanStart } from "../../protocol/plan.js";
 import { tableOfSheet } from "../tables/tableOfSheet.js";
@@ -34,7 +34,7 @@ export function planStart(book: Book, sheet: number): PlanStart {
 
 /** Numbers stand in it, and they are not the uncertainties of others. */
 function isOfNumbers({ header, column }: PlannedColumn, rows: number): boolean {
-  if (recogniseColumn(header).isUncertainty || isMostlyText({ column }, rows)) return false;
+  if (recogniseColumn(header).isUncertainty || isMostlyText(column, rows)) return false;
   for (let row = 0; row < rows; row++) if (typeof cellAt(column, row) === "number") return true;
   return false;
 }

@@ -1,8 +1,8 @@
 import { cellAt } from "../../../../call/column.js";
 import type { Book } from "../../../../sheet/book/book.js";
 import { readColumn } from "../../../../sheet/book/readColumn.js";
-import { isMostlyText } from "../../../../table/derivedTable.js";
 import { recogniseColumn } from "../../../../table/recogniseColumn.js";
+import { isMostlyText } from "../../../../table/rowNames.js";
 import { isProblem } from "../../../../units/problem.js";
 import { readQuantity } from "../../../../units/readQuantity.js";
 import { baseSlope, convertible, fromBase, one, toBase, type Unit } from "../../../../units/unit.js";
@@ -37,7 +37,7 @@ export function plotColumn(session: Session, sheet: number, column: number): Plo
   for (const { from, to } of spans) {
     const cells = readColumn(book, { sheet, column, from, to });
     const beside = sigmasBeside(book, sheet, column, from, to);
-    texts += isMostlyText({ column: cells }, to - from) ? to - from : 0;
+    texts += isMostlyText(cells, to - from) ? to - from : 0;
     for (let row = 0; row < to - from; row++, next++) {
       rows[next] = from + row;
       const cell = cellAt(cells, row);

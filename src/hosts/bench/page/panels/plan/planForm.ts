@@ -51,7 +51,7 @@ export function lacksColumns(words: PlanWords, start: PlanStart): boolean {
 /** What is asked of a plan, in words that can be changed. */
 export function planForm(state: FormState, actions: FormActions): TemplateResult {
   const { words, start, problems, isRunning } = state;
-  const text = (word: TextWord, label: string, hint = "") => textField(state, actions, word, label, hint);
+  const text = (word: TextWord, label: string) => textField(state, actions, word, label);
   const wrong = (...names: readonly PlanWord[]) => names.map((word) => problemsOf(problems, word));
   return html`<form class="plan-form" novalidate @submit=${(event: Event) => {
     event.preventDefault();
@@ -78,7 +78,7 @@ export function planForm(state: FormState, actions: FormActions): TemplateResult
       html`<div class="plan-beside">
           ${text("airmass", "Airmass at most")} ${text("sun", "Sun below")} ${text("moon", "Moon at least away")}
           ${text("perNight", "Visits a night")} ${text("gap", "Between two visits")}
-          ${text("width", "Phase within", "part of a period")} ${text("efficiency", "Usable part", "without hours")}
+          ${text("width", "Phase within, of 1")} ${text("efficiency", "Usable part of 1")}
         </div>
         ${wrong(...limitWords)} ${phasesField(state, actions)}`,
     )}
@@ -117,11 +117,10 @@ function textField(
   actions: FormActions,
   word: TextWord,
   label: string,
-  hint: string,
 ): TemplateResult {
   const isWrong = problems.some((problem) => problem.word === word);
   return html`<div class="field">
-    <label for="plan-${word}">${label}${hint ? html` <span class="soft">${hint}</span>` : nothing}</label>
+    <label for="plan-${word}">${label}</label>
     <input id="plan-${word}" type="text" autocomplete="off" .value=${words[word]} aria-invalid=${isWrong ? "true" : nothing}
       aria-describedby=${isWrong ? `plan-${word}-problem` : nothing}
       @input=${() => isWrong && actions.mend(word)}
@@ -181,7 +180,7 @@ function phasesField(state: FormState, actions: FormActions): TemplateResult {
         )}
       </select>
     </div>
-    ${isNamed ? textField(state, actions, "phases", "These phases", "0 to 1") : nothing}`;
+    ${isNamed ? textField(state, actions, "phases", "These phases, 0 to 1") : nothing}`;
 }
 
 function columnField(
