@@ -13,6 +13,9 @@ import { makeFigure } from "./makeFigure.js";
 import { keepSettings, kindsOfPlan, kindsOfRows, readSettings } from "./plotSettings.js";
 import { plotsView } from "./plotsView.js";
 
+/** [ms] */
+const restAfterEdit = 200;
+
 export interface StartedPlots {
   shown(isShown: boolean): void;
 }
@@ -40,6 +43,7 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
   let isShown = false;
   let asked = 0;
   let isQueued = false;
+  let waiting: ReturnType<typeof setTimeout> | undefined;
 
   function drawControls(): void {
     const showPlan = () => page.prefer({ panel: "plan" });
@@ -67,6 +71,12 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
     }
     drawControls();
     drawSoon();
+  }
+
+  /** A plan reads whole tables: the cells that an edit changed come first. */
+  function makeSoon(): void {
+    clearTimeout(waiting);
+    waiting = setTimeout(() => void make(), restAfterEdit);
   }
 
   const size = () => ({ width: Math.max(120, area.clientWidth), height: Math.max(100, area.clientHeight) });
@@ -161,7 +171,8 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
   page.onChange((change) => {
     const isOfRow = kindsOfRows.includes(settings.kind);
     const isAboutRows = change === "selection" || change === "marked";
-    if (change === "state" || change === "sheet" || (isAboutRows && isOfRow)) void make();
+    if (change === "state" && kindsOfPlan.includes(settings.kind)) makeSoon();
+    else if (change === "state" || change === "sheet" || (isAboutRows && isOfRow)) void make();
     else if (isShown) {
       if (change === "marked") drawControls();
       drawSoon();

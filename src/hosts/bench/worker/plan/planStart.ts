@@ -13,8 +13,18 @@ const worthWords = /(?<!\p{L})(?:priority|value|merit|score|worth|weight|importa
 const always: readonly PlanInput[] = ["rightAscension", "declination", "visits", "exposure"];
 const forPhases: readonly PlanInput[] = ["period", "referenceTime"];
 
-/** What the columns of a sheet were understood to be, and a site the book states. */
+const known = new WeakMap<Book, Map<number, PlanStart>>();
+
+/** What the columns of a sheet were understood to be, and a site the book states; looked for once in each book. */
 export function planStart(book: Book, sheet: number): PlanStart {
+  const starts = known.get(book) ?? new Map<number, PlanStart>();
+  known.set(book, starts);
+  const start = starts.get(sheet) ?? lookThrough(book, sheet);
+  starts.set(sheet, start);
+  return start;
+}
+
+function lookThrough(book: Book, sheet: number): PlanStart {
   const { columns, rows } = tableOfSheet(book, sheet);
   const found = inputColumns(columns, { named: new Map() });
   const values = columns.filter((column) => isOfNumbers(column, rows)).map(({ header }) => header);

@@ -12,6 +12,9 @@ import { rowsChosen } from "./rowsChosen.js";
 /** As many rows as can be put into a list of names at once. */
 const mostNames = 200;
 
+/** [ms] */
+const restAfterEdit = 200;
+
 /** Which targets, within how many hours, and when. */
 export function planPanel(page: Page, redraw: () => void): Panel {
   let start: PlanStart | undefined;
@@ -25,6 +28,7 @@ export function planPanel(page: Page, redraw: () => void): Panel {
   let isRunning = false;
   let isShown = false;
   let asked = 0;
+  let waiting: ReturnType<typeof setTimeout> | undefined;
 
   const attempt = (work: () => Promise<void>) => {
     work().catch((fault: unknown) => page.trouble(faultText(fault)));
@@ -39,6 +43,12 @@ export function planPanel(page: Page, redraw: () => void): Panel {
     start = answer;
     if (lacksColumns(wordsFor(page, start), start)) unfolded.add("columns");
     redraw();
+  }
+
+  /** After the cells that changed were sent, which come first. */
+  function loadSoon(): void {
+    clearTimeout(waiting);
+    waiting = setTimeout(() => attempt(load), restAfterEdit);
   }
 
   function set(change: Partial<PlanWords>): void {
@@ -168,7 +178,8 @@ export function planPanel(page: Page, redraw: () => void): Panel {
       isShown = false;
     },
     changed(change) {
-      if (change === "state" || change === "sheet") attempt(load);
+      if (change === "sheet") attempt(load);
+      else if (change === "state") loadSoon();
       else if (isShown && change === "marked") redraw();
     },
   };
