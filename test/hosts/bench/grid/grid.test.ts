@@ -637,7 +637,7 @@ describe("picking cells for a formula", () => {
     await page.evaluate(() => {
       const input = document.createElement("input");
       input.ariaLabel = "Formula";
-      gridStandIn.grid.openCell({ sheet: 0, row: 2, column: 8 }).append(input);
+      gridStandIn.grid.openCell({ sheet: 0, row: 2, column: 3 }).append(input);
       input.focus();
       gridStandIn.pickFor(true);
     });
