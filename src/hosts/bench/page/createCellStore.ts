@@ -22,7 +22,10 @@ export interface FilledCellStore extends CellStore {
 export function createCellStore(bench: Remote<Bench>): FilledCellStore {
   const blocks = new Map<string, Block>();
   const onTheWay = new Set<string>();
+  /** Blocks that were looked at since the last state: most probably those in view. */
+  const looked = new Map<string, { readonly down: number; readonly right: number }>();
   const listeners = new Set<() => void>();
+  let latest = "";
   let state: BookState | undefined;
   let sheet = 0;
   let view = 0;
@@ -39,6 +42,11 @@ export function createCellStore(bench: Remote<Bench>): FilledCellStore {
     const [down, right] = [Math.floor(viewRow / blockRows), Math.floor(column / blockColumns)];
     const key = `${sheet}:${down}:${right}`;
     const block = blocks.get(key);
+    if (key !== latest) {
+      latest = key;
+      looked.delete(key);
+      looked.set(key, { down, right });
+    }
     if (block?.version !== state?.version || block?.view !== view) fetchBlock(key, down, right);
     return block;
   }
@@ -107,6 +115,12 @@ export function createCellStore(bench: Remote<Bench>): FilledCellStore {
       }
       state = next;
       sheet = shown;
+      // Asked for before others ask the worker for anything, and before the next frame.
+      for (const [block, { down, right }] of [...looked].reverse().slice(0, mostOnTheWay)) {
+        if (block.startsWith(`${sheet}:`)) fetchBlock(block, down, right);
+      }
+      looked.clear();
+      latest = "";
       if (!isFiltered()) visible = undefined;
       else fetchVisible(view);
     },
