@@ -9,10 +9,9 @@ const page = new URL("src/hosts/bench/page/", root);
 
 /** Every file of the page's folder that is not a script, under its path there. */
 export async function benchFiles(): Promise<ReadonlyMap<string, string | Buffer>> {
-  const plots = await readFile(new URL("node_modules/uplot/dist/uPlot.min.css", root), "utf8");
   return new Map<string, string | Buffer>([
     ["index.html", benchPage(await readFile(new URL("index.html", page), "utf8"))],
-    ["bench.css", `${plots.trim()}\n\n${await styleSheet(page)}`],
+    ["bench.css", await styleSheet(page)],
     ["manifest.webmanifest", webManifest(packageData.version)],
     ["icons/barycell.svg", await readFile(new URL("manifest/icons/barycell.svg", root))],
     ["icons/icon-192.png", await readFile(new URL("manifest/icons/icon-192.png", root))],
