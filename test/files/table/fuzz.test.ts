@@ -138,7 +138,7 @@ function expectGood({ header, columns, rows, notes, unitsRow, findings }: TableF
 }
 
 /** Mutants a form: enough that each kind of change meets each part of the file. */
-const mutants = 3000;
+const mutants = 10_000;
 
 test.each(Object.entries(files))("a damaged file is a table or is refused in a sentence: %s", (_, text) => {
   const bytes = new TextEncoder().encode(text);
