@@ -9,6 +9,7 @@ import { headerText } from "../table/headerText.js";
 import { type RecognisedColumn, recogniseColumn } from "../table/recogniseColumn.js";
 import { nameColumn, rowName } from "../table/rowNames.js";
 import { ownersOfSigmas } from "../table/sigmaColumns.js";
+import type { PlannedColumn, TablePlan } from "../table/tableOf.js";
 
 /** A column of a table in a sheet. */
 export interface BookColumn {
@@ -40,7 +41,7 @@ export function bookTable(book: Book, sheet: number): BookTable | undefined {
   if (!plan) return undefined;
   const { firstRow } = plan;
   const rows = Math.max(0, usedRows(book, sheet) - firstRow);
-  const headed = plan.columns.map(({ index, header, unitCell }) => {
+  const headed = withSpills(book, sheet, plan).map(({ index, header, unitCell }) => {
     const state = columnAt(book, sheet, index);
     const claim = spansIn(state.claims, firstRow, firstRow + rows)[0];
     const filled = countRows(spansIn(state.runs, firstRow, firstRow + rows), firstRow, firstRow + rows);
@@ -72,6 +73,28 @@ export function bookTable(book: Book, sheet: number): BookTable | undefined {
   );
   return { book, sheet, firstRow, rows, columns };
 }
+
+/** With the uncertainties that formulas fill beside themselves under no header. */
+function withSpills(book: Book, sheet: number, { columns, firstRow }: TablePlan): readonly HeadedColumn[] {
+  const headed = new Set(columns.map(({ index }) => index));
+  return columns.flatMap((own): HeadedColumn[] => {
+    const { name, unit } = recogniseColumn(own.header, own.unitCell);
+    const spills = [1, 2].filter((beside) => {
+      const [claim] = spansIn(columnAt(book, sheet, own.index + beside).claims, firstRow, usedRows(book, sheet));
+      return claim?.column === own.index && !headed.has(own.index + beside);
+    });
+    const ofUnit = unit === undefined ? "" : ` [${unit.text}]`;
+    return [
+      own,
+      ...spills.map((beside) => ({
+        index: own.index + beside,
+        header: `${name}${beside === 1 ? "" : " lower"} sigma${ofUnit}`,
+      })),
+    ];
+  });
+}
+
+type HeadedColumn = Pick<PlannedColumn, "index" | "header" | "unitCell">;
 
 function countRows(spans: readonly { readonly from: number; readonly to: number }[], from: number, to: number): number {
   return spans.reduce((sum, span) => sum + Math.min(to, span.to) - Math.max(from, span.from), 0);

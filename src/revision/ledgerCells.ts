@@ -1,11 +1,20 @@
 import type { Cell } from "../call/cell.js";
 import { changeCells, changeHeaders } from "../table/changeCells.js";
-import type { Ledger } from "./ledger.js";
-import { cellOfKept, ledgerEntries } from "./ledgerEntry.js";
+import type { Ledger, RevisionSource } from "./ledger.js";
+import { cellOfKept, type LedgerEntry, ledgerEntries } from "./ledgerEntry.js";
 
 /** A ledger as the cells of a sheet, numbers in full: headers, then the most important changes first. */
 export function ledgerCells(ledger: Ledger, most = Number.POSITIVE_INFINITY): readonly (readonly Cell[])[] {
   const names = ledger.inputs.map(({ name }) => name);
+  return entryCells(names, ledger.source, ledgerEntries(ledger, most));
+}
+
+/** The same of entries that were kept; `names` are those of the inputs. */
+export function entryCells(
+  names: readonly string[],
+  { date, file, sha256 }: RevisionSource,
+  entries: readonly LedgerEntry[],
+): readonly (readonly Cell[])[] {
   const head = [
     ...changeHeaders,
     "Moved most by",
@@ -15,8 +24,7 @@ export function ledgerCells(ledger: Ledger, most = Number.POSITIVE_INFINITY): re
     "Date",
     "SHA-256",
   ];
-  const { date, file, sha256 } = ledger.source;
-  const rows = ledgerEntries(ledger, most).map((entry): Cell[] => [
+  const rows = entries.map((entry): Cell[] => [
     ...changeCells({
       key: entry.key,
       header: entry.header,

@@ -1,6 +1,7 @@
 import { CellError } from "../call/cell.js";
 import type { Crossing, Ledger, LedgerColumn, WatchedCondition } from "./ledger.js";
 import { cellOfKept, type KeptCell, type LedgerEntry, ledgerEntries } from "./ledgerEntry.js";
+import type { KeptCrossing, LedgerRecord } from "./ledgerRecord.js";
 import { counted, short } from "./words.js";
 
 /**
@@ -29,6 +30,32 @@ export function* ledgerMarkdown(ledger: Ledger, most = 20, matching: readonly st
   const all = derived.reduce((sum, { changed }) => sum + changed, 0);
   yield* section(
     entries.length < all ? `The ${entries.length} most important of ${counted(all, "change")}` : "Changes",
+    ["Row", "Column", "Before", "After", "Change", "%", "sigma", "Moved most by", "Parts"],
+    entries.map(entryLine),
+  );
+}
+
+/** The same of a ledger that was kept, without what only both states of its table can tell. */
+export function* recordMarkdown(
+  { source, sheet, inputs, unshared, conditions, entries }: LedgerRecord,
+  changes: number,
+): Generator<string> {
+  yield "# Revision\n\n";
+  yield `${code(source.file)}, ${source.date}, SHA-256 ${code(source.sha256)}, into ${code(sheet)}.\n`;
+  yield* section(
+    "Revised",
+    ["Column", "Cells"],
+    inputs.map(({ input, cells }) => [input, cells.toLocaleString("en")]),
+  );
+  if (unshared !== null) yield `\nChanges are not shared out among inputs, because ${unshared}.\n`;
+  for (const { condition, before, after, gained, lost } of conditions) {
+    const lines = (kind: string, crossings: readonly KeptCrossing[]) =>
+      crossings.map((own) => [kind, own.key, shown(own.before), shown(own.after)]);
+    const title = `${condition}: ${counted(before, "row")} before, ${after.toLocaleString("en")} now`;
+    yield* section(title, ["", "Row", "Before", "After"], [...lines("gained", gained), ...lines("lost", lost)]);
+  }
+  yield* section(
+    entries.length < changes ? `The ${entries.length} most important of ${counted(changes, "change")}` : "Changes",
     ["Row", "Column", "Before", "After", "Change", "%", "sigma", "Moved most by", "Parts"],
     entries.map(entryLine),
   );

@@ -32,8 +32,9 @@ export interface KeptCrossing {
   readonly after: KeptCell;
 }
 
-export function ledgerRecord(ledger: Ledger): LedgerRecord {
-  return { ...headOf(ledger), entries: [...allEntries(ledger)] };
+/** With all entries, or with those given. */
+export function ledgerRecord(ledger: Ledger, entries: readonly LedgerEntry[] = [...allEntries(ledger)]): LedgerRecord {
+  return { ...headOf(ledger), entries };
 }
 
 /** The text of a ledger's record in pieces, an entry a line, so that a large one is never held whole. */

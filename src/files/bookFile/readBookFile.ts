@@ -4,7 +4,7 @@ import { readFormula } from "../../sheet/formula/readFormula.js";
 import { mostColumns, mostRows } from "../../sheet/limits.js";
 import type { ColumnPresentation, SheetPresentation } from "../../sheet/presentation/presentation.js";
 import { FileProblem } from "../fileProblem.js";
-import type { BookDocument, KeptMark } from "./bookDocument.js";
+import type { BookDocument, KeptLedger, KeptMark, KeptRevisions } from "./bookDocument.js";
 import { anObject, ifThere, list, member, oneOf, type Part, text, unlike, wholeNumber } from "./expectation.js";
 import { type PackedCells, packCells } from "./packedCells.js";
 import { type PackedRun, unpackColumn } from "./packedColumn.js";
@@ -16,6 +16,8 @@ const mostSheets = 1000;
 const mostNames = 100_000;
 const longestFormula = 8192;
 const longestName = 255;
+const longestLines = 1_000_000;
+const mostLedgers = 1000;
 
 /** Cells that formulas of one book may fill: a line of a file can ask for a million. */
 const mostFormulaCells = 50_000_000;
@@ -42,12 +44,14 @@ export function readBookFile(source: string, functions: Functions): BookDocument
     sheets.map((sheet) => member(sheet, "name")),
     "another name for each sheet",
   );
+  const revisions = ifThere(member(whole, "revisions"), readRevisions);
   const book: Book = { sheets: read.map(({ sheet }) => sheet), names: readNames(member(whole, "names"), functions) };
   return {
     title: text(member(whole, "title"), longestName),
     book,
     presentation: read.map(({ presentation }) => presentation),
     marks: list(member(whole, "marks"), mostNames).map(readMark),
+    ...(revisions && { revisions }),
     history: list(member(whole, "history"), mostNames).map((label) => text(label, longestText)),
   };
 }
@@ -169,4 +173,22 @@ function readMark(part: Part): KeptMark {
     sheet: text(member(mark, "sheet"), longestName),
     table: { keys, columns },
   };
+}
+
+function readRevisions(part: Part): KeptRevisions {
+  const revisions = anObject(part);
+  return {
+    aliases: text(member(revisions, "aliases"), longestLines),
+    conditions: text(member(revisions, "conditions"), longestLines),
+    ledgers: list(member(revisions, "ledgers"), mostLedgers).map(readLedger),
+  };
+}
+
+/** Whatever a later version adds to a ledger is kept. */
+function readLedger(part: Part): KeptLedger {
+  const ledger = anObject(part);
+  oneOf(member(ledger, "kind"), ["barycell-ledger"]);
+  wholeNumber(member(ledger, "version"), 1, 1_000_000);
+  for (const entry of list(member(ledger, "entries"), mostRows)) anObject(entry);
+  return ledger.value as KeptLedger;
 }

@@ -3,7 +3,7 @@ import type { SheetColumn } from "../../sheet/book/book.js";
 import { cellsOfChunks } from "../../sheet/book/cells.js";
 import { formulaText } from "../../sheet/formula/formula.js";
 import { type ColumnPresentation, sheetPresentation } from "../../sheet/presentation/presentation.js";
-import type { BookDocument, KeptMark } from "./bookDocument.js";
+import type { BookDocument, KeptMark, KeptRevisions } from "./bookDocument.js";
 import { type PackedCells, type PackedOther, packCells } from "./packedCells.js";
 import { literalPieces, packPiece, packRuns } from "./packedColumn.js";
 
@@ -21,13 +21,21 @@ export const bookFormatVersion = 1;
  *       "names": [{ "name": text, "refersTo": "=Assumptions!$B$2" }],
  *       "marks": [{ "id", "name", "sheet": text, "at": milliseconds since 1970, "keys": [text, ...],
  *         "columns": [{ "header": text, "cells": [cell, ...], "sigma": [cell, ...] }] }],
+ *       "revisions": { "aliases": text, "conditions": text, "ledgers": [{ "kind": "barycell-ledger", "version": 1, ... }] },
  *       "history": [text, ...] }
  *
  * Rows count from 1, as in addresses, `to` included; a formula is that of its first row and moves along below. A cell is
  * a number, a text, true, false, null where it is blank, { "number": "-0" }, or
  * { "error": "#N/A", "topic": text, "message": text }. What formulas give is not kept: it is calculated anew.
  */
-export function* writeBookFile({ title, book, presentation, marks, history }: BookDocument): Generator<string, void> {
+export function* writeBookFile({
+  title,
+  book,
+  presentation,
+  marks,
+  revisions,
+  history,
+}: BookDocument): Generator<string, void> {
   yield `{"format":${JSON.stringify(bookFormat)},"version":${bookFormatVersion},"title":${JSON.stringify(title)},\n"sheets":[`;
   for (const [index, { name, columns }] of book.sheets.entries()) {
     const seen = sheetPresentation(presentation, index);
@@ -42,7 +50,9 @@ export function* writeBookFile({ title, book, presentation, marks, history }: Bo
   const names = book.names.map((each) => ({ name: each.name, refersTo: formulaText(each.formula, 0, 0) }));
   yield `],\n"names":${JSON.stringify(names)},\n"marks":[`;
   for (const [index, mark] of marks.entries()) yield `${index > 0 ? "," : ""}\n${markText(mark)}`;
-  yield `],\n"history":${JSON.stringify(history)}}\n`;
+  yield "],\n";
+  if (revisions) yield* revisionsText(revisions);
+  yield `"history":${JSON.stringify(history)}}\n`;
 }
 
 function* columnText(
@@ -70,6 +80,12 @@ function markText({ id, name, at, sheet, table }: KeptMark): string {
   );
   const head = JSON.stringify({ id, name, at, sheet, keys: table.keys }).slice(0, -1);
   return `${head},"columns":[${columns.join(",\n")}]}`;
+}
+
+function* revisionsText({ aliases, conditions, ledgers }: KeptRevisions): Generator<string> {
+  yield `"revisions":{"aliases":${JSON.stringify(aliases)},"conditions":${JSON.stringify(conditions)},"ledgers":[`;
+  for (const [index, ledger] of ledgers.entries()) yield `${index > 0 ? "," : ""}\n${JSON.stringify(ledger)}`;
+  yield "]},\n";
 }
 
 function wholeText(column: Column): string {

@@ -11,6 +11,7 @@ import { comparePanel } from "./panels/compare/comparePanel.js";
 import { findPanel } from "./panels/find/findPanel.js";
 import { historyPanel } from "./panels/history/historyPanel.js";
 import { planPanel } from "./panels/plan/planPanel.js";
+import { revisePanel } from "./panels/revise/revisePanel.js";
 import { whyPanel } from "./panels/why/whyPanel.js";
 import { buildSkeleton, type Skeleton } from "./shell/skeleton.js";
 import { startShell } from "./shell/startShell.js";
@@ -19,7 +20,7 @@ import { startShell } from "./shell/startShell.js";
 const mostBreakdowns = 3;
 const breakdownSpan = 20_000;
 
-const createPanels = [whyPanel, checkPanel, planPanel, comparePanel, historyPanel, findPanel];
+const createPanels = [whyPanel, checkPanel, planPanel, revisePanel, comparePanel, historyPanel, findPanel];
 
 /** Starts the worker, waits for the book, and builds the page around it. */
 export async function startBench(root: HTMLElement, createGrid: CreateGrid, createEditor: CreateEditor): Promise<void> {

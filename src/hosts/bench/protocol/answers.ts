@@ -175,6 +175,14 @@ export interface BookEntry {
   readonly rows: number;
 }
 
+export interface ExportedFile {
+  readonly name: string;
+  readonly type: string;
+  readonly bytes: Uint8Array;
+  /** What of the book the file does not hold, one sentence each. */
+  readonly told: readonly string[];
+}
+
 /** What came of opening a file. */
 export type Opened =
   | { readonly is: "opened"; readonly said: string; readonly findings: readonly string[] }

@@ -6,6 +6,7 @@ import type {
   CompletedText,
   CurveAnswer,
   Distribution,
+  ExportedFile,
   FormulaCheck,
   FunctionEntry,
   KeptDraft,
@@ -19,6 +20,17 @@ import type {
 import type { BookState } from "./bookState.js";
 import type { PlanAnswer, PlanHours, PlanNight, PlanStart, PlanVisibility, PlanWords } from "./plan.js";
 import type { Action, FilterCondition, FindOptions, Outcome } from "./request.js";
+import type {
+  LedgerForm,
+  LedgerSummary,
+  LedgerView,
+  ReviseAnswer,
+  Revised,
+  ReviseWords,
+  RevisionMoves,
+  RevisionTexts,
+  WrittenLedger,
+} from "./revise.js";
 import type { ShownWindow } from "./shown.js";
 
 /**
@@ -101,14 +113,20 @@ export interface Bench {
   planVisibility(sheet: number, rows: readonly number[], words: PlanWords): PlanVisibility;
   /** `date` is that of the evening; empty for the first night of the plan. */
   planNight(sheet: number, rows: readonly number[], words: PlanWords, date: string): PlanNight;
-}
 
-export interface ExportedFile {
-  readonly name: string;
-  readonly type: string;
-  readonly bytes: Uint8Array;
-  /** What of the book the file does not hold, one sentence each. */
-  readonly told: readonly string[];
+  revisionTexts(): RevisionTexts;
+  /** Kept with the book. */
+  keepRevisionTexts(texts: RevisionTexts): void;
+  /** What the values of a file would change in the table of a sheet; `cancel` ends it. */
+  reviseFrom(file: File, sheet: number, words: ReviseWords): ReviseAnswer;
+  /** Does what was shown last, as one step. */
+  applyRevision(): Revised;
+  /** Of the book as it is: revisions that are undone have none. The latest first. */
+  ledgers(): readonly LedgerSummary[];
+  ledger(id: string, most: number): LedgerView | undefined;
+  writeLedger(id: string, form: LedgerForm): WrittenLedger;
+  /** Columns by their headers; the latest ledger where none has that id. */
+  revisionMoves(id: string, x: string, y: string): RevisionMoves;
 }
 
 export type ExportFormat = "csv" | "tsv" | "ecsv" | "votable" | "xlsx" | "book";

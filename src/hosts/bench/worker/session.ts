@@ -1,3 +1,5 @@
+import type { KeptLedger } from "../../../files/bookFile/bookDocument.js";
+import type { LedgerRecord } from "../../../revision/ledgerRecord.js";
 import type { Area, Book } from "../../../sheet/book/book.js";
 import type { History, Version } from "../../../sheet/history/history.js";
 import { presentVersion } from "../../../sheet/history/history.js";
@@ -10,6 +12,8 @@ export interface BookVersion extends Version {
   readonly presentation: Presentation;
   /** Cells stand elsewhere than in the version before: the two cannot be compared place by place. */
   readonly moved?: true;
+  /** What a revision moved, where this version came of one. */
+  readonly ledger?: BookLedger;
 }
 
 /** The derived values of one sheet as they stood at one moment; kept with the book. */
@@ -21,6 +25,21 @@ export interface SessionMark {
   /** Name of the sheet. */
   readonly sheet: string;
   readonly table: ComparedTable;
+}
+
+/** The ledger of a revision, bounded, as it is kept with the book. */
+export interface BookLedger extends LedgerRecord {
+  /** How many cells of the sheet changed in all, of which the most important have entries. */
+  readonly changes: number;
+  /** Header of the column that named the rows. */
+  readonly key: string;
+}
+
+/** What revisions are asked with, and the ledgers that came with the book when it was opened. */
+export interface SessionRevisions {
+  readonly aliases: string;
+  readonly conditions: string;
+  readonly ledgers: readonly KeptLedger[];
 }
 
 /** The conditions set on a sheet and the rows they leave. */
@@ -53,6 +72,7 @@ export interface Session {
   readonly filters: readonly (SheetFilter | undefined)[];
   /** The latest first. */
   readonly marks: readonly SessionMark[];
+  readonly revisions: SessionRevisions;
   readonly flash: LastFlash | undefined;
 }
 
@@ -63,16 +83,19 @@ export interface OpenedBook {
   readonly book: Book;
   readonly presentation?: Presentation;
   readonly marks?: readonly SessionMark[];
+  readonly revisions?: SessionRevisions | undefined;
   /** What the first version is called in the history. */
   readonly name?: string;
   /** The version number to begin with, so that numbers go on growing over all books of a page. */
   readonly version?: number;
 }
 
+const noRevisions: SessionRevisions = { aliases: "", conditions: "", ledgers: [] };
+
 export function openSession({ id, title, book, ...more }: OpenedBook): Session {
-  const { presentation = [], marks = [], name = "opened", version = 1 } = more;
+  const { presentation = [], marks = [], revisions = noRevisions, name = "opened", version = 1 } = more;
   const history: History<BookVersion> = { versions: [{ name, book, presentation }], present: 0 };
-  return { id, title, version, history, filters: [], marks, flash: undefined };
+  return { id, title, version, history, filters: [], marks, revisions, flash: undefined };
 }
 
 export function bookOfSession({ history }: Session): Book {

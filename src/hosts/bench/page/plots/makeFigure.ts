@@ -4,6 +4,7 @@ import { columnsFigure } from "./figures/columnsFigure.js";
 import { dateFigure, phaseFigure } from "./figures/curveFigure.js";
 import type { Made } from "./made.js";
 import { firstNight, makePlanFigure } from "./makePlanFigure.js";
+import { makeRevisionFigure } from "./makeRevisionFigure.js";
 import type { PlotSettings } from "./plotSettings.js";
 
 const orbitsShown = 4;
@@ -15,6 +16,8 @@ export async function makeFigure(page: Page, settings: PlotSettings): Promise<Ma
       return columnsPlot(page, settings);
     case "signal":
       return signalPlot(page, settings);
+    case "revision":
+      return makeRevisionFigure(page, settings);
     case "hours":
     case "visibility":
     case "night":

@@ -1,4 +1,4 @@
-export const plotKinds = ["columns", "signal", "phase", "dates", "hours", "visibility", "night"] as const;
+export const plotKinds = ["columns", "signal", "phase", "dates", "hours", "visibility", "night", "revision"] as const;
 export type PlotKind = (typeof plotKinds)[number];
 
 /** Kinds that are about the selected or the marked rows. */
@@ -19,6 +19,8 @@ export interface PlotSettings {
   readonly level: string;
   /** The evening's date of the night that is seen, as typed; empty for the first of the plan. */
   readonly night: string;
+  /** The id of a ledger; empty for the latest. */
+  readonly ledger: string;
 }
 
 export const usualSettings: PlotSettings = {
@@ -31,6 +33,7 @@ export const usualSettings: PlotSettings = {
   errors: true,
   level: "",
   night: "",
+  ledger: "",
 };
 
 const keptName = "barycell.plot";
@@ -48,6 +51,18 @@ export function readSettings(): PlotSettings {
   } catch {
     return usualSettings;
   }
+}
+
+const listeners = new Set<(change: Partial<PlotSettings>) => void>();
+
+/** Another part of the page asks for a plot, before or after the first one is drawn. */
+export function askForPlot(change: Partial<PlotSettings>): void {
+  keepSettings({ ...readSettings(), ...change });
+  for (const listener of listeners) listener(change);
+}
+
+export function onPlotAsked(listener: (change: Partial<PlotSettings>) => void): void {
+  listeners.add(listener);
 }
 
 export function keepSettings(settings: PlotSettings): void {

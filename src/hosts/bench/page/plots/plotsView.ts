@@ -11,6 +11,7 @@ const kindWords: Readonly<Record<PlotKind, string>> = {
   hours: "Hours against targets",
   visibility: "Dark hours of the selected rows over the plan's nights",
   night: "One night of the selected rows",
+  revision: "What a revision moved",
 };
 
 export interface PlotActions {
@@ -38,13 +39,14 @@ export function plotsView(
 ): TemplateResult {
   const { kind } = settings;
   const isColumns = kind === "columns";
+  const hasAxes = isColumns || kind === "revision";
   const isOfPlan = kindsOfPlan.includes(kind);
   const hasPoints = isColumns || kind === "signal";
   const marked = page.marked().size;
   return html`<div class="plot-controls">
       ${choice("plot-kind", "Plot", Object.entries(kindWords), kind, (value) => actions.set({ kind: value as PlotKind }))}
       ${
-        isColumns
+        hasAxes
           ? html`${columnChoice(page, "plot-y", "of", settings.y, (y) => actions.set({ y }))}
             ${columnChoice(page, "plot-x", "against", settings.x, (x) => actions.set({ x }))}
             ${box("log across", settings.xLog, (xLog) => actions.set({ xLog }))}

@@ -10,7 +10,7 @@ import type { Figure } from "./draw/figure.js";
 import { paletteOf } from "./draw/palette.js";
 import { svgSurface } from "./draw/svgSurface.js";
 import { makeFigure } from "./makeFigure.js";
-import { keepSettings, kindsOfPlan, kindsOfRows, readSettings } from "./plotSettings.js";
+import { keepSettings, kindsOfPlan, kindsOfRows, onPlotAsked, readSettings } from "./plotSettings.js";
 import { plotsView } from "./plotsView.js";
 
 /** [ms] */
@@ -179,6 +179,7 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
     }
   });
 
+  onPlotAsked(set);
   onWords(() => {
     if (kindsOfPlan.includes(settings.kind)) void make();
   });

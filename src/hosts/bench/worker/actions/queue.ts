@@ -66,7 +66,9 @@ export function actions(holder: SessionHolder): ActionQueue {
     // The book was closed, or the analyst said stop: what was begun is dropped whole.
     if (book === undefined || now.id !== start.id) return { is: "cancelled" };
     const presentation = plan.presentation ?? presentationOfSession(start);
-    holder.replace(recorded(now, { name, book, presentation, ...(plan.moved ? { moved: true } : {}) }, plan));
+    const ledger = plan.ledger?.(before, book);
+    const version = { name, book, presentation, ...(plan.moved && { moved: plan.moved }), ...(ledger && { ledger }) };
+    holder.replace(recorded(now, version, plan));
     const { select } = plan;
     const said = plan.said ?? (plan.moved ? newErrors(before, book) : undefined);
     return { is: "done", ...(select ? { select } : {}), ...(said === undefined ? {} : { said }) };

@@ -2,6 +2,7 @@ import type { BookDocument } from "../../../../files/bookFile/bookDocument.js";
 import type { KeptDraft } from "../../protocol/answers.js";
 import type { BenchEvent } from "../../protocol/bench.js";
 import type { BookState, SavedState } from "../../protocol/bookState.js";
+import { keptRevisions } from "../revise/keptRevisions.js";
 import { bookOfSession, openSession, presentationOfSession, type Session } from "../session.js";
 import type { SessionHolder } from "../sessionHolder.js";
 import { stateOf } from "../state/stateOf.js";
@@ -143,11 +144,13 @@ async function isStored(database: Database | undefined, id: string): Promise<boo
 
 function documentOf({ session, past }: OnDesk): BookDocument {
   const { versions, present } = session.history;
+  const revisions = keptRevisions(session);
   return {
     title: session.title,
     book: bookOfSession(session),
     presentation: presentationOfSession(session),
     marks: session.marks,
+    ...(revisions && { revisions }),
     history: [...past, ...versions.slice(1, present + 1).map(({ name }) => name)],
   };
 }
@@ -158,6 +161,7 @@ function isSameToKeep(before: Session, after: Session): boolean {
     bookOfSession(before) === bookOfSession(after) &&
     presentationOfSession(before) === presentationOfSession(after) &&
     before.marks === after.marks &&
+    before.revisions === after.revisions &&
     before.title === after.title
   );
 }

@@ -8,7 +8,8 @@ import { writtenTable } from "../../../../files/table/writtenColumn.js";
 import { writeVotable } from "../../../../files/votable/writeVotable.js";
 import { writeWorkbook } from "../../../../files/xlsx/writeWorkbook.js";
 import { workbookOfPresentation } from "../../../../sheet/presentation/workbookPresentation.js";
-import type { ExportedFile, ExportFormat } from "../../protocol/bench.js";
+import type { ExportedFile } from "../../protocol/answers.js";
+import type { ExportFormat } from "../../protocol/bench.js";
 import { describedSheet, valuesSentences } from "./describedSheet.js";
 
 export interface ExportWatch {
@@ -56,9 +57,11 @@ const exporters: Readonly<Record<ExportFormat, Exporter>> = {
   xlsx: {
     ending: "xlsx",
     type: "application/vnd.openxmlformats-officedocument.spreadsheetml.sheet",
-    async write({ book, presentation, marks }, _, watch) {
+    async write({ book, presentation, marks, revisions }, _, watch) {
       const bytes = await writeWorkbook(workbookOfPresentation(book, presentation), watch);
-      const told = marks.length > 0 ? ["Marks are kept in the Barycell book alone, not in a workbook."] : [];
+      const told = [];
+      if (marks.length > 0) told.push("Marks are kept in the Barycell book alone, not in a workbook.");
+      if (revisions) told.push("What belongs to revisions is kept in the Barycell book alone, not in a workbook.");
       return { content: bytes!, told };
     },
   },

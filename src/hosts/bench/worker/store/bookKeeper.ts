@@ -46,7 +46,7 @@ export function createBookKeeper(
   let next = record?.next ?? 1;
 
   async function save(document: BookDocument, now: number): Promise<void> {
-    const { title, book, presentation, marks, history } = document;
+    const { title, book, presentation, marks, revisions, history } = document;
     const writes = new Map<number, Part>();
     const fresh: [object, Stored][] = [];
     const used = new Set<number>();
@@ -89,6 +89,12 @@ export function createBookKeeper(
       names: book.names.map(({ name, formula }) => ({ name, refersTo: formulaText(formula, 0, 0) })),
       presentation,
       marks: marks.map((mark) => keep(mark, "", () => [{ is: "mark", mark: packMark(mark) }, []])),
+      ...(revisions && {
+        revisions: {
+          ...revisions,
+          ledgers: revisions.ledgers.map((ledger) => keep(ledger, "", () => [{ is: "ledger", ledger }, []])),
+        },
+      }),
       history: history.slice(-mostLabels),
       next,
     };

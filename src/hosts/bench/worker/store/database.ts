@@ -1,5 +1,5 @@
 import { type DBSchema, type IDBPDatabase, openDB } from "idb";
-import type { KeptMark } from "../../../../files/bookFile/bookDocument.js";
+import type { KeptLedger, KeptMark, KeptRevisions } from "../../../../files/bookFile/bookDocument.js";
 import type { PackedCells } from "../../../../files/bookFile/packedCells.js";
 import type { PackedRun } from "../../../../files/bookFile/packedColumn.js";
 import type { Presentation } from "../../../../sheet/presentation/presentation.js";
@@ -19,6 +19,7 @@ export interface BookRecord {
   readonly names: readonly { readonly name: string; readonly refersTo: string }[];
   readonly presentation: Presentation;
   readonly marks: readonly number[];
+  readonly revisions?: Omit<KeptRevisions, "ledgers"> & { readonly ledgers: readonly number[] };
   readonly history: readonly string[];
   /** No part has this number or a higher one. */
   readonly next: number;
@@ -40,7 +41,8 @@ export interface PiecePlace {
 export type Part =
   | { readonly is: "cells"; readonly cells: readonly PackedCells[] }
   | { readonly is: "column"; readonly column: ColumnPart }
-  | { readonly is: "mark"; readonly mark: PackedMark };
+  | { readonly is: "mark"; readonly mark: PackedMark }
+  | { readonly is: "ledger"; readonly ledger: KeptLedger };
 
 export interface PackedMark extends Omit<KeptMark, "table"> {
   readonly keys: readonly string[];

@@ -43,7 +43,7 @@ export async function loadBook(database: Database, id: string, functions: Functi
     );
   const unpacked = (column: ColumnPart | undefined, index: number): SheetColumn =>
     column ? unpackColumn(stretchesOf(column), column.runs, index, functions) : emptyColumn;
-  const { title, names, presentation, marks, history } = record;
+  const { title, names, presentation, marks, revisions, history } = record;
   const document: BookDocument = {
     title,
     book: {
@@ -52,6 +52,12 @@ export async function loadBook(database: Database, id: string, functions: Functi
     },
     presentation,
     marks: marks.map((number) => unpackMark(part(record, parts, number, "mark").mark)),
+    ...(revisions && {
+      revisions: {
+        ...revisions,
+        ledgers: revisions.ledgers.map((number) => part(record, parts, number, "ledger").ledger),
+      },
+    }),
     history,
   };
   return { record, document, columns, parts: [...parts.keys()] };

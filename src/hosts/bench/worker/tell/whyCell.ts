@@ -3,6 +3,8 @@ import { canDraw } from "../../../../call/drawCall.js";
 import type { CellReading } from "../../../../call/readCell.js";
 import { type CallStory, isUnread, tellCall } from "../../../../call/tellCall.js";
 import { formulaMath } from "../../../../catalog/formulaMath.js";
+import { lastMovedBy } from "../../../../revision/lastMovedBy.js";
+import { cellOfKept } from "../../../../revision/ledgerEntry.js";
 import { addressText } from "../../../../sheet/book/address.js";
 import type { Book, Place } from "../../../../sheet/book/book.js";
 import { columnAt } from "../../../../sheet/book/book.js";
@@ -17,6 +19,7 @@ import { sameCell } from "../../../../sheet/history/changes.js";
 import { argumentsOf, definitionOf, type OwnNode, ownCallIn } from "../../../../sheet/tell/ownCall.js";
 import { areaAt, sceneAt } from "../../../../sheet/tell/sceneAt.js";
 import type { WhyCall, WhyCell, WhyInput } from "../../protocol/answers.js";
+import { ledgersOf } from "../revise/keptRevisions.js";
 import { bookOfSession, type Session } from "../session.js";
 import { columnStatesOf } from "../state/columnStates.js";
 import { windowOf } from "../view/windowOf.js";
@@ -40,7 +43,7 @@ export function whyCell(session: Session, place: Place): WhyCell {
     filledFrom: home && !samePlace(home.place, place) ? addressed(home.place) : undefined,
     call: told && whyCall(book, told, home.place),
     reads: home ? readsOf(book, home.formula, home.place) : [],
-    changedBy: changedBy(session, place),
+    changedBy: lastChange(session, place),
   };
 }
 
@@ -149,6 +152,18 @@ function readText({ value, upper, lower }: CellReading): string {
 function textOf(cell: Cell): string {
   if (cell instanceof CellError) return `${cell.code} ${cell.message}`;
   return cell === null ? "" : displayCell(cell, general);
+}
+
+/** What gave the cell its value: a step of this visit, or a revision whose ledger came with the book. */
+function lastChange(session: Session, place: Place): string | undefined {
+  const step = changedBy(session, place);
+  const book = bookOfSession(session);
+  const asked = { sheet: book.sheets[place.sheet]?.name ?? "", cell: addressText(place.row, place.column) };
+  const entry = lastMovedBy(ledgersOf(session), asked);
+  // What was typed since has another value.
+  if (!entry || !sameCell(cellOfKept(entry.after), cellOf(book, place))) return step;
+  const { file, date } = entry.source;
+  return `the revision ${file} of ${date.slice(0, 16).replace("T", " ")} UTC`;
 }
 
 /** The latest version that gave the cell the value it has; undefined where cells were moved about since. */
