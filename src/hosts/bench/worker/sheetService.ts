@@ -2,7 +2,7 @@ import type { Bench } from "../protocol/bench.js";
 import { actions } from "./actions/queue.js";
 import { formulaMethods } from "./formulas/formulaMethods.js";
 import { planMethods } from "./plan/planMethods.js";
-import { reviseMethods } from "./revise/reviseMethods.js";
+import { loadReviseMethods } from "./revise/loadReviseMethods.js";
 import type { Service } from "./service.js";
 import type { SessionHolder } from "./sessionHolder.js";
 import { tableMethods } from "./tables/tableMethods.js";
@@ -34,7 +34,7 @@ export type SheetMethods = Omit<
 export function sheetService(holder: SessionHolder): Service<SheetMethods> {
   const queue = actions(holder);
   const plans = planMethods(holder, queue);
-  const revisions = reviseMethods(holder, queue);
+  const revisions = loadReviseMethods(holder, queue);
   return {
     ...queue.methods,
     ...viewMethods(holder),

@@ -309,11 +309,14 @@ describe("kept with the book", () => {
 
   test("texts and ledgers come back from a book file; what they tell is the same", async () => {
     const open = await table();
-    open.service.keepRevisionTexts({ aliases: "Tiller = Tiller B", conditions: "Grown [solMass] >= 2.1 solMass" });
+    await open.service.keepRevisionTexts({
+      aliases: "Tiller = Tiller B",
+      conditions: "Grown [solMass] >= 2.1 solMass",
+    });
     const { id } = await applied(open, plain, { conditions: "Grown [solMass] >= 2.1 solMass" });
     const again = await reopened(open);
     expect([...changes(open.book(), again.book)]).toEqual([]);
-    expect(again.service.revisionTexts()).toEqual({
+    expect(await again.service.revisionTexts()).toEqual({
       aliases: "Tiller = Tiller B",
       conditions: "Grown [solMass] >= 2.1 solMass",
     });

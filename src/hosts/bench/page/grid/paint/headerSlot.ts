@@ -36,7 +36,8 @@ export function headerSlot(parent: HTMLElement, frozen: boolean): HeaderSlot {
 
   function write({ state, shown, sigmaOf }: HeaderFacts): void {
     const words = state?.name || (state?.unit ? "" : (shown?.text ?? ""));
-    name.textContent = words;
+    // An uncertainty that a formula filled beside its value needs no header of its own.
+    name.textContent = words || (sigmaOf === undefined ? "" : "±");
     sign.textContent = state?.derived ? "=" : "";
     sign.setAttribute("aria-hidden", "true");
     const heard = `${words}${state?.unit ? ` [${state.unit}]` : ""}${asideOf(state, sigmaOf)}`;
