@@ -45,29 +45,36 @@ function vocabularyOf(typing: Typing, text: string, caret: number): Vocabulary |
   return { functions: typing.functions(), names, columns, place, isArgument: callAt(text, caret) !== undefined };
 }
 
-function byName(typing: Typing, { state, pos }: CompletionContext): CompletionResult | null {
+/**
+ * Nothing to offer. Null would say so too, but a source that answers null while more is typed is not asked again by the
+ * library until the next key, and the list would stay as it was.
+ */
+function noOffers(from: number): CompletionResult {
+  return { from, options: [], filter: false };
+}
+
+function byName(typing: Typing, { state, pos }: CompletionContext): CompletionResult {
   const text = state.doc.toString();
   const vocabulary = vocabularyOf(typing, text, pos);
   const words = wordsBefore(text, pos);
-  if (!vocabulary || !words) return null;
+  if (!vocabulary || !words) return noOffers(pos);
   if (words.isReference) return resultOf(words.from, offersOfFunctions(words.word, vocabulary.functions));
   const whole = offersByName("", words.phrase, vocabulary);
   // Of several words the header is meant as a whole: "star m".
   if (words.phraseFrom < words.from && whole.length > 0) return resultOf(words.phraseFrom, whole);
-  return words.word === "" ? null : resultOf(words.from, offersByName(words.word, "", vocabulary));
+  return words.word === "" ? noOffers(pos) : resultOf(words.from, offersByName(words.word, "", vocabulary));
 }
 
-async function byQuestion(typing: Typing, context: CompletionContext): Promise<CompletionResult | null> {
+async function byQuestion(typing: Typing, context: CompletionContext): Promise<CompletionResult> {
   const text = context.state.doc.toString();
   const vocabulary = vocabularyOf(typing, text, context.pos);
   const asked = vocabulary && questionAt(typing, text, context.pos);
-  if (!asked || asked.words.length < 3) return null;
+  if (!asked || asked.words.length < 3) return noOffers(context.pos);
   const byItsName = offersByName(asked.words, "", vocabulary);
   // In an argument the column that was named is meant.
-  if (vocabulary.isArgument && byItsName.length > 0) return null;
+  if (vocabulary.isArgument && byItsName.length > 0) return noOffers(context.pos);
   // A worker that broke down is told of by the page itself; meanwhile nothing is offered.
   const found = await typing.page.bench.searchFunctions(asked.words).catch(() => []);
-  if (context.aborted) return null;
   const named = new Set(byItsName.map(({ insert }) => insert));
   const offers = offersByQuestion(found, vocabulary.functions).filter(({ insert }) => !named.has(insert));
   return resultOf(asked.from, offers.slice(0, mostAnswers), asked.prefix);
@@ -80,7 +87,7 @@ function questionAt(typing: Typing, text: string, caret: number) {
   return words && !words.isReference ? { words: words.phrase, from: words.phraseFrom, prefix: "" } : undefined;
 }
 
-function resultOf(from: number, offers: readonly Offer[], prefix = ""): CompletionResult | null {
+function resultOf(from: number, offers: readonly Offer[], prefix = ""): CompletionResult {
   const options = offers.map((offer) => ({
     label: offer.insert.replace(/\(\)?$/, ""),
     tells: offer.tells,
@@ -88,7 +95,7 @@ function resultOf(from: number, offers: readonly Offer[], prefix = ""): Completi
     apply: (view: EditorView, picked: Completion, start: number, end: number) =>
       put(view, picked, prefix + offer.insert, start, end),
   }));
-  return options.length > 0 ? { from, options, filter: false } : null;
+  return { from, options, filter: false };
 }
 
 function put(view: EditorView, picked: Completion, insert: string, from: number, end: number): void {
