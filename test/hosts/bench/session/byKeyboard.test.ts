@@ -4,11 +4,11 @@ import { afterAll, beforeAll, expect, test } from "vitest";
 import {
   downloaded,
   isDraftKept,
+  longSession,
   openSessionBrowser,
   patience,
   type SessionBrowser,
   tabOf,
-  wholeSession,
 } from "./openSession.js";
 import { movedSigmas, revisedAmplitudes, revisedMasses, targetsFile } from "./targets.js";
 
@@ -54,7 +54,7 @@ async function times(page: Page, count: number, key: string): Promise<void> {
   for (let pressed = 0; pressed < count; pressed++) await page.keyboard.press(key);
 }
 
-test("the same without a mouse", { timeout: wholeSession }, async () => {
+test("the same without a mouse", longSession, async () => {
   const tab = await session.visit();
   const { page } = tab;
   const { keyboard } = page;
@@ -162,7 +162,7 @@ test("the same without a mouse", { timeout: wholeSession }, async () => {
   await tab.context.close();
 });
 
-test("F6 goes through all parts of the page that are there, Shift+F6 back", { timeout: wholeSession }, async () => {
+test("F6 goes through all parts of the page that are there, Shift+F6 back", longSession, async () => {
   const tab = await session.visit();
   const { page } = tab;
   await page.keyboard.press("Alt+p");
@@ -181,30 +181,32 @@ test("F6 goes through all parts of the page that are there, Shift+F6 back", { ti
   await tab.context.close();
 });
 
-test("a command enters first what is being typed, and what cannot be entered keeps it from being done", {
-  timeout: wholeSession,
-}, async () => {
-  const tab = await session.visit();
-  const { page } = tab;
-  await tab.press("B2");
-  await page.keyboard.type("6.5");
-  await tab.menu("Rows", "Insert above");
-  await tab.shows("B3", "6.5");
-  await tab.shows("B2", "");
-  await tab.press("B3");
-  await page.keyboard.type("=1+");
-  await tab.menu("Rows", "Insert above");
-  await expect
-    .poll(() => page.locator(".editor-message").textContent(), { timeout: patience })
-    .toMatch(/^formula: =1\+/);
-  expect(await tab.line()).toBe("=1+");
-  await tab.shows("A3", "Lantern 1 b");
-  await page.keyboard.press("Escape");
-  await tab.press("B3");
-  await page.keyboard.press("Shift+F2");
-  await page.locator(".editor-line .cm-content:focus").waitFor();
-  await page.keyboard.type("4");
-  await page.keyboard.press("Enter");
-  await tab.shows("B3", "6.54");
-  await tab.context.close();
-});
+test(
+  "a command enters first what is being typed, and what cannot be entered keeps it from being done",
+  longSession,
+  async () => {
+    const tab = await session.visit();
+    const { page } = tab;
+    await tab.press("B2");
+    await page.keyboard.type("6.5");
+    await tab.menu("Rows", "Insert above");
+    await tab.shows("B3", "6.5");
+    await tab.shows("B2", "");
+    await tab.press("B3");
+    await page.keyboard.type("=1+");
+    await tab.menu("Rows", "Insert above");
+    await expect
+      .poll(() => page.locator(".editor-message").textContent(), { timeout: patience })
+      .toMatch(/^formula: =1\+/);
+    expect(await tab.line()).toBe("=1+");
+    await tab.shows("A3", "Lantern 1 b");
+    await page.keyboard.press("Escape");
+    await tab.press("B3");
+    await page.keyboard.press("Shift+F2");
+    await page.locator(".editor-line .cm-content:focus").waitFor();
+    await page.keyboard.type("4");
+    await page.keyboard.press("Enter");
+    await tab.shows("B3", "6.54");
+    await tab.context.close();
+  },
+);

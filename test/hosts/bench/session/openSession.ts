@@ -11,6 +11,9 @@ export const patience = 30_000;
 /** For a whole session on such a machine. */
 export const wholeSession = 300_000;
 
+/** A session of hundreds of key presses on a machine that is busy may lose one to the driver: it is tried once more. */
+export const longSession = { timeout: wholeSession, retry: 1 } as const;
+
 export interface SessionBrowser {
   readonly browser: Browser;
   readonly address: string;
