@@ -1,5 +1,6 @@
 import { render } from "lit-html";
 import { faultText } from "../createPage.js";
+import { download } from "../download.js";
 import type { Page } from "../page.js";
 import { onWords } from "../panels/plan/planWords.js";
 import { showOnly } from "../shell/showOnly.js";
@@ -190,13 +191,4 @@ export function startPlots(section: HTMLElement, page: Page): StartedPlots {
       if (wanted) void make();
     },
   };
-}
-
-function download(name: string, blob: Blob): void {
-  const address = URL.createObjectURL(blob);
-  const link = document.createElement("a");
-  link.href = address;
-  link.download = name;
-  link.click();
-  setTimeout(() => URL.revokeObjectURL(address), 60_000);
 }

@@ -1,5 +1,6 @@
 import type { ExportFormat } from "../../protocol/bench.js";
 import type { OwnedPage } from "../createPage.js";
+import { download } from "../download.js";
 
 export interface Files {
   /** Lets the analyst choose a file, then opens it as a book of its own. */
@@ -50,12 +51,7 @@ export function createFiles(root: HTMLElement, page: OwnedPage): Files {
     },
     async save(format) {
       const { name, type, bytes, told } = await page.bench.exportAs(format, page.sheet());
-      const address = URL.createObjectURL(new Blob([bytes as BlobPart], { type }));
-      const link = document.createElement("a");
-      link.href = address;
-      link.download = name;
-      link.click();
-      setTimeout(() => URL.revokeObjectURL(address), 60_000);
+      download(name, new Blob([bytes as BlobPart], { type }));
       page.announce(`Saved as ${name}.`);
       if (told.length > 0) page.trouble(`Saved as ${name}. ${told.join(" ")}`);
     },

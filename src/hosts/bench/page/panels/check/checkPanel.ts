@@ -1,9 +1,9 @@
 import { html, nothing, type TemplateResult } from "lit-html";
+import { columnLetters } from "../../../../../sheet/book/address.js";
 import type { ColumnReport, TableReport } from "../../../protocol/answers.js";
 import { faultText } from "../../createPage.js";
 import type { Page } from "../../page.js";
 import type { Panel } from "../../panel.js";
-import { columnLetter } from "../../shell/selected.js";
 import { goTo } from "../goTo.js";
 
 /** What was understood of each column of the sheet in view, and what to look at. */
@@ -84,7 +84,7 @@ function merged(errors: TableReport["errors"]): TableReport["errors"] {
 function columnView(page: Page, { column, header, understood, contents, findings }: ColumnReport): TemplateResult {
   return html`<li>
     <button type="button" class="panel-finding" @click=${() => goTo(page, { sheet: page.sheet(), row: 0, column })}>
-      <b>${columnLetter(column)}</b> <span>${header}</span>
+      <b>${columnLetters(column)}</b> <span>${header}</span>
     </button>
     <p class="soft">${understood} ${contents}</p>
     ${findings.map(

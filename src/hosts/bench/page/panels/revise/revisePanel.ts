@@ -10,6 +10,7 @@ import type {
   RevisionPreview,
 } from "../../../protocol/revise.js";
 import { faultText } from "../../createPage.js";
+import { download } from "../../download.js";
 import type { Page } from "../../page.js";
 import type { Panel } from "../../panel.js";
 import { askForPlot } from "../../plots/plotSettings.js";
@@ -154,12 +155,7 @@ export function revisePanel(page: Page, redraw: () => void, enterTyped: () => Pr
   }
 
   function save({ name, type, bytes, told }: ExportedFile): void {
-    const address = URL.createObjectURL(new Blob([bytes as BlobPart], { type }));
-    const link = document.createElement("a");
-    link.href = address;
-    link.download = name;
-    link.click();
-    setTimeout(() => URL.revokeObjectURL(address), 60_000);
+    download(name, new Blob([bytes as BlobPart], { type }));
     page.announce([`Saved as ${name}.`, ...told].join(" "));
   }
 
